@@ -157,7 +157,11 @@ export function readLabel(typed: string, context: LabelContext): LabelReading {
   if (excited.length === 0) {
     const others = every.filter((label) => label !== ground);
     const parents = blockParents(block, 1, context.ratio, parentCloseness);
-    const advice = others.map((label) => `${name}(${parents[every.indexOf(label)]!.letters.join(', ')}) or ${label}`);
+    const advice = others.map((label) => {
+      const { letters } = parents[every.indexOf(label)]!;
+      // Parents that lie together name no single level, so only the letter form is offered.
+      return letters.length === 1 ? `${name}(${letters[0]}) or ${label}` : label;
+    });
     return {
       ok: false, code: 'TERM_IS_GROUND', expected: `an excited level; ${ground} is the ground level`,
       mend: others.length > 0 ? `this is the ground level; for the transition write ${advice.join(', ')}` : 'this is the ground level: no transition ends on it',

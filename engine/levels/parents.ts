@@ -1,4 +1,5 @@
 import type { Block } from '../shell/blocks.ts';
+import type { Irrep } from '../shell/rotations.ts';
 import { between, clusters, eigen } from './solve.ts';
 
 /** Letters of free-ion terms by total orbital angular momentum L. */
@@ -9,6 +10,9 @@ export interface Parent {
   /** Term letter, with a prime for each lower term of the same letter and multiplicity: "F", "D'"; several where they coincide. */
   readonly letters: readonly string[];
 }
+
+/** How many levels of one irreducible representation a term of angular momentum L has, L up to 6: H holds T1 twice and I holds T2 twice. */
+const timesIn = (irrep: Irrep, momentum: number): number => ((irrep === 'T1' && momentum === 5) || (irrep === 'T2' && momentum === 6) ? 2 : 1);
 
 /**
  * Free-ion parents of the levels of one block, in ascending order of the levels.
@@ -32,12 +36,15 @@ export function blockParents(block: Block, racahB: number, racahC: number, close
     const inner = new Float64Array(count * count);
     for (let a = 0; a < count; a++)
       for (let b = 0; b < count; b++) inner[a * count + b] = between(block.angular, vectors, first + a, first + b);
-    // A term may hold the irreducible representation twice (H holds T1 twice): one letter each.
-    const momenta = new Set(eigen(inner, count).values.map((square) => Math.round((Math.sqrt(4 * Math.max(0, square) + 1) - 1) / 2)));
-    for (const momentum of momenta) {
-      const earlier = seen.get(momentum) ?? 0;
-      seen.set(momentum, earlier + 1);
-      terms.push({ letter: termLetters[momentum]! + "'".repeat(earlier), energy: values[first]! });
+    const momenta = eigen(inner, count).values.map((square) => Math.round((Math.sqrt(4 * Math.max(0, square) + 1) - 1) / 2));
+    for (const momentum of new Set(momenta)) {
+      // Two terms of one letter may coincide (2F and 2F' of d5 at C/B = 8): each has its own letter.
+      const termsAlike = momenta.filter((other) => other === momentum).length / timesIn(block.irrep, momentum);
+      for (let term = 0; term < termsAlike; term++) {
+        const earlier = seen.get(momentum) ?? 0;
+        seen.set(momentum, earlier + 1);
+        terms.push({ letter: termLetters[momentum]! + "'".repeat(earlier), energy: values[first]! });
+      }
     }
   }
   for (const value of values) {

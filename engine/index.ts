@@ -1,0 +1,65 @@
+// Ions and free-ion sets
+export { atomicLevelsSet, racahBOfTwoTerms } from './ions/atomicLevels.ts';
+export { barycentre } from './ions/barycentre.ts';
+export { fitTerms } from './ions/fitTerms.ts';
+export { freeIon, freeIonSets, freeIonsIn } from './ions/freeIon.ts';
+export { elementName, metalOf, metals } from './ions/metals.ts';
+export { ionName, readRomanNumeral, romanNumeral } from './ions/oxidation.ts';
+export { parseIon } from './ions/parseIon.ts';
+export { readIonLoosely } from './ions/readIonLoosely.ts';
+export { termEnergies, termFormulas } from './ions/termFormulas.ts';
+export { termSource, termTables } from './ions/terms.ts';
+export type { FreeIonSet } from './ions/freeIon.ts';
+export type { Metal } from './ions/metals.ts';
+export type { IonFault, ParsedIon } from './ions/parseIon.ts';
+export type { FreeIon, FreeIonSetName, Geometry, Ion } from './ions/types.ts';
+// The policy
+export { defaultPolicy, policyId } from './policy/policy.ts';
+export type { Estimate, FloorClass, Policy } from './policy/types.ts';
+// Measurements: what goes in
+export type { Band, BandKind, BandRole, Measurement } from './measurement/types.ts';
+export type { Range } from './quantity/range.ts';
+// Cautions and words
+export type { Caution } from './cautions/types.ts';
+export type { ParameterName, Standing, Verdict } from './words/types.ts';
+// Readings: what comes out
+export { readMeasurement } from './readings/read.ts';
+export type { Branch, Parameter, PredictedBand, RatioUsed, Reading, ReadingBand } from './readings/types.ts';
+// Levels of a d^n ion in a cubic field
+export { levels } from './levels/levels.ts';
+export type { FieldIon, FieldParameters, Gradient, Level } from './levels/levels.ts';
+export { degeneratePair, groundLabel, levelNames, parentOf, readLabel, shownLabel } from './levels/labels.ts';
+export type { LabelContext, LabelFaultCode, LabelReading } from './levels/labels.ts';
+export { groundCrossings, lowestLevel } from './levels/crossings.ts';
+export type { GroundCrossing } from './levels/crossings.ts';
+// Quantities
+export { toFraction, toKelvin, toWavenumber, wavelength, wavelengthShown, widthToWavenumber } from './quantity/convert.ts';
+export { parseQuantity } from './quantity/parse.ts';
+export { concise, conciseParts, conciseTwoSided, plain, significant, uncertaintyPlace } from './quantity/print.ts';
+export { parseRange, parseRanges } from './quantity/range.ts';
+export { plainCharacters } from './quantity/spelling.ts';
+export { unitShown, unitsFor } from './quantity/units.ts';
+export type { Wavenumber } from './quantity/convert.ts';
+export type { Allowance } from './quantity/parse.ts';
+export type { ConciseParts, PrintForm } from './quantity/print.ts';
+export type { Coverage, ParsedQuantity, Quantity, QuantityCode, QuantityFault, Unit, Wanted } from './quantity/types.ts';
+// Hazard cautions
+export { hazardCautions, hazardCodes, hazardFooter } from './cautions/hazards.ts';
+export type { HazardCaution, HazardSubject } from './cautions/hazards.ts';
+// Formulas
+export { complexCharge, donorCount } from './formula/checks.ts';
+export { compositionOf, containsComplex, elementCounts, entitiesOf, groupsOf } from './formula/composition.ts';
+export { elementSymbols } from './formula/elements.ts';
+export { formulaKeys } from './formula/keys.ts';
+export { additiveName } from './formula/names.ts';
+export { parseFormula } from './formula/parse.ts';
+export { chargeShown, formulaParts, plainFormula } from './formula/print.ts';
+export { normaliseQuery, searchScore } from './formula/search.ts';
+export { spokenFormula } from './formula/spoken.ts';
+export { spokenTerm, termParts } from './formula/terms.ts';
+export type { Abbreviation, Composition } from './formula/composition.ts';
+export type { FormulaKeys, SearchedComplex, SearchedLigand } from './formula/keys.ts';
+export type { LigandName } from './formula/names.ts';
+export type { FormulaOptions } from './formula/parse.ts';
+export type { NormalisedQuery, QueryWord } from './formula/search.ts';
+export type { Formula, FormulaCode, FormulaFault, FormulaNode, FormulaPart, TextPart } from './formula/types.ts';

@@ -1,0 +1,161 @@
+import type { Geometry } from '../ions/types.ts';
+import type { Gradient } from '../levels/levels.ts';
+import { fieldSign, levelLabel } from '../levels/levels.ts';
+import { solveBlock } from '../levels/solve.ts';
+import { shellBlocks } from '../shell/blocks.ts';
+import type { Block } from '../shell/blocks.ts';
+
+/**
+ * Levels of one ion at one C/B along the curve Delta = 20 rho sin t, B = rho cos t, C = (C/B) B, for rho = 1
+ * and 0 <= t <= 90 degrees.
+ *
+ * Energies are homogeneous of degree one, so this curve holds every ratio Delta/B and rho is a common scale.
+ * The factor 20 puts Delta/B = 20 at 45 degrees: unscaled, all of chemistry sits in the last degrees.
+ */
+
+/** Delta/B at t = 45 degrees. */
+export const angleScale = 20;
+
+/** Grid points over the quarter circle, a quarter of a degree apart. */
+export const gridPoints = 361;
+
+export const gridStep = Math.PI / 2 / (gridPoints - 1);
+
+export interface FieldCase {
+  readonly electrons: number;
+  readonly geometry: Geometry;
+}
+
+/** A level on the grid: absolute energy and its derivative by t, for rho = 1. */
+export interface GridLevel {
+  readonly energy: Float64Array;
+  readonly slope: Float64Array;
+}
+
+/** A level at one t: absolute energy, derivative by t, and exact derivatives by Delta, B and C. */
+export interface ExactLevel {
+  readonly energy: number;
+  readonly slope: number;
+  readonly gradient: Gradient;
+}
+
+export interface LevelTable {
+  readonly ion: FieldCase;
+  /** C/B. */
+  readonly ratio: number;
+  /** A level by its letter form on the grid; computed with its block on first use. */
+  grid(label: string): GridLevel;
+  /** The named levels at angle t, in the order asked for. */
+  exact(labels: readonly string[], t: number): ExactLevel[];
+}
+
+interface LevelPlace {
+  readonly block: Block;
+  readonly index: number;
+}
+
+const places = new Map<string, ReadonlyMap<string, LevelPlace>>();
+
+/** Where each level label of an ion sits among the blocks. A joined label ("a4A1g/a4Eg") goes by its first name. */
+function placesOf(ion: FieldCase): ReadonlyMap<string, LevelPlace> {
+  const key = `${ion.electrons} ${ion.geometry}`;
+  let found = places.get(key);
+  if (!found) {
+    found = new Map(
+      shellBlocks(ion.electrons).flatMap((block) =>
+        Array.from({ length: block.size }, (_, index) => [levelLabel(block, index + 1, ion.geometry), { block, index }] as const),
+      ),
+    );
+    places.set(key, found);
+  }
+  return found;
+}
+
+export function levelPlace(ion: FieldCase, label: string): LevelPlace {
+  const place = placesOf(ion).get(label.split('/')[0]!);
+  if (!place) throw new RangeError(`label: "${label}" is no level of d${ion.electrons} ${ion.geometry}`);
+  return place;
+}
+
+/** Delta, B and C on the curve at rho = 1. */
+export function pointOnCurve(t: number, ratio: number): { delta: number; racahB: number; racahC: number } {
+  const racahB = Math.cos(t);
+  return { delta: angleScale * Math.sin(t), racahB, racahC: ratio * racahB };
+}
+
+function slopeAt(t: number, ratio: number, field: number, racahB: number, racahC: number): number {
+  return field * angleScale * Math.cos(t) - (racahB + ratio * racahC) * Math.sin(t);
+}
+
+function makeTable(ion: FieldCase, ratio: number): LevelTable {
+  const sign = fieldSign(ion.geometry);
+  const solved = new Map<Block, GridLevel[]>();
+  const known = new Map<string, GridLevel>();
+
+  function solveOnGrid(block: Block): GridLevel[] {
+    const levels = Array.from({ length: block.size }, () => ({ energy: new Float64Array(gridPoints), slope: new Float64Array(gridPoints) }));
+    for (let i = 0; i < gridPoints; i++) {
+      const t = i * gridStep;
+      const { delta, racahB, racahC } = pointOnCurve(t, ratio);
+      const solution = solveBlock(block, sign, delta, racahB, racahC);
+      for (let k = 0; k < block.size; k++) {
+        levels[k]!.energy[i] = solution.energy[k]!;
+        levels[k]!.slope[i] = slopeAt(t, ratio, solution.field[k]!, solution.racahB[k]!, solution.racahC[k]!);
+      }
+    }
+    return levels;
+  }
+
+  return {
+    ion,
+    ratio,
+    grid(label) {
+      let level = known.get(label);
+      if (!level) {
+        const { block, index } = levelPlace(ion, label);
+        let levels = solved.get(block);
+        if (!levels) {
+          levels = solveOnGrid(block);
+          solved.set(block, levels);
+        }
+        level = levels[index]!;
+        known.set(label, level);
+      }
+      return level;
+    },
+    exact(labels, t) {
+      const { delta, racahB, racahC } = pointOnCurve(t, ratio);
+      const solutions = new Map<Block, ReturnType<typeof solveBlock>>();
+      return labels.map((label) => {
+        const { block, index } = levelPlace(ion, label);
+        let solution = solutions.get(block);
+        if (!solution) {
+          solution = solveBlock(block, sign, delta, racahB, racahC);
+          solutions.set(block, solution);
+        }
+        const gradient = { delta: solution.field[index]!, racahB: solution.racahB[index]!, racahC: solution.racahC[index]! };
+        return {
+          energy: solution.energy[index]!,
+          slope: slopeAt(t, ratio, gradient.delta, gradient.racahB, gradient.racahC),
+          gradient,
+        };
+      });
+    },
+  };
+}
+
+/** Tables are pure functions of ion, geometry and C/B; a collection uses few of them, so the latest are kept. */
+const held = new Map<string, LevelTable>();
+const heldAtMost = 200;
+
+/** The level table of an ion at one C/B; computed once and shared. */
+export function levelTable(ion: FieldCase, ratio: number): LevelTable {
+  const key = `${ion.electrons} ${ion.geometry} ${ratio}`;
+  let table = held.get(key);
+  if (!table) {
+    table = makeTable({ electrons: ion.electrons, geometry: ion.geometry }, ratio);
+    if (held.size >= heldAtMost) held.delete(held.keys().next().value!);
+    held.set(key, table);
+  }
+  return table;
+}
