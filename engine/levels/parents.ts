@@ -1,6 +1,7 @@
 import type { Block } from '../shell/blocks.ts';
 import type { Irrep } from '../shell/rotations.ts';
-import { between, clusters, eigen } from './solve.ts';
+import { symmetricEigen } from '../linear/symmetricEigen.ts';
+import { between, clusters } from './solve.ts';
 
 /** Letters of free-ion terms by total orbital angular momentum L. */
 const termLetters = ['S', 'P', 'D', 'F', 'G', 'H', 'I'];
@@ -27,7 +28,7 @@ export function blockParents(block: Block, racahB: number, racahC: number, close
   const { size } = block;
   const total = new Float64Array(size * size);
   for (let i = 0; i < total.length; i++) total[i] = racahB * block.racahB[i]! + racahC * block.racahC[i]!;
-  const { values, vectors } = eigen(total, size);
+  const { values, vectors } = symmetricEigen(total, size);
   const seen = new Map<number, number>();
   const parents: Parent[] = [];
   const terms: { letter: string; energy: number }[] = [];
@@ -35,8 +36,8 @@ export function blockParents(block: Block, racahB: number, racahC: number, close
     const count = last - first + 1;
     const inner = new Float64Array(count * count);
     for (let a = 0; a < count; a++)
-      for (let b = 0; b < count; b++) inner[a * count + b] = between(block.angular, vectors, first + a, first + b);
-    const momenta = eigen(inner, count).values.map((square) => Math.round((Math.sqrt(4 * Math.max(0, square) + 1) - 1) / 2));
+      for (let b = 0; b < count; b++) inner[a * count + b] = between(block.angular, vectors, size, first + a, first + b);
+    const momenta = Array.from(symmetricEigen(inner, count).values, (square) => Math.round((Math.sqrt(4 * Math.max(0, square) + 1) - 1) / 2));
     for (const momentum of new Set(momenta)) {
       // Two terms of one letter may coincide (2F and 2F' of d5 at C/B = 8): each has its own letter.
       const termsAlike = momenta.filter((other) => other === momentum).length / timesIn(block.irrep, momentum);

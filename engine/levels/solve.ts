@@ -1,4 +1,4 @@
-import { EigenvalueDecomposition, Matrix } from 'ml-matrix';
+import { symmetricEigen } from '../linear/symmetricEigen.ts';
 import type { Block } from '../shell/blocks.ts';
 
 /**
@@ -12,26 +12,17 @@ export interface BlockSolution {
   readonly racahC: Float64Array;
 }
 
-/** <v_a|M|v_b> for columns a and b of an eigenvector matrix. */
-export function between(matrix: Float64Array, vectors: readonly (readonly number[] | Float64Array)[], a: number, b: number): number {
-  const size = vectors.length;
+/** <v_a|M|v_b> for columns a and b of a row-major eigenvector matrix of the same size. */
+export function between(matrix: Float64Array, vectors: Float64Array, size: number, a: number, b: number): number {
   let sum = 0;
   for (let i = 0; i < size; i++) {
-    const left = vectors[i]![a]!;
+    const left = vectors[i * size + a]!;
     if (left === 0) continue;
     let row = 0;
-    for (let j = 0; j < size; j++) row += matrix[i * size + j]! * vectors[j]![b]!;
+    for (let j = 0; j < size; j++) row += matrix[i * size + j]! * vectors[j * size + b]!;
     sum += left * row;
   }
   return sum;
-}
-
-/** Eigenvalues ascending and eigenvectors as rows over basis states, column k belonging to eigenvalue k. */
-export function eigen(matrix: Float64Array, size: number): { values: number[]; vectors: (number[] | Float64Array)[] } {
-  const rows: number[][] = [];
-  for (let i = 0; i < size; i++) rows.push(Array.from(matrix.subarray(i * size, (i + 1) * size)));
-  const solved = new EigenvalueDecomposition(new Matrix(rows), { assumeSymmetric: true });
-  return { values: solved.realEigenvalues, vectors: solved.eigenvectorMatrix.to2DArray() };
 }
 
 /** Index ranges [first, last] of eigenvalues that agree within `tolerance`, ascending input. */
@@ -73,19 +64,19 @@ export function solveBlock(block: Block, sign: number, delta: number, racahB: nu
     total[i] = sign * delta * field[i]! + racahB * matrixB[i]! + racahC * matrixC[i]!;
     scale = Math.max(scale, Math.abs(total[i]!));
   }
-  const { values, vectors } = eigen(total, size);
+  const { values, vectors } = symmetricEigen(total, size);
   for (const [first, last] of clusters(values, 1e-10 * scale)) if (last > first) alignWithField(block, sign, vectors, first, last);
   for (let k = 0; k < size; k++) {
     let sumField = 0;
     let sumB = 0;
     let sumC = 0;
     for (let i = 0; i < size; i++) {
-      const left = vectors[i]![k]!;
+      const left = vectors[i * size + k]!;
       sumField += left * left * field[i * size + i]!;
       let rowB = 0;
       let rowC = 0;
       for (let j = 0; j < size; j++) {
-        const right = vectors[j]![k]!;
+        const right = vectors[j * size + k]!;
         rowB += matrixB[i * size + j]! * right;
         rowC += matrixC[i * size + j]! * right;
       }
@@ -102,18 +93,19 @@ export function solveBlock(block: Block, sign: number, delta: number, racahB: nu
 }
 
 /** Turns the eigenvectors first..last, which share one energy, so that the field is diagonal and ascending among them. */
-function alignWithField(block: Block, sign: number, vectors: (number[] | Float64Array)[], first: number, last: number): void {
+function alignWithField(block: Block, sign: number, vectors: Float64Array, first: number, last: number): void {
+  const { size } = block;
   const count = last - first + 1;
   const inner = new Float64Array(count * count);
   for (let a = 0; a < count; a++)
-    for (let b = 0; b < count; b++) inner[a * count + b] = sign * between(block.field, vectors, first + a, first + b);
-  const turn = eigen(inner, count).vectors;
-  for (const row of vectors) {
-    const old = Array.from({ length: count }, (_, a) => row[first + a]!);
+    for (let b = 0; b < count; b++) inner[a * count + b] = sign * between(block.field, vectors, size, first + a, first + b);
+  const turn = symmetricEigen(inner, count).vectors;
+  for (let i = 0; i < size; i++) {
+    const old = vectors.slice(i * size + first, i * size + last + 1);
     for (let b = 0; b < count; b++) {
       let sum = 0;
-      for (let a = 0; a < count; a++) sum += old[a]! * turn[a]![b]!;
-      row[first + b] = sum;
+      for (let a = 0; a < count; a++) sum += old[a]! * turn[a * count + b]!;
+      vectors[i * size + first + b] = sum;
     }
   }
 }

@@ -1,4 +1,5 @@
-import { inverse, Matrix, SVD } from 'ml-matrix';
+import { inversePositive } from '../linear/solveSymmetric.ts';
+import { symmetricEigen } from '../linear/symmetricEigen.ts';
 
 /** A 3 x 3 covariance of Delta, B and C in cm-2. */
 export type Covariance = readonly (readonly number[])[];
@@ -27,22 +28,24 @@ export interface Uncertainty {
  * @param scales sizes of the parameters, by which columns are scaled before the inversion
  */
 export function propagate(rows: readonly Row[], scales: readonly number[]): Uncertainty {
-  const count = scales.length;
   const weights = rows.map((row) => 1 / (row.u ** 2 + row.floor ** 2));
   const normal = scales.map((si, i) => scales.map((sj, j) => rows.reduce((sum, row, k) => sum + weights[k]! * row.slopes[i]! * si * row.slopes[j]! * sj, 0)));
-  const scaled = inverse(new Matrix(normal)).to2DArray();
+  const scaled = inversePositive(normal);
+  if (!scaled) throw new RangeError('rows: the bands do not determine the parameters; test the singular values first');
   const total = scaled.map((line, i) => line.map((value, j) => value * scales[i]! * scales[j]!));
   const gain = total.map((line) => rows.map((row, k) => weights[k]! * line.reduce((sum, value, j) => sum + value * row.slopes[j]!, 0)));
   const reading = gain.map((left) => gain.map((right) => rows.reduce((sum, row, k) => sum + left[k]! * right[k]! * row.u ** 2, 0)));
   const leverage = rows.map((row, k) => row.slopes.reduce((sum, slope, i) => sum + slope * gain[i]![k]!, 0));
-  if (gain.length !== count) throw new RangeError('scales: one for each free parameter');
   return { reading, total, gain, leverage };
 }
 
 /** Singular values of the weighted Jacobian with columns scaled by the parameters, descending. */
 export function singularValues(rows: readonly Row[], scales: readonly number[]): number[] {
+  const count = scales.length;
   const matrix = rows.map((row) => scales.map((scale, i) => (row.slopes[i]! * scale) / Math.sqrt(row.u ** 2 + row.floor ** 2)));
-  return new SVD(new Matrix(matrix), { computeLeftSingularVectors: false, computeRightSingularVectors: false, autoTranspose: true }).diagonal;
+  const normal = new Float64Array(count * count);
+  for (let i = 0; i < count; i++) for (let j = 0; j < count; j++) normal[i * count + j] = matrix.reduce((sum, row) => sum + row[i]! * row[j]!, 0);
+  return Array.from(symmetricEigen(normal, count).values, (square) => Math.sqrt(Math.max(0, square))).reverse();
 }
 
 /** a + factor * v v', 3 x 3. */

@@ -1,5 +1,5 @@
-import { Matrix, solve } from 'ml-matrix';
 import type { FieldParameters } from '../levels/levels.ts';
+import { solvePositive } from '../linear/solveSymmetric.ts';
 import { transitionsAt } from './evaluate.ts';
 import { weightAt } from './misfit.ts';
 import type { Target } from './misfit.ts';
@@ -78,9 +78,9 @@ function descend(ion: GroundCase, ground: string, labels: readonly string[], tar
     const size = Math.max(normal[0]![0]!, normal[1]![1]!, normal[2]![2]!);
     for (let i = 0; i < 3; i++) normal[i]![i]! += damping * size;
     // Parameters are scaled by their own values, so a step is a relative change.
-    const move = solve(new Matrix(normal), Matrix.columnVector(right)).to1DArray();
+    const move = solvePositive(normal, right);
+    if (!move) return null;
     const next = at.map((p, i) => p * (1 + move[i]!)) as unknown as readonly [number, number, number];
-    if (!move.every(Number.isFinite)) return null;
     if (next.every((p) => p > 0)) {
       const there = misfit(ion, ground, labels, targets, named(next));
       if (there.chi2 <= here.chi2) {

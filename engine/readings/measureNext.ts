@@ -1,5 +1,5 @@
-import { inverse, Matrix } from 'ml-matrix';
 import { shownLabel } from '../levels/labels.ts';
+import { inversePositive } from '../linear/solveSymmetric.ts';
 import { symmetricU } from '../measurement/observation.ts';
 import type { Policy } from '../policy/types.ts';
 import { transitionsAt } from './evaluate.ts';
@@ -35,9 +35,9 @@ export function measureNext(ion: GroundCase, assigned: readonly Assigned[], fit:
     if (!band.spinAllowed || !transitionOf(ion, band.label).spinAllowed) continue;
     const rows = [...present, row(band.label, readTo)];
     const normal = [0, 1].map((i) => [0, 1].map((j) => rows.reduce((sum, r) => sum + r.weight * r.slopes[i]! * r.slopes[j]! * (i === 0 ? at.delta : at.racahB) * (j === 0 ? at.delta : at.racahB), 0)));
-    const determinant = normal[0]![0]! * normal[1]![1]! - normal[0]![1]! * normal[1]![0]!;
-    if (!(determinant > 1e-9 * normal[0]![0]! * normal[1]![1]!)) continue;
-    const uThen = Math.sqrt(inverse(new Matrix(normal)).get(1, 1)) * at.racahB;
+    const spread = inversePositive(normal);
+    if (!spread) continue;
+    const uThen = Math.sqrt(spread[1]![1]!) * at.racahB;
     if (!best || uThen < best.uThen) best = { band, uThen };
   }
   if (!best || best.uThen > policy.ceilings.racahB * at.racahB || (uNow !== null && best.uThen > worthwhile * uNow)) return null;

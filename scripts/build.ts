@@ -1,0 +1,62 @@
+// npm run build: refit, pages, files for download.
+
+import { join } from 'node:path';
+import { readArguments } from './arguments.ts';
+import type { CommandTable } from './arguments.ts';
+import { refit } from './database/refit.ts';
+import { exitCodes } from './exitCodes.ts';
+import { writeExports } from './export/writeExports.ts';
+import { cacheFile, places } from './places.ts';
+import { addressOf } from './publish/address.ts';
+import { buildPages, countPages } from './publish/pages.ts';
+import { swapFolder } from './publish/swapFolder.ts';
+import { counted } from './report/columns.ts';
+import { progressLine } from './report/progress.ts';
+import { stoppedByFaults } from './report/stoppedByFaults.ts';
+import { duration, refitFacts, refitLines } from './report/summary.ts';
+import { runCommand } from './runCommand.ts';
+
+const table: CommandTable = {
+  name: 'build',
+  summary: 'Fits the collection and writes the site, with the database and the result files for download. A failed build leaves the old site as it was.',
+  options: [
+    { name: 'content', value: 'DIR', help: 'folder of the records (content)' },
+    { name: 'database', value: 'FILE', help: 'database file to write (.cache/collection.sqlite)' },
+    { name: 'out', value: 'DIR', help: 'folder of the site (dist)' },
+    { name: 'cold', help: 'fit everything, read and keep no cache' },
+    { name: 'json', help: 'print the summary as JSON' },
+  ],
+};
+
+await runCommand(table.name, async () => {
+  const given = readArguments(table);
+  const started = performance.now();
+  const content = given.path('content', places.content);
+  const database = given.path('database', places.database);
+  const out = given.path('out', places.site);
+  const json = given.has('json');
+
+  const progress = progressLine('fitting', process.stderr);
+  const result = refit({ content, database, cache: given.has('cold') ? null : cacheFile(content), progress: progress.update });
+  progress.end();
+  if (!result.ok) return stoppedByFaults(result.faults, content, 'The database and the site were left as they were.', json);
+
+  if (process.stderr.isTTY) process.stderr.write('drawing pages ...');
+  await swapFolder(out, async (folder) => {
+    await buildPages(database, addressOf(result.refit.collection.group.url), folder);
+    writeExports(database, join(folder, 'data'));
+  });
+  if (process.stderr.isTTY) process.stderr.write('\r\u001b[K');
+
+  const pages = countPages(out);
+  const milliseconds = performance.now() - started;
+  if (json) process.stdout.write(`${JSON.stringify({ ok: true, ...refitFacts(result.refit), database, site: out, pages, seconds: milliseconds / 1000 })}\n`);
+  else {
+    process.stdout.write(`${[
+      ...refitLines(result.refit),
+      `Wrote ${counted(pages, 'page')} to ${out} in ${duration(milliseconds)}.`,
+      'Next: "npm run preview" serves the site on this machine.',
+    ].join('\n')}\n`);
+  }
+  return exitCodes.good;
+});

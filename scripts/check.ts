@@ -1,0 +1,47 @@
+// npm run check: reads the content and reports every fault.
+
+import { readArguments } from './arguments.ts';
+import type { CommandTable } from './arguments.ts';
+import { writeManual } from './content/manual/write.ts';
+import { readCollection } from './content/readCollection.ts';
+import type { Collection } from './content/types.ts';
+import { exitCodes } from './exitCodes.ts';
+import { places } from './places.ts';
+import { faultReport, folderName } from './report/faults.ts';
+import { runCommand } from './runCommand.ts';
+
+const table: CommandTable = {
+  name: 'check',
+  summary: 'Reads a group\'s records and reports every fault with its place and how to mend it. Fits nothing and writes nothing.',
+  options: [
+    { name: 'content', value: 'DIR', help: 'folder of the records (content)' },
+    { name: 'json', help: 'print the faults as JSON, and nothing else' },
+    { name: 'write-manual', help: 'renew content/record.schema.json and the tables of content/README.md' },
+  ],
+  examples: ['', '--content ../our-records'],
+};
+
+await runCommand(table.name, () => {
+  const given = readArguments(table);
+  const directory = given.path('content', places.content);
+  if (given.has('write-manual')) {
+    process.stdout.write(`Renewed ${writeManual(directory).join(' and ')}.\n`);
+    return exitCodes.good;
+  }
+  const { collection, faults, filesRead } = readCollection(directory);
+  const folder = folderName(directory);
+  if (given.has('json')) process.stdout.write(`${JSON.stringify({ ok: collection !== null, content: folder, filesRead, faults }, null, 2)}\n`);
+  else process.stdout.write(collection === null ? faultReport(faults, folder) : summary(collection, filesRead, folder));
+  return collection === null ? exitCodes.faults : exitCodes.good;
+});
+
+function summary(collection: Collection, filesRead: number, folder: string): string {
+  const measurements = collection.complexes.reduce((sum, complex) => sum + complex.measurements.length, 0);
+  const line = `No faults in ${count(filesRead, 'file')}: ${count(collection.complexes.length, 'complex', 'complexes')}, ${count(measurements, 'measurement')}, ${count(collection.ligands.length, 'ligand')}, ${count(collection.sources.length, 'source')}.\n`;
+  const next = collection.complexes.length === 0 ? `There is no complex yet: type the first record into ${folder}/complexes/, as content/README.md shows.\n` : '';
+  return `${line}${next}`;
+}
+
+function count(number: number, one: string, more = `${one}s`): string {
+  return `${number} ${number === 1 ? one : more}`;
+}

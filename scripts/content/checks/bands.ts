@@ -1,0 +1,43 @@
+// Bands and absent ranges of one measurement: fields that go together, widths, overlaps.
+
+import { toWavenumber, widthToWavenumber } from '#engine';
+import { typedText } from '../report.ts';
+import type { Reporter } from '../report.ts';
+import { highestBand, lowestBand } from '../schema/physical.ts';
+import type { MeasurementDraft } from './complex.ts';
+
+export function checkBands({ bands }: MeasurementDraft, path: readonly (string | number)[], report: Reporter): void {
+  const absent: { readonly low: number; readonly high: number; readonly typed: string; readonly index: number }[] = [];
+  bands?.forEach((band, index) => {
+    if (band === undefined || !('absent' in band) || band.absent === undefined) return;
+    for (const { low, high } of band.absent.ranges) absent.push({ low, high, typed: band.absent.typed, index });
+    if (band.absent.ranges.some(({ low, high }) => low < lowestBand || high > highestBand)) {
+      report.at([...path, 'bands', index, 'absent'], { code: 'BAND_RANGE', found: typedText(band.absent.typed), expected: 'a range from 1000 to 100 000 cm-1 (100 to 10 000 nm)', mend: 'check the unit: numbers of three digits are often nm' });
+    }
+  });
+  bands?.forEach((band, index) => {
+    if (band === undefined || !('position' in band)) return;
+    const at = (field: string) => [...path, 'bands', index, field];
+    if (band.side !== undefined && band.kind !== 'shoulder') {
+      report.at(at('side'), { code: 'FIELD_NOT_HERE', found: `side without kind: shoulder`, expected: 'side with a shoulder only', mend: 'write kind: shoulder, or delete side' });
+    }
+    if (band.degeneracy !== undefined && band.kind !== 'component') {
+      report.at(at('degeneracy'), { code: 'FIELD_NOT_HERE', found: 'degeneracy without kind: component', expected: 'degeneracy with a component only', mend: 'write kind: component, or delete degeneracy' });
+    }
+    if (band.position === undefined) return;
+    const { position } = toWavenumber(band.position);
+    if (band.width !== undefined) {
+      const width = widthToWavenumber(position, band.width);
+      if (width === null || width >= position) {
+        report.at(at('width'), { code: 'BAND_WIDTH', found: typedText(band.width.typed), expected: `a width smaller than the position, ${band.position.typed}`, mend: 'check the number and its unit' });
+      }
+    }
+    const inside = absent.find(({ low, high }) => position > low && position < high);
+    if (inside !== undefined) {
+      report.at([...path, 'bands', inside.index, 'absent'], {
+        code: 'ABSENT_OVERLAP', found: `${typedText(inside.typed)}, with the band at ${band.position.typed} inside`, expected: 'a range without any band of this measurement',
+        mend: 'shorten the range, or type it as two ranges around the band',
+      });
+    }
+  });
+}

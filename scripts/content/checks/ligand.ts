@@ -1,0 +1,35 @@
+// What must fit together within a ligand record.
+
+import { elementCounts, parseFormula } from '#engine';
+import type { Draft } from '../draft.ts';
+import { typedText } from '../report.ts';
+import type { Reporter } from '../report.ts';
+import type { ligandSchema } from '../schema/ligand.ts';
+import { chargeText, formulaFinding } from './formula.ts';
+
+export function checkLigand(ligand: Draft<typeof ligandSchema>, report: Reporter): void {
+  if (ligand === undefined) return;
+  const donors = [ligand.donors ?? []].flat(2).filter((donor) => donor !== undefined);
+  const parsed = ligand.formula === undefined ? null : parseFormula(ligand.formula);
+  if (parsed !== null && !parsed.ok) report.at(['formula'], formulaFinding(ligand.formula ?? '', parsed));
+  if (parsed?.ok === true) {
+    const { formula } = parsed;
+    if (formula.charge !== null && ligand.charge !== undefined && formula.charge !== ligand.charge) {
+      report.at(['charge'], {
+        code: 'CHARGE_SUM', found: `charge ${chargeText(ligand.charge)} beside the formula ${typedText(ligand.formula ?? '')}`, expected: 'the charge that the formula carries',
+        mend: `write charge: ${formula.charge}, or correct the formula`,
+      });
+    }
+    const atoms = elementCounts(formula);
+    const stranger = donors.find((donor) => !atoms.has(donor));
+    if (stranger !== undefined) {
+      report.at(['donors'], { code: 'LIGAND_DONORS', found: typedText(stranger), expected: `donor atoms of ${ligand.formula}: ${[...atoms.keys()].join(', ')}`, mend: 'write the element that binds the metal, or correct the formula' });
+    }
+  }
+  if (ligand.denticity !== undefined && donors.length > 0 && donors.length !== ligand.denticity) {
+    report.at(['donors'], {
+      code: 'LIGAND_DONORS', found: `${donors.join(', ')} (${donors.length})`, expected: `${ligand.denticity} donor atom${ligand.denticity === 1 ? '' : 's'}, as many as the denticity`,
+      mend: 'list each donor atom that one ligand binds, or correct the denticity',
+    });
+  }
+}

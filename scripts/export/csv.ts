@@ -1,0 +1,9 @@
+/** A CSV file after RFC 4180: CRLF line ends, quotes where needed, an empty cell for null. Numbers keep every digit. */
+export function csvText(header: readonly string[], rows: readonly (readonly (string | number | null)[])[]): string {
+  return [header, ...rows].map((row) => `${row.map(cellText).join(',')}\r\n`).join('');
+}
+
+function cellText(cell: string | number | null): string {
+  const text = cell === null ? '' : String(cell);
+  return /[",\r\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text;
+}

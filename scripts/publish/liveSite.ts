@@ -1,0 +1,41 @@
+import type { Plugin, ViteDevServer } from 'vite';
+import type { Address } from './address.ts';
+import { projectFolder, siteSettings } from './pages.ts';
+
+/** The site served live: pages are drawn when they are asked for. */
+export interface LiveSite {
+  readonly url: string;
+  /** Lets every page be drawn anew from the database, and open browsers load again. */
+  readonly reload: () => void;
+  readonly stop: () => Promise<void>;
+}
+
+/** Starts the live site over a database file. Throws where the port cannot be had. */
+export async function startLiveSite(databaseFile: string, address: Address, port: number): Promise<LiveSite> {
+  // The site's settings travel by the environment, as in a build.
+  Object.assign(process.env, siteSettings(databaseFile, address, 'dist'));
+  const { dev } = await import('astro');
+  let server: ViteDevServer | null = null;
+  const keepServer: Plugin = {
+    name: 'bandstead-live',
+    configureServer: (started) => {
+      server = started;
+    },
+  };
+  const site = await dev({ root: projectFolder, logLevel: 'warn', server: { port, host: '127.0.0.1' }, vite: { plugins: [keepServer] } });
+  return {
+    url: `http://127.0.0.1:${site.address.port}${address.base}`,
+    reload: () => {
+      if (server !== null) reloadAll(server);
+    },
+    stop: () => site.stop(),
+  };
+}
+
+// The site's data modules read the database when they are loaded: forgetting every loaded module makes the next page read it anew.
+function reloadAll(server: ViteDevServer): void {
+  for (const environment of Object.values(server.environments)) {
+    environment.moduleGraph.invalidateAll();
+    environment.hot.send({ type: 'full-reload', path: '*' });
+  }
+}

@@ -1,0 +1,44 @@
+import { spawn } from 'node:child_process';
+import { readdirSync } from 'node:fs';
+import { fileURLToPath } from 'node:url';
+import { join } from 'node:path';
+import type { Address } from './address.ts';
+
+/** The folder of the software itself: where the site's sources and its page builder are found, wherever the user stands. */
+export const projectFolder = fileURLToPath(new URL('../..', import.meta.url));
+
+/** What the site is told: the database it reads, where it will stand, where its pages go. */
+export function siteSettings(databaseFile: string, { origin, base }: Address, out: string): Readonly<Record<string, string>> {
+  return {
+    BANDSTEAD_DATABASE: databaseFile,
+    BANDSTEAD_SITE: origin,
+    BANDSTEAD_BASE: base,
+    BANDSTEAD_OUT: out,
+    ASTRO_TELEMETRY_DISABLED: '1',
+    NO_COLOR: '1',
+  };
+}
+
+/** Builds the pages into `out`. Throws with what the page builder said where it fails. */
+export async function buildPages(databaseFile: string, address: Address, out: string): Promise<void> {
+  const { code, said } = await run(['build', '--silent'], siteSettings(databaseFile, address, out));
+  if (code !== 0) throw new Error(`the pages could not be built:\n${said.trim() === '' ? `the page builder ended with code ${code}` : said.trim()}`);
+}
+
+/** How many pages (HTML files) a folder holds. */
+export function countPages(folder: string): number {
+  return readdirSync(folder, { recursive: true, encoding: 'utf8' }).filter((name) => name.endsWith('.html')).length;
+}
+
+function run(words: readonly string[], settings: Readonly<Record<string, string>>): Promise<{ code: number; said: string }> {
+  return new Promise((resolve, reject) => {
+    const builder = join(projectFolder, 'node_modules', 'astro', 'bin', 'astro.mjs');
+    const child = spawn(process.execPath, [builder, ...words], {
+      cwd: projectFolder, env: { ...process.env, ...settings }, stdio: ['ignore', 'pipe', 'pipe'],
+    });
+    let said = '';
+    for (const stream of [child.stdout, child.stderr]) stream.setEncoding('utf8').on('data', (text: string) => { said += text; });
+    child.on('error', reject);
+    child.on('close', (code) => resolve({ code: code ?? 1, said }));
+  });
+}

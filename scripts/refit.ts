@@ -1,0 +1,48 @@
+// npm run refit: content to database, or the story of one result.
+
+import { readArguments } from './arguments.ts';
+import type { CommandTable } from './arguments.ts';
+import { refit } from './database/refit.ts';
+import { exitCodes } from './exitCodes.ts';
+import { explain } from './explain/explain.ts';
+import { cacheFile, places } from './places.ts';
+import { progressLine } from './report/progress.ts';
+import { stoppedByFaults } from './report/stoppedByFaults.ts';
+import { duration, refitFacts, refitLines } from './report/summary.ts';
+import { runCommand } from './runCommand.ts';
+
+const table: CommandTable = {
+  name: 'refit',
+  summary: 'Fits every measurement of the content anew and writes the database. Measurements that did not change are taken from a cache; the result is the same.',
+  options: [
+    { name: 'content', value: 'DIR', help: 'folder of the records (content)' },
+    { name: 'database', value: 'FILE', help: 'database file to write (.cache/collection.sqlite)' },
+    { name: 'explain', value: 'ID', help: 'tell the story of one measurement (cr-am6/aq-295) or complex (cr-am6); writes nothing' },
+    { name: 'cold', help: 'fit everything, read and keep no cache' },
+    { name: 'json', help: 'print the summary, or the story, as JSON' },
+  ],
+  examples: ['', '--explain cr-am6/aq-295', '--content ../our-bands --database our-bands.sqlite'],
+};
+
+await runCommand(table.name, () => {
+  const given = readArguments(table);
+  const started = performance.now();
+  const content = given.path('content', places.content);
+  const database = given.path('database', places.database);
+  const json = given.has('json');
+  const story = given.text('explain');
+  if (story !== null) return explain(content, story, json);
+
+  const progress = progressLine('fitting', process.stderr);
+  const result = refit({ content, database, cache: given.has('cold') ? null : cacheFile(content), progress: progress.update });
+  progress.end();
+  if (!result.ok) return stoppedByFaults(result.faults, content, 'The database was left as it was.', json);
+  const seconds = (performance.now() - started) / 1000;
+  if (json) process.stdout.write(`${JSON.stringify({ ok: true, ...refitFacts(result.refit), database, seconds })}\n`);
+  else {
+    const lines = [...refitLines(result.refit), `Wrote ${database} in ${duration(seconds * 1000)}.`];
+    if (result.refit.measurements > 0) lines.push('Next: "npm run refit -- --explain ID" tells one result\'s story; "npm run build" makes the site.');
+    process.stdout.write(`${lines.join('\n')}\n`);
+  }
+  return exitCodes.good;
+});

@@ -1,0 +1,141 @@
+import * as Plot from '@observablehq/plot';
+import { shownLabel, termParts } from '#engine';
+import { type LevelCurve, type LevelDiagram, below } from './levelCurves.ts';
+import { type Drawing, drawPlot, dressed, svgElement } from './plot.ts';
+import { spreadLabels } from './spread.ts';
+import { type TextPart, coordinate as c, escapeText, spans } from './text.ts';
+
+/** A complex at its fitted Delta/B with its observed bands. */
+export interface DiagramMark {
+  /** Short key printed above the diagram, "a". */
+  readonly key: string;
+  readonly x: number;
+  /** E/B of each observed band; `used` false: not in the fit, drawn open. */
+  readonly bands: readonly { readonly y: number; readonly used: boolean }[];
+}
+
+const WIDTH = 760;
+const HEIGHT = 620;
+const MARGIN = { left: 46, right: 84, top: 68, bottom: 46 };
+const GUTTER = 34;
+const LABEL = 12.5;
+
+/** Upper end of the E/B axis: room for every mark and for the spin-allowed levels over most of the field axis. */
+export function diagramCeiling(reach: number, marks: readonly DiagramMark[]): number {
+  const highest = Math.max(0, ...marks.flatMap((mark) => mark.bands.map((band) => band.y)));
+  return Math.min(120, Math.max(40, 10 * Math.ceil(Math.max(1.12 * highest, 1.5 * reach) / 10)));
+}
+
+/**
+ * The Tanabe-Sugano diagram of an ion with complexes on it: E/B against Delta/B, levels of the ground level's
+ * multiplicity solid, others thin and dashed, a dotted upright where the ground level changes.
+ * @param ceiling upper end of the E/B axis, `diagramCeiling`
+ */
+export function levelDiagramFigure(
+  diagram: LevelDiagram, ceiling: number, marks: readonly DiagramMark[], document: Document,
+  dress: { readonly id: string; readonly title: string; readonly description: string },
+): string {
+  const drawing = drawPlot(document, {
+    width: WIDTH, height: HEIGHT,
+    marginLeft: MARGIN.left, marginRight: MARGIN.right, marginTop: MARGIN.top, marginBottom: MARGIN.bottom,
+    insetLeft: GUTTER,
+    x: { domain: [0, diagram.reach], label: null },
+    y: { domain: [0, ceiling], label: null },
+    marks: [
+      Plot.axisX({ ticks: diagram.reach / 5, tickSize: 5, label: null }),
+      Plot.axisY({ ticks: 10, tickSize: 5, label: null }),
+      ...levelMarks(diagram, ceiling, true),
+      ...levelMarks(diagram, ceiling, false),
+    ],
+  });
+  const over = [frame(drawing, diagram), crossingLines(drawing, diagram), termLabels(drawing, diagram, ceiling),
+    levelLabels(drawing, diagram, ceiling), complexMarks(drawing, marks)].join('');
+  return dressed(drawing, { ...dress, over });
+}
+
+/** Piece by piece between changes of the ground level, because what is spin-allowed changes with it. */
+function levelMarks(diagram: LevelDiagram, ceiling: number, allowed: boolean): Plot.Markish[] {
+  const points = diagram.grounds.flatMap(({ from, to, multiplicity }, range) =>
+    diagram.curves.filter((curve) => (curve.multiplicity === multiplicity) === allowed)
+      .flatMap((curve) => below(curve.points.filter((point) => point.x >= from && point.x <= to), ceiling)
+        .flatMap((piece, index) => piece.map((point) => ({ ...point, line: `${curve.labels[0]} ${range} ${index}` })))));
+  return [Plot.line(points, { x: 'x', y: 'y', z: 'line', stroke: 'currentColor', className: allowed ? 'level' : 'level forbidden' })];
+}
+
+function frame({ x, y }: Drawing, { reach }: LevelDiagram): string {
+  const [left, right, bottom] = [MARGIN.left, x(reach), y(0)];
+  const middle = (x(0) + right) / 2;
+  const upright = (MARGIN.top + bottom) / 2;
+  return `<path class="axis" d="M${c(left)} ${MARGIN.top}V${c(bottom)}M${c(x(0))} ${c(bottom)}H${c(right)}M${c(x(0))} ${MARGIN.top}V${c(bottom)}"/>`
+    + `<text x="${c(middle)}" y="${HEIGHT - 6}" text-anchor="middle" font-size="14"><tspan font-style="italic">Δ</tspan>/<tspan font-style="italic">B</tspan></text>`
+    + `<text transform="translate(13 ${c(upright)}) rotate(-90)" text-anchor="middle" font-size="14"><tspan font-style="italic">E</tspan>/<tspan font-style="italic">B</tspan></text>`;
+}
+
+function crossingLines({ x, y }: Drawing, { grounds }: LevelDiagram): string {
+  return grounds.slice(1).map(({ from }) => `<path class="crossing" d="M${c(x(from))} ${MARGIN.top}V${c(y(0))}"/>`).join('');
+}
+
+/** Free-ion terms in the gutter between the axis and Delta = 0. */
+function termLabels({ x, y }: Drawing, { terms }: LevelDiagram, ceiling: number): string {
+  const shown = terms.filter((term) => term.y <= ceiling);
+  const placed = spreadLabels(shown.map((term) => y(term.y)), shown.map(() => LABEL + 1), [MARGIN.top, y(0) + 6]);
+  return shown.map((term, index) => {
+    const parts: TextPart[] = [{ text: String(term.multiplicity), style: 'super' }, { text: term.letter ?? '…', style: 'plain' }];
+    return label(parts, x(0) - 5, placed[index]!, 'end', leader(x(0) - 4, placed[index]!, x(0), y(term.y)));
+  }).join('');
+}
+
+/** One label a level: at the right end, or above the top edge where the level leaves through it. */
+function levelLabels({ x, y }: Drawing, diagram: LevelDiagram, ceiling: number): string {
+  const ends = diagram.curves.map((curve) => ({ curve, piece: below(curve.points, ceiling).at(-1) }))
+    .filter((end): end is { curve: LevelCurve; piece: readonly { x: number; y: number }[] } => end.piece !== undefined);
+  const right = ends.filter(({ piece }) => piece.at(-1)!.x === diagram.reach);
+  const top = ends.filter(({ piece }) => piece.at(-1)!.x < diagram.reach);
+  const heights = spreadLabels(right.map(({ piece }) => y(piece.at(-1)!.y)), right.map(() => LABEL + 0.5), [MARGIN.top - 6, y(0) + 8]);
+  const places = spreadLabels(top.map(({ piece }) => x(piece.at(-1)!.x)), top.map(() => LABEL), [x(0) - 20, x(diagram.reach) + 10]);
+  return right.map(({ curve, piece }, index) => label(labelParts(curve, diagram), x(diagram.reach) + 13, heights[index]!, 'start',
+    leader(x(diagram.reach), y(piece.at(-1)!.y), x(diagram.reach) + 11, heights[index]!))).join('')
+    + top.map(({ curve, piece }, index) => label(labelParts(curve, diagram), places[index]!, MARGIN.top - 19, 'turned',
+      leader(x(piece.at(-1)!.x), MARGIN.top, places[index]!, MARGIN.top - 16))).join('');
+}
+
+function labelParts(curve: LevelCurve, { ion }: LevelDiagram): readonly TextPart[] {
+  return curve.labels.flatMap((one, index) => [...(index > 0 ? [{ text: ', ', style: 'plain' as const }] : []), ...termParts(shownLabel(one, ion.electrons))]);
+}
+
+function leader(fromX: number, fromY: number, toX: number, toY: number): string {
+  return `<path class="leader" d="M${c(fromX)} ${c(fromY)}L${c(toX)} ${c(toY)}"/>`;
+}
+
+function label(parts: readonly TextPart[], x: number, y: number, anchor: 'start' | 'end' | 'turned', line: string): string {
+  const place = anchor === 'turned'
+    ? `transform="translate(${c(x + 4)} ${c(y)}) rotate(-90)"`
+    : `x="${c(x)}" y="${c(y + 4)}" text-anchor="${anchor}"`;
+  return `${line}<text ${place} font-size="${LABEL}">${spans(parts, LABEL)}</text>`;
+}
+
+/** Where Delta/B and E/B lie in the drawing: the scales that Plot makes, so that marks can be laid over a finished diagram. */
+export function diagramPlace(reach: number, ceiling: number): Pick<Drawing, 'x' | 'y'> {
+  const left = MARGIN.left + GUTTER;
+  const bottom = HEIGHT - MARGIN.bottom;
+  return {
+    x: (value) => left + ((WIDTH - MARGIN.right - left) * value) / reach,
+    y: (value) => bottom - ((bottom - MARGIN.top) * Number(value)) / ceiling,
+  };
+}
+
+/** Marks alone, to be laid over the diagram of the same reach and ceiling. */
+export function diagramOverlay(reach: number, ceiling: number, marks: readonly DiagramMark[], dress: { readonly id: string; readonly title: string; readonly description: string }): string {
+  return svgElement(dress, WIDTH, HEIGHT, complexMarks(diagramPlace(reach, ceiling), marks));
+}
+
+/** Complexes in the accent colour: an upright hairline, dots at observed bands, the key above the field axis. */
+function complexMarks({ x, y }: Pick<Drawing, 'x' | 'y'>, marks: readonly DiagramMark[]): string {
+  const placed = spreadLabels(marks.map((mark) => x(mark.x)), marks.map((mark) => 6 + 7 * mark.key.length), [x(0), WIDTH]);
+  return marks.map((mark, index) => {
+    const at = x(mark.x);
+    const dots = mark.bands.map((band) => `<circle class="${band.used ? 'mark' : 'mark-open'}" cx="${c(at)}" cy="${c(y(band.y))}" r="3.2"/>`).join('');
+    const key = mark.key === '' ? '' : `<text class="mark-text" x="${c(placed[index]!)}" y="${c(y(0) - 5)}" text-anchor="middle" font-size="12.5" font-style="italic">${escapeText(mark.key)}</text>`;
+    return `<g><path class="mark-thin" d="M${c(at)} ${c(y(0))}V${MARGIN.top}"/>${dots}${key}</g>`;
+  }).join('');
+}

@@ -1,0 +1,121 @@
+import { additiveName, elementName, romanNumeral } from '#engine';
+import { conditions } from './conditions.ts';
+import { type MeasurementMeaning, measurementMeaning } from './measurementMeaning.ts';
+import { type MeasurementRead, measurementRead } from './measurementRead.ts';
+import { type Neighbours, neighbours } from './neighbours.ts';
+import { complexPath, ionPath, ligandPath } from './paths.ts';
+import { parameterShown } from './show.ts';
+import { type Origin, type Quote, measurementOrigin, quotes } from './origin.ts';
+import { type Table, quantity, rowColumn, column, soft } from './table.ts';
+import type { CollectionTree, ComplexNode, MeasurementNode } from './tree.ts';
+import { type FormulaShown, type Parts, configuration } from './typeset.ts';
+
+export interface MeasurementShown {
+  readonly id: string;
+  readonly heading: string;
+  readonly sample: string | null;
+  readonly read: MeasurementRead;
+  readonly meaning: MeasurementMeaning;
+  readonly cautions: readonly { readonly code: string; readonly text: string }[];
+  readonly origin: Origin;
+  readonly notes: string | null;
+}
+
+export interface ComplexPage {
+  readonly id: string;
+  readonly formula: FormulaShown;
+  readonly name: string;
+  readonly description: string;
+  readonly hazards: readonly { readonly code: string; readonly text: string; readonly foundIn: string | null }[];
+  readonly hazardOverrides: readonly { readonly code: string; readonly reason: string }[];
+  readonly ion: { readonly name: string; readonly path: string; readonly configuration: Parts };
+  readonly facts: readonly { readonly name: string; readonly value: string }[];
+  readonly ligands: readonly { readonly text: string; readonly path: string; readonly count: string }[];
+  readonly notes: string | null;
+  /** Side by side where there is more than one measurement. */
+  readonly summary: Table | null;
+  readonly measurements: readonly MeasurementShown[];
+  readonly neighbours: Neighbours;
+  readonly quotes: readonly Quote[];
+  readonly record: { readonly file: string; readonly hash: string };
+  readonly citation: string;
+  readonly report: { readonly text: string; readonly address: string | null };
+}
+
+const collectionName = (tree: CollectionTree): string => tree.meta.get('group.title') ?? 'Ligand-field parameters';
+
+export function complexPage(tree: CollectionTree, complex: ComplexNode): ComplexPage {
+  const { row, ion } = complex;
+  return {
+    id: row.id, formula: complex.formula, name: complexName(complex),
+    description: `${complex.formula.text}: band readings, assignment and ligand-field parameters of ${row.geometry} ${ion.name}.`,
+    hazards: complex.hazards.map(({ code, text, found_in }) => ({ code, text, foundIn: found_in })),
+    hazardOverrides: complex.hazardOverrides.map(({ code, reason }) => ({ code, reason })),
+    ion: { name: ion.name, path: ionPath(ion.name), configuration: configuration(ion.electrons) },
+    facts: identity(complex),
+    ligands: complex.ligands.map(({ row: link, ligand }) => ({
+      text: ligand.name, path: ligandPath(ligand.id), count: `${link.count}${link.bound === ligand.denticity ? '' : `, bound by ${link.bound} of ${ligand.denticity}`}`,
+    })),
+    notes: row.notes, summary: summary(complex),
+    measurements: complex.measurements.map((measurement) => measurementShown(tree, measurement)),
+    neighbours: neighbours(tree, complex), quotes: quotes(tree, complex),
+    record: { file: row.file, hash: row.hash },
+    citation: citation(tree, complex), report: report(tree, complex),
+  };
+}
+
+/** The name in the record, else the additive name built from the ligand records. */
+function complexName({ row, ion, ligands }: ComplexNode): string {
+  if (row.name !== null) return row.name;
+  const name = additiveName(ion.metal, elementName(ion.metal) ?? ion.metal, romanNumeral(ion.oxidation), ligands.map(({ row: link, ligand }) => ({ name: ligand.name, count: link.count })), row.charge);
+  return row.isomer === 'none' ? name : `${row.isomer}-${name}`;
+}
+
+function identity({ row }: ComplexNode): ComplexPage['facts'] {
+  return [
+    { name: 'Geometry', value: row.fitted === 1 ? row.geometry : `${row.geometry}: stored and drawn, not fitted` },
+    ...(row.isomer === 'none' ? [] : [{ name: 'Isomer', value: row.isomer }]),
+    { name: 'Spin', value: row.spin === null ? 'not recorded' : `${row.spin}${row.spin_assumed === 1 ? ' (assumed)' : ''}` },
+    { name: 'Record', value: row.id },
+  ];
+}
+
+function summary({ measurements }: ComplexNode): Table | null {
+  if (measurements.length < 2) return null;
+  return {
+    caption: 'Measurements of this complex',
+    columns: [rowColumn('Measurement'), column('Conditions'), quantity('Δ', 'cm-1'), quantity('B', 'cm-1'), quantity('β', null), column('Verdict')],
+    rows: measurements.map((measurement) => [
+      { parts: [{ text: measurement.row.id, style: 'plain' }], path: `${complexPath(measurement.row.complex)}#${measurement.row.id}` }, conditions(measurement),
+      ...(['Delta', 'B', 'beta'] as const).map((name) => { const { total } = parameterShown(measurement.chosen.parameters[name]); return total.text ?? soft('withheld'); }),
+      measurement.chosen.row.verdict,
+    ]),
+  };
+}
+
+function measurementShown(tree: CollectionTree, measurement: MeasurementNode): MeasurementShown {
+  const { row, chosen } = measurement;
+  return {
+    id: row.id, heading: conditions(measurement), sample: row.sample, notes: row.notes,
+    read: measurementRead(measurement, row.id), meaning: measurementMeaning(tree, measurement, row.id),
+    cautions: chosen.cautions.map(({ code, text }) => ({ code, text })),
+    origin: measurementOrigin(tree, measurement),
+  };
+}
+
+function citation(tree: CollectionTree, { row, formula }: ComplexNode): string {
+  const release = tree.meta.get('group.release') ?? 'not recorded';
+  const doi = tree.meta.get('group.doi');
+  const address = new URL(complexPath(row.id), tree.meta.get('group.url') ?? 'https://example.org/').href;
+  return `${tree.meta.get('group.name') ?? 'The group'}, ${collectionName(tree)}, release ${release}, record ${row.id}, ${formula.text}, ${address}. DOI: ${doi ?? 'not yet assigned'}.`;
+}
+
+function report(tree: CollectionTree, { row }: ComplexNode): ComplexPage['report'] {
+  const contact = tree.meta.get('group.contact') ?? null;
+  const text = `Name the record, ${row.id}, the measurement, the band or number, and what it should be.`;
+  if (contact === null) return { text: `${text} The group gives no contact.`, address: null };
+  return /^[^\s@]+@[^\s@]+$/.test(contact)
+    ? { text, address: `mailto:${contact}?subject=${encodeURIComponent(`Record ${row.id}`)}` }
+    : { text: `${text} Contact: ${contact}.`, address: null };
+}
+

@@ -1,0 +1,126 @@
+import type { Geometry } from '#engine';
+import { type LevelDiagram, levelDiagram } from '../charts/levelCurves.ts';
+import { type DiagramMark, diagramCeiling, diagramOverlay, levelDiagramFigure } from '../charts/levelDiagram.ts';
+import { newDocument } from '../charts/plot.ts';
+import { oncePerCollection } from './memo.ts';
+import { type PublishedFigure, csvText, figureFiles } from './figure.ts';
+import { complexPath, ionSlug } from './paths.ts';
+import { counted, difference, energy, figures, ratio } from './show.ts';
+import { type Cell, type Table, column, quantity, rowColumn, words } from './table.ts';
+import type { CollectionTree, MeasurementNode } from './tree.ts';
+import { configuration, termShown } from './typeset.ts';
+
+/** The diagram of one ion in one geometry, and what the collection has to put on it. */
+export interface IonDiagram {
+  readonly id: string;
+  readonly ion: string;
+  readonly electrons: number;
+  readonly geometry: Geometry;
+  readonly diagram: LevelDiagram;
+  readonly ceiling: number;
+  readonly marked: readonly { readonly key: string; readonly measurement: MeasurementNode; readonly mark: DiagramMark }[];
+}
+
+/** One diagram for each ion and fitted geometry of the collection. */
+export const ionDiagrams = oncePerCollection((tree): readonly IonDiagram[] => {
+  const fitted = tree.complexes.filter((complex) => complex.row.fitted === 1 && complex.ion.electrons > 0 && complex.ion.electrons < 10);
+  return [...Map.groupBy(fitted, (complex) => `${complex.ion.name}|${complex.row.geometry}`).values()].map((complexes) => {
+    const { ion, row } = complexes[0]!;
+    return ionDiagram(tree, ion.name, ion.electrons, row.geometry as Geometry, complexes.flatMap((complex) => complex.measurements));
+  });
+});
+
+function ionDiagram(tree: CollectionTree, ion: string, electrons: number, geometry: Geometry, measurements: readonly MeasurementNode[]): IonDiagram {
+  const placed = measurements.map((measurement) => ({ measurement, place: placeOf(measurement) }))
+    .filter((one): one is { measurement: MeasurementNode; place: Omit<DiagramMark, 'key'> } => one.place !== null)
+    .sort((a, b) => a.place.x - b.place.x);
+  const furthest = Math.max(0, ...placed.map(({ place }) => place.x));
+  const reach = Math.min(80, Math.max(geometry === 'octahedral' ? 40 : 20, 5 * Math.ceil((1.1 * furthest) / 5)));
+  const marked = placed.filter(({ place }) => place.x <= reach).map(({ measurement, place }, index) => {
+    const key = letterKey(index);
+    return { key, measurement, mark: { ...place, key } };
+  });
+  return {
+    id: `${ionSlug(ion)}-${geometry}`, ion, electrons, geometry, marked,
+    diagram: levelDiagram({ electrons, geometry }, cOverBFor(tree, ion), reach),
+    ceiling: diagramCeiling(reach, marked.map(({ mark }) => mark)),
+  };
+}
+
+/** Where a measurement's chosen reading lies on its ion's diagram; null where Delta or B is not known. */
+export function placeOf({ chosen }: MeasurementNode): Omit<DiagramMark, 'key'> | null {
+  const racahB = chosen.parameters.B.value;
+  const x = chosen.row.Delta_over_B;
+  if (racahB === null || x === null) return null;
+  return { x, bands: chosen.transitions.map(({ row }) => ({ y: row.observed / racahB, used: row.used === 1 })) };
+}
+
+/** The policy's C/B for an ion. */
+export function cOverBFor(tree: CollectionTree, ion: string): number {
+  const perIon = JSON.parse(tree.policy.C_over_B_per_ion) as Readonly<Record<string, { readonly value: number }>>;
+  return perIon[ion]?.value ?? tree.policy.C_over_B;
+}
+
+/** a, b, ... z, aa, ab, ... */
+export function letterKey(index: number): string {
+  const letter = String.fromCharCode(97 + (index % 26));
+  return index < 26 ? letter : letterKey(Math.floor(index / 26) - 1) + letter;
+}
+
+/** The diagrams of one ion with every complex of the collection that has both Delta and B. */
+export const ionDiagramFigures = oncePerCollection((tree, ion): readonly PublishedFigure[] =>
+  ionDiagrams(tree).filter((one) => one.ion === ion).map(diagramFigure));
+
+function diagramFigure(one: IonDiagram): PublishedFigure {
+  const { ion, geometry, diagram, marked, electrons } = one;
+  const title = `Energy levels of ${geometry} ${ion}, d${electrons}, as a Tanabe-Sugano diagram.`;
+  const id = `${one.id}-levels`;
+  const ratioText = ratio(diagram.cOverB, 2);
+  const crossings = diagram.grounds.slice(1).map((range) => figures(range.from, 3));
+  return {
+    id, title, titleParts: [...words(`Energy levels of ${geometry} ${ion}, `), ...configuration(electrons), ...words(', as a Tanabe-Sugano diagram.')],
+    svg: levelDiagramFigure(diagram, one.ceiling, marked.map(({ mark }) => mark), newDocument(), { id, title, description: describe(one) }),
+    caption: [
+      `E/B against Δ/B at C/B = ${ratioText}. Solid: the ground level's multiplicity; thin and dashed: other multiplicities.`,
+      ...(crossings.length > 0 ? [`Dotted upright: the ground level changes at Δ/B = ${crossings.join(', ')}.`] : []),
+      marked.length > 0
+        ? `${counted(marked.length, 'reading')} of the collection at the fitted Δ/B, n = ${marked.length}: full dots are observed bands in the fit, open dots are bands only compared with it.`
+        : 'No complex of the collection has both Δ and B here.',
+    ],
+    source: 'Levels computed from the full configuration; bands from this collection, conditions as listed in its table.',
+    table: markTable(one), files: figureFiles(id), csv: diagramCsv(one),
+  };
+}
+
+/** The same diagram without marks, for complex pages to lay theirs over. */
+export function diagramBackground(one: IonDiagram): string {
+  return levelDiagramFigure(one.diagram, one.ceiling, [], newDocument(), { id: `${one.id}-background`, title: `Energy levels of ${one.geometry} ${one.ion}`, description: describe(one) });
+}
+
+export function complexOverlay(one: IonDiagram, mark: Omit<DiagramMark, 'key'>, id: string, title: string): string {
+  return diagramOverlay(one.diagram.reach, one.ceiling, [{ ...mark, key: '' }], { id, title, description: `Observed bands at Δ/B = ${figures(mark.x, 4)}: E/B = ${mark.bands.map((band) => figures(band.y, 4)).join(', ')}.` });
+}
+
+function describe({ diagram, ceiling }: IonDiagram): string {
+  return `${counted(diagram.curves.length, 'level')} drawn over Δ/B from 0 to ${diagram.reach} and E/B from 0 to ${ceiling}. Ground level: ${diagram.grounds.map((range) => range.label).join(', then ')}.`;
+}
+
+function markTable({ marked, electrons }: IonDiagram): Table {
+  return {
+    caption: 'Readings on the diagram',
+    columns: [column('Key'), rowColumn('Complex'), column('Measurement'), quantity('Δ/B', null), column('Transition'), quantity('ν̃', 'cm-1'), quantity('E/B', null), quantity('residual', 'cm-1', true)],
+    rows: marked.flatMap(({ key, measurement, mark }) => measurement.chosen.transitions.map(({ row }, index): readonly Cell[] => [
+      key, { parts: measurement.complex.formula.parts, path: complexPath(measurement.complex.row.id) },
+      measurement.row.id, figures(mark.x, 4), { parts: termShown(row.label, electrons) }, energy(row.observed, null), figures(mark.bands[index]!.y, 4),
+      row.residual === null ? { parts: words('none'), soft: true } : difference(row.residual),
+    ])),
+  };
+}
+
+function diagramCsv({ diagram, marked, ion }: IonDiagram): string {
+  return csvText(['kind', 'ion', 'complex', 'measurement', 'label', 'Delta_over_B', 'E_over_B'], [
+    ...diagram.curves.flatMap((curve) => curve.points.map((point) => ['level', ion, null, null, curve.labels.join('/'), point.x, point.y])),
+    ...marked.flatMap(({ measurement, mark }) => measurement.chosen.transitions.map(({ row }, index) =>
+      ['observed', ion, measurement.complex.row.id, measurement.row.id, row.label, mark.x, mark.bands[index]!.y])),
+  ]);
+}

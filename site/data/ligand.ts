@@ -1,0 +1,63 @@
+import { resultRowOf, orderedResults } from './collection.ts';
+import type { ResultRow } from '../components/resultRow.ts';
+import { ligandPath } from './paths.ts';
+import { counted, listed, ratio } from './show.ts';
+import { type SeriesShown, ligandSeries } from './seriesFigures.ts';
+import type { LigandRow } from './rows.ts';
+import { type Cell, type Table, column, quantity, rowColumn } from './table.ts';
+import type { CollectionTree } from './tree.ts';
+import { type FormulaShown, formulaShown } from './typeset.ts';
+
+export interface LigandPage {
+  readonly id: string;
+  readonly name: string;
+  readonly formula: FormulaShown;
+  readonly description: string;
+  readonly facts: readonly { readonly name: string; readonly value: string }[];
+  readonly notes: string | null;
+  readonly sentence: string;
+  readonly series: readonly SeriesShown[];
+  readonly rows: readonly ResultRow[];
+}
+
+const list = (json: string): readonly string[] => JSON.parse(json) as readonly string[];
+
+export function ligandPage(tree: CollectionTree, id: string): LigandPage {
+  const row = tree.ligands.find((ligand) => ligand.id === id)!;
+  const results = orderedResults(tree).filter((measurement) => measurement.complex.ligands.some(({ ligand }) => ligand.id === id));
+  const complexes = new Set(results.map((measurement) => measurement.complex.row.id)).size;
+  const synonyms = list(row.synonyms);
+  return {
+    id, name: row.name, formula: formulaShown(row.formula, 'none', tree.abbreviations), notes: row.notes,
+    description: `${row.name}: complexes of the collection with this ligand, and their series by metal.`,
+    facts: [
+      { name: 'Symbol in formulas', value: row.abbreviation ?? 'none' },
+      { name: 'Other names', value: synonyms.length === 0 ? 'none recorded' : synonyms.join(', ') },
+      { name: 'Charge', value: ratio(row.charge, 0) },
+      { name: 'Donor atoms', value: donors(row) },
+      { name: 'SMILES', value: row.smiles ?? 'not recorded' },
+      { name: 'Record', value: row.id },
+    ],
+    sentence: results.length === 0 ? 'No complex of the collection holds this ligand.' : `${counted(complexes, 'complex', 'complexes')}, ${counted(results.length, 'measurement')}.`,
+    series: ligandSeries(tree, id), rows: results.map(resultRowOf),
+  };
+}
+
+function donors(row: LigandRow): string {
+  const atoms = list(row.donors);
+  return `${listed(atoms)}${atoms.length === 1 ? ', one donor' : `, ${atoms.length} donors`}`;
+}
+
+/** Every ligand of the collection. */
+export function ligandList(tree: CollectionTree): Table {
+  const counts = new Map<string, number>();
+  for (const complex of tree.complexes) for (const { ligand } of complex.ligands) counts.set(ligand.id, (counts.get(ligand.id) ?? 0) + 1);
+  return {
+    caption: 'Ligands of the collection',
+    columns: [rowColumn('Ligand'), column('Formula'), column('Symbol'), column('Donor atoms'), quantity('charge', null, true), quantity('complexes', null, true)],
+    rows: [...tree.ligands].sort((a, b) => (a.name < b.name ? -1 : a.name > b.name ? 1 : 0)).map((row): readonly Cell[] => [
+      { parts: [{ text: row.name, style: 'plain' }], path: ligandPath(row.id) }, { parts: formulaShown(row.formula, 'none', tree.abbreviations).parts },
+      row.abbreviation ?? '', list(row.donors).join(', '), ratio(row.charge, 0), ratio(counts.get(row.id) ?? 0, 0),
+    ]),
+  };
+}

@@ -1,0 +1,66 @@
+import { NOT_RECORDED, difference, parameterShown, plainNumber } from './show.ts';
+import type { SourceRow } from './rows.ts';
+import type { CollectionTree, ComplexNode, MeasurementNode } from './tree.ts';
+
+export interface Origin {
+  readonly facts: readonly { readonly name: string; readonly value: string; readonly address?: string }[];
+}
+
+/** Where a measurement came from; what was not recorded says so where a reader would ask. */
+export function measurementOrigin(tree: CollectionTree, { row }: MeasurementNode): Origin {
+  const source = row.source === null ? null : tree.sources.get(row.source) ?? null;
+  const optional = (name: string, value: string | null) => value === null ? [] : [{ name, value }];
+  const address = source === null ? undefined : sourceAddress(source);
+  return {
+    facts: [
+      ...(source === null
+        ? [{ name: 'Notebook', value: row.notebook ?? NOT_RECORDED }, { name: 'Measured by', value: person(tree, row.measured_by) }, { name: 'Date', value: row.measured_on ?? NOT_RECORDED }]
+        : [{ name: 'Source', value: `${source.reference}${row.source_place ? ` (${row.source_place})` : ''}`, ...(address === undefined ? {} : { address }) }]),
+      { name: 'Sample', value: row.sample ?? NOT_RECORDED },
+      { name: 'Temperature', value: row.temperature_typed === null ? NOT_RECORDED : `typed “${row.temperature_typed}”${row.temperature_assumed === 1 ? ', value assumed' : ''}` },
+      { name: 'Technique', value: row.technique ?? NOT_RECORDED },
+      ...optional('Host', row.host), ...optional('Concentration', row.concentration), ...optional('Path length', row.path_length), ...optional('Batch', row.batch),
+      ...optional('Magnetic moment', row.magnetic_moment), ...optional('EPR g', row.epr_g),
+      { name: 'Raw file', value: row.raw_file === null ? NOT_RECORDED : `${row.raw_file}${row.raw_hash ? `, hash ${row.raw_hash}` : ''}` },
+      ...optional('Policy overridden', row.policy_reason === null ? null : `${row.policy}: ${row.policy_reason}`),
+    ],
+  };
+}
+
+function person(tree: CollectionTree, initials: string | null): string {
+  if (initials === null) return NOT_RECORDED;
+  return tree.people.find((one) => one.initials === initials)?.name ?? initials;
+}
+
+export function sourceAddress({ doi, url }: SourceRow): string | undefined {
+  if (doi !== null) return `https://doi.org/${doi}`;
+  return url !== null && /^https?:\/\//.test(url) ? url : undefined;
+}
+
+/** A parameter as printed elsewhere against the refitted one. */
+export interface Quote {
+  readonly parameter: string;
+  readonly typed: string;
+  readonly refitted: string;
+  readonly difference: string | null;
+  readonly source: string;
+  readonly address: string | undefined;
+}
+
+export function quotes(tree: CollectionTree, { measurements }: ComplexNode): readonly Quote[] {
+  return measurements.flatMap((measurement) => measurement.quoted.map((row): Quote => {
+    const source = tree.sources.get(row.source);
+    const own = row.parameter === 'Dq' ? measurement.chosen.parameters.Delta : measurement.chosen.parameters[row.parameter as 'Delta'];
+    const printed = row.parameter === 'Dq' ? 10 * row.value : row.value;
+    const { total } = parameterShown(own);
+    return {
+      parameter: row.parameter === 'Dq' ? 'Dq (Δ/10)' : SYMBOL[row.parameter] ?? row.parameter, typed: row.typed,
+      refitted: total.text ?? `withheld: ${total.reason}`,
+      difference: own.value === null ? null : row.parameter === 'beta' ? plainNumber(printed - own.value, 2) : difference(printed - own.value),
+      source: `${source?.reference ?? row.source}${row.source_place ? `, ${row.source_place}` : ''}`,
+      address: source === undefined ? undefined : sourceAddress(source),
+    };
+  }));
+}
+
+const SYMBOL: Readonly<Record<string, string>> = { Delta: 'Δ', B: 'B', C: 'C', beta: 'β' };

@@ -1,0 +1,14 @@
+/**
+ * Address of a page or file of this site under its base path. A path that ends in a name without a dot is a page
+ * and gets its closing slash.
+ * @param path from the site's root, with or without a leading slash: "complexes/cr-am6", "data/results.csv"
+ */
+export function url(path: string, base: string = import.meta.env.BASE_URL): string {
+  const root = base.endsWith('/') ? base : `${base}/`;
+  const inner = path.replace(/^\/+/, '');
+  if (inner === '') return root;
+  const [, address = '', rest = ''] = /^([^?#]*)(.*)$/.exec(inner) ?? [];
+  const last = address.split('/').at(-1) ?? '';
+  const closed = address === '' || address.endsWith('/') || last.includes('.') ? address : `${address}/`;
+  return `${root}${closed}${rest}`;
+}

@@ -1,0 +1,17 @@
+import { fileURLToPath } from 'node:url';
+import { configDefaults, defineConfig } from 'vitest/config';
+
+// scripts/test.ts sets this where there is no browser to run tests/browser in.
+const withoutBrowser = process.env['BANDSTEAD_WITHOUT_BROWSER'] === '1';
+
+export default defineConfig({
+  root: fileURLToPath(new URL('..', import.meta.url)),
+  test: {
+    include: ['tests/**/*.test.ts'],
+    exclude: [...configDefaults.exclude, ...(withoutBrowser ? ['tests/browser/**'] : [])],
+    // A test left focused would hide the others.
+    allowOnly: false,
+    testTimeout: 60_000,
+    hookTimeout: 180_000,
+  },
+});
