@@ -23,8 +23,54 @@ export type { Range } from './quantity/range.ts';
 export type { Caution } from './cautions/types.ts';
 export type { ParameterName, Standing, Verdict } from './words/types.ts';
 // Readings: what comes out
-export { readMeasurement } from './readings/read.ts';
-export type { Branch, Parameter, PredictedBand, RatioUsed, Reading, ReadingBand } from './readings/types.ts';
+export { readMeasurement, readWithRivals } from './readings/read.ts';
+export type { Branch, Parameter, PredictedBand, RatioUsed, Reading, ReadingBand, ReadMeasurement } from './readings/types.ts';
+export type { Evidence, EvidenceCode } from './readings/evidence.ts';
+export type { DoubletOrder, GroundState } from './readings/groundState.ts';
+export type { Identifiability } from './readings/identifiability.ts';
+export type { HelpfulBand } from './readings/measureNext.ts';
+export type { LeftOut, PairAlone, Stress } from './readings/stress.ts';
+// Series: what may be compared
+export { aquaLigand, publishedFactor, publishedIonOf, publishedLigandOf } from './series/publishedMatch.ts';
+export { byIon, ionSubject, ligandSubject, roomTemperature, selectComparable, temperatureReach, usualSeries, whyUnlike } from './series/comparable.ts';
+export { difference, differenceBasis, distinguishableAbove } from './series/difference.ts';
+export { complexKey, ionKey, ionWords, ligandSetKey, measurementId, onlyLigand, phaseClass, spinName } from './series/identity.ts';
+export { indistinguishableGroups } from './series/groups.ts';
+export { parametersByName, seriesResult, usedTransitions } from './series/summary.ts';
+export { seriesParameters } from './series/types.ts';
+export type { BoundLigand, ComplexIdentity, PhaseClass, SeriesLigand, SeriesNumber, SeriesParameter, SeriesResult } from './series/types.ts';
+export type { Comparable, Frame, NotCompared, Subject } from './series/comparable.ts';
+export type { Difference, DifferenceBasis } from './series/difference.ts';
+export type { IndistinguishableGroup } from './series/groups.ts';
+// Series: factors
+export { fitFactors } from './series/factors.ts';
+export { isPrediction, predictFromFactors } from './series/predictFromFactors.ts';
+export { publishedFactorsFromMemory, publishedFactorsSource, publishedIons, publishedLigands } from './series/published.ts';
+export { conditionWords, notDistinguishableSentence } from './words/series.ts';
+export { scatterSentence } from './words/factors.ts';
+export type { Factor, FactorComplex, FactorFit, FactorIsland, FactorKind, FactorPrediction, FactorScatter, FactorSolution } from './series/factorTypes.ts';
+export type { FactorOrder } from './series/factors.ts';
+export type { Predicted } from './series/predictFromFactors.ts';
+export type { PublishedIon, PublishedLigand } from './series/published.ts';
+// Series: orders, trends, correlation
+export { expectations, trendSteps } from './series/trends.ts';
+export { averageFactor, inversions } from './series/inversions.ts';
+export { kendallTauB, rankAgreement } from './series/rankAgreement.ts';
+export { planeCorrelation, planePoints } from './series/correlation.ts';
+export type { Expectation, TrendKind, TrendStep } from './series/trends.ts';
+export type { Inversion } from './series/inversions.ts';
+export type { PlaneCorrelation, PlanePoint } from './series/correlation.ts';
+export type { RankAgreement, Ranked } from './series/rankAgreement.ts';
+// Series: placing a complex
+export { averageEnvironment, parentsOf } from './series/averageEnvironment.ts';
+export { memberPlacements, reviewAbove } from './series/memberPlacement.ts';
+export { placeResult, placingGround } from './series/place.ts';
+export { frameConditions, placeWords } from './series/placeWords.ts';
+export type { Parents } from './series/averageEnvironment.ts';
+export type { PlacedPrediction, PredictionMethod } from './series/memberPlacement.ts';
+export type { NearComplex, NearestComplexes } from './series/nearest.ts';
+export type { PlaceInSeries, SeriesNeighbour, Widened } from './series/placeInSeries.ts';
+export type { ComparedCollection, EarlierMeasurement, Placement, PlacingCaution, PlacingGround } from './series/placeTypes.ts';
 // Levels of a d^n ion in a cubic field
 export { levels } from './levels/levels.ts';
 export type { FieldIon, FieldParameters, Gradient, Level } from './levels/levels.ts';

@@ -17,7 +17,6 @@ export interface SpectralFacts {
   readonly coverageNotStated: boolean;
   readonly componentsMerged: boolean;
   readonly componentWithoutDegeneracy: boolean;
-  readonly doubtfulReadingUsed: boolean;
   readonly mixesOriginsAndMaxima: boolean;
   readonly innocenceDoubtful: boolean;
   readonly nuclearity: number;
@@ -34,6 +33,18 @@ export interface SpectralFacts {
   /** Spin-allowed bands predicted where nothing was scanned, as printed. */
   readonly notScanned: readonly string[];
   readonly equallyGoodBranch: boolean;
+  readonly groundContradicted: boolean;
+  readonly rival: 'near' | 'better' | null;
+  readonly rivalGeometry: boolean;
+  /** Bands whose strength is not that of the transition they are assigned to, as printed. */
+  readonly forbiddenUsedAsAllowed: readonly string[];
+  readonly chargeTransferUsed: readonly string[];
+  /** A dip lies between two fitted maxima. */
+  readonly dipBetweenMaxima: boolean;
+  /** A band on which more than half of the fit hangs was read as a shoulder or rounded to 100 cm-1 or more. */
+  readonly roughBandCarriesFit: string | null;
+  /** A fitted band lies where the solvent itself absorbs in the near infrared. */
+  readonly nearSolventOvertone: { readonly band: number; readonly solvent: string } | null;
 }
 
 /** 1E and 3T1 mix strongly when they lie closer than this. */
@@ -45,6 +56,12 @@ export function spectralCautions(facts: SpectralFacts): readonly Caution[] {
   const add = (applies: boolean, code: string, text: string): void => {
     if (applies) found.push({ code, text });
   };
+  add(facts.groundContradicted, 'SPIN_CONTRADICTS_FIT', 'The fitted parameters put another spin state lowest than the one declared.');
+  add(facts.rival === 'better', 'BETTER_RIVAL', 'Another reading fits these bands clearly better than the chosen one.');
+  add(facts.rival === 'near', 'NEAR_RIVAL', 'Another reading fits these bands as well as the chosen one, within the policy\'s margin.');
+  add(facts.rival !== null && facts.rivalGeometry, 'GEOMETRY_RIVAL', 'The other geometry fits these bands as well.');
+  add(facts.forbiddenUsedAsAllowed.length > 0, 'WEAK_FOR_SPIN_ALLOWED', `Weak as a spin-forbidden band, yet used as spin-allowed: ${facts.forbiddenUsedAsAllowed.join(', ')}.`);
+  add(facts.chargeTransferUsed.length > 0, 'STRONG_AS_CHARGE_TRANSFER', `As strong as charge transfer, yet used as a d-d band: ${facts.chargeTransferUsed.join(', ')}.`);
   add(facts.groundNearCrossing, 'SPIN_NEAR_CROSSING', 'At these parameters the declared spin state is the ground state only within the range of an assumed value.');
   add(facts.equallyGoodBranch, 'SECOND_SOLUTION', 'Another pair of Delta and B fits these bands as well; both are listed.');
   add(facts.ratioAtEdge, 'BAND_RATIO_AT_EDGE', 'The ratio of the bands lies at the edge of what the model allows: B would fall to zero, so it is withheld.');
@@ -57,7 +74,9 @@ export function spectralCautions(facts: SpectralFacts): readonly Caution[] {
   add(facts.jahnTellerEnvelope, 'JAHN_TELLER_ENVELOPE', 'One band stands for a transition that a Jahn–Teller distortion splits: Delta is apparent and kept out of series.');
   add(facts.componentsMerged, 'COMPONENTS_AVERAGED', 'Components of one term enter as their barycentre weighted by degeneracy.');
   add(facts.componentWithoutDegeneracy, 'COMPONENT_ORDER_OPEN', 'The order of the components is not decided, so they have no barycentre and stay out of the fit.');
-  add(facts.doubtfulReadingUsed, 'SHOULDER_CARRIES_FIT', 'A shoulder, dip or envelope carries part of the fit.');
+  add(facts.roughBandCarriesFit !== null, 'ROUGH_BAND_CARRIES_FIT', `More than half of the fit hangs on ${facts.roughBandCarriesFit}, which was read as a shoulder or envelope or was rounded.`);
+  add(facts.dipBetweenMaxima, 'DIP_READ_AS_TWO_BANDS', 'A dip lies between two fitted maxima: an interference dip cuts one band in two, and neither edge is a band.');
+  add(facts.nearSolventOvertone !== null, 'SOLVENT_OVERTONE_NEARBY', `The solvent (${facts.nearSolventOvertone?.solvent ?? ''}) absorbs near the band at ${facts.nearSolventOvertone?.band ?? ''} cm⁻¹.`);
   add(facts.mixesOriginsAndMaxima, 'ORIGIN_MIXED_WITH_MAXIMA', 'A zero-phonon position of a broad band is fitted together with absorption maxima, which lie higher by the vibrational spread.');
   add(facts.innocenceDoubtful, 'LIGAND_INNOCENCE', 'The oxidation state is in doubt (ligand innocence), so beta is withheld.');
   add(facts.nuclearity > 1, 'MORE_THAN_ONE_METAL', `The complex holds ${facts.nuclearity} metal centres; the model holds one.`);

@@ -37,57 +37,94 @@ export function clusters(values: ArrayLike<number>, tolerance: number): [number,
   return found;
 }
 
+/** Eigenvectors of one block at one point, column k belonging to its k-th level. */
+export interface Diagonal {
+  readonly vectors: Float64Array;
+}
+
+const single: Diagonal = { vectors: Float64Array.of(1) };
+
+/** Work space for the matrix of a block: nothing outlives the call that fills it. */
+const workspaces: Float64Array[] = [];
+
+function workspace(size: number): Float64Array {
+  workspaces[size] ??= new Float64Array(size * size);
+  return workspaces[size];
+}
+
 /**
- * Solves one block for H = sign * delta * field + racahB * B + racahC * C.
+ * Diagonalises one block for H = sign * delta * field + racahB * B + racahC * C.
  *
  * Where levels of the block coincide (at Delta = 0), the field is diagonalised among them, so that order
  * and derivatives are those of the limit Delta -> 0 from above.
  *
  * @param sign +1 octahedral, -1 tetrahedral
  */
-export function solveBlock(block: Block, sign: number, delta: number, racahB: number, racahC: number): BlockSolution {
+export function diagonalise(block: Block, sign: number, delta: number, racahB: number, racahC: number): Diagonal {
   const { size, field, racahB: matrixB, racahC: matrixC } = block;
+  if (size === 1) return single;
+  const total = workspace(size);
+  let scale = 0;
+  for (let i = 0; i < total.length; i++) {
+    const element = sign * delta * field[i]! + racahB * matrixB[i]! + racahC * matrixC[i]!;
+    total[i] = element;
+    const magnitude = Math.abs(element);
+    if (magnitude > scale) scale = magnitude;
+  }
+  const { values, vectors } = symmetricEigen(total, size);
+  for (let k = 1; k < size; k++)
+    if (values[k]! - values[k - 1]! <= 1e-10 * scale) {
+      for (const [first, last] of clusters(values, 1e-10 * scale)) if (last > first) alignWithField(block, sign, vectors, first, last);
+      break;
+    }
+  return { vectors };
+}
+
+/** Exact derivatives of the k-th level by Delta, B and C. */
+export interface LevelSlopes {
+  readonly field: number;
+  readonly racahB: number;
+  readonly racahC: number;
+}
+
+/** dE/dp = <v|H_p|v> (Hellmann-Feynman) for one level of a diagonalised block. */
+export function levelSlopes(block: Block, sign: number, { vectors }: Diagonal, k: number): LevelSlopes {
+  const { size, field, racahB: matrixB, racahC: matrixC } = block;
+  let sumField = 0;
+  let sumB = 0;
+  let sumC = 0;
+  for (let i = 0; i < size; i++) {
+    const left = vectors[i * size + k]!;
+    sumField += left * left * field[i * size + i]!;
+    // The matrices are symmetric: the diagonal once, what lies above it twice.
+    let rowB = matrixB[i * size + i]! * left;
+    let rowC = matrixC[i * size + i]! * left;
+    for (let j = i + 1; j < size; j++) {
+      const right = 2 * vectors[j * size + k]!;
+      rowB += matrixB[i * size + j]! * right;
+      rowC += matrixC[i * size + j]! * right;
+    }
+    sumB += left * rowB;
+    sumC += left * rowC;
+  }
+  return { field: sign * sumField, racahB: sumB, racahC: sumC };
+}
+
+/** Solves one block: all its levels with their derivatives. Arguments as for `diagonalise`. */
+export function solveBlock(block: Block, sign: number, delta: number, racahB: number, racahC: number): BlockSolution {
+  const { size } = block;
   const solution = {
     energy: new Float64Array(size), field: new Float64Array(size),
     racahB: new Float64Array(size), racahC: new Float64Array(size),
   };
-  if (size === 1) {
-    solution.field[0] = sign * field[0]!;
-    solution.racahB[0] = matrixB[0]!;
-    solution.racahC[0] = matrixC[0]!;
-    solution.energy[0] = delta * solution.field[0]! + racahB * matrixB[0]! + racahC * matrixC[0]!;
-    return solution;
-  }
-  const total = new Float64Array(size * size);
-  let scale = 0;
-  for (let i = 0; i < total.length; i++) {
-    total[i] = sign * delta * field[i]! + racahB * matrixB[i]! + racahC * matrixC[i]!;
-    scale = Math.max(scale, Math.abs(total[i]!));
-  }
-  const { values, vectors } = symmetricEigen(total, size);
-  for (const [first, last] of clusters(values, 1e-10 * scale)) if (last > first) alignWithField(block, sign, vectors, first, last);
+  const diagonal = diagonalise(block, sign, delta, racahB, racahC);
   for (let k = 0; k < size; k++) {
-    let sumField = 0;
-    let sumB = 0;
-    let sumC = 0;
-    for (let i = 0; i < size; i++) {
-      const left = vectors[i * size + k]!;
-      sumField += left * left * field[i * size + i]!;
-      let rowB = 0;
-      let rowC = 0;
-      for (let j = 0; j < size; j++) {
-        const right = vectors[j * size + k]!;
-        rowB += matrixB[i * size + j]! * right;
-        rowC += matrixC[i * size + j]! * right;
-      }
-      sumB += left * rowB;
-      sumC += left * rowC;
-    }
-    solution.field[k] = sign * sumField;
-    solution.racahB[k] = sumB;
-    solution.racahC[k] = sumC;
+    const slopes = levelSlopes(block, sign, diagonal, k);
+    solution.field[k] = slopes.field;
+    solution.racahB[k] = slopes.racahB;
+    solution.racahC[k] = slopes.racahC;
     // Energies are homogeneous of degree one, so Euler's theorem gives the eigenvalue back.
-    solution.energy[k] = delta * solution.field[k]! + racahB * sumB + racahC * sumC;
+    solution.energy[k] = delta * slopes.field + racahB * slopes.racahB + racahC * slopes.racahC;
   }
   return solution;
 }

@@ -16,7 +16,7 @@ const sweepsAtMost = 40;
 
 /**
  * @param matrix symmetric, `size` x `size`, row-major; not changed
- * @throws RangeError where the rotations do not converge (a matrix with NaN or infinity)
+ * @throws RangeError where the rotations do not converge (a matrix with NaN, infinity, or elements above about 1e153, whose squares overflow)
  */
 export function symmetricEigen(matrix: Float64Array, size: number): SymmetricEigen {
   const a = matrix.slice();
@@ -29,9 +29,10 @@ export function symmetricEigen(matrix: Float64Array, size: number): SymmetricEig
       on += a[i * size + i]! ** 2;
       for (let j = i + 1; j < size; j++) off += a[i * size + j]! ** 2;
     }
-    // Convergence is quadratic: below this the next sweep would change nothing that a double can hold.
-    if (off <= 1e-34 * on) break;
-    if (sweep === sweepsAtMost || !Number.isFinite(off)) throw new RangeError('matrix: the eigenvalues did not converge');
+    // Before the test of convergence, which an infinite diagonal would pass.
+    if (sweep === sweepsAtMost || !Number.isFinite(off + on)) throw new RangeError('matrix: the eigenvalues did not converge');
+    // Convergence is quadratic: eigenvalues are wrong by the square of what is left, vectors by less than rounding.
+    if (off <= 1e-30 * on) break;
     for (let p = 0; p < size - 1; p++) for (let q = p + 1; q < size; q++) rotate(a, v, size, p, q);
   }
   return sorted(a, v, size);

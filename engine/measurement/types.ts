@@ -46,6 +46,8 @@ export interface Measurement {
   /** Declared multiplicity of the ground state; null where the ion and geometry leave no choice or none was typed. */
   readonly multiplicity: number | null;
   readonly phase: 'solution' | 'solid' | 'crystal' | 'glass' | 'film';
+  /** Solvent or matrix as typed; null: not recorded. */
+  readonly medium: string | null;
   /** K, null: not recorded. */
   readonly temperature: number | null;
   readonly technique: 'absorption' | 'diffuse reflectance' | 'excitation' | 'emission' | 'MCD' | null;

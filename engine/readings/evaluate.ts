@@ -1,6 +1,7 @@
 import type { FieldParameters, Gradient } from '../levels/levels.ts';
 import { fieldSign } from '../levels/levels.ts';
-import { solveBlock } from '../levels/solve.ts';
+import { diagonalise, levelSlopes } from '../levels/solve.ts';
+import type { Diagonal } from '../levels/solve.ts';
 import type { Block } from '../shell/blocks.ts';
 import { levelPlace } from './table.ts';
 import type { FieldCase } from './table.ts';
@@ -13,15 +14,17 @@ export interface TransitionAt {
 
 /** Transitions from one level to others, at any parameters; the order of `labels` is kept. */
 export function transitionsAt(ion: FieldCase, ground: string, labels: readonly string[], at: FieldParameters): TransitionAt[] {
-  const solved = new Map<Block, ReturnType<typeof solveBlock>>();
+  const sign = fieldSign(ion.geometry);
+  const solved = new Map<Block, Diagonal>();
   const level = (label: string) => {
     const { block, index } = levelPlace(ion, label);
-    let solution = solved.get(block);
-    if (!solution) {
-      solution = solveBlock(block, fieldSign(ion.geometry), at.delta, at.racahB, at.racahC);
-      solved.set(block, solution);
+    let diagonal = solved.get(block);
+    if (!diagonal) {
+      diagonal = diagonalise(block, sign, at.delta, at.racahB, at.racahC);
+      solved.set(block, diagonal);
     }
-    return { energy: solution.energy[index]!, field: solution.field[index]!, b: solution.racahB[index]!, c: solution.racahC[index]! };
+    const { field, racahB, racahC } = levelSlopes(block, sign, diagonal, index);
+    return { energy: at.delta * field + at.racahB * racahB + at.racahC * racahC, field, b: racahB, c: racahC };
   };
   const lower = level(ground);
   return labels.map((label) => {

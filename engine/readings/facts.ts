@@ -1,9 +1,10 @@
 import type { SpectralFacts } from '../cautions/spectral.ts';
 import { shownLabel } from '../levels/labels.ts';
 import type { Measurement } from '../measurement/types.ts';
+import type { Policy } from '../policy/types.ts';
 import { concise } from '../quantity/print.ts';
 import { transitionsAt } from './evaluate.ts';
-import type { Fit } from './fit.ts';
+import type { Assigned, Fit } from './fit.ts';
 import type { GroundCheck } from './groundCheck.ts';
 import type { ScoredReading } from './search.ts';
 import { transitionOf } from './transitions.ts';
@@ -20,6 +21,8 @@ export interface ReadingParts {
   readonly parameters: readonly Parameter[];
   readonly ground: GroundCheck;
   readonly predicted: readonly PredictedBand[];
+  readonly policy: Policy;
+  readonly rivals: { readonly best: 'near' | 'better' | null; readonly otherGeometry: boolean };
 }
 
 /** Ions whose octahedral ground level is an E level: their one spin-allowed band is split by a Jahn-Teller distortion. */
@@ -36,11 +39,73 @@ function singletGap(ion: GroundCase, fit: Fit): number | null {
   return singlet!.energy - triplet!.energy;
 }
 
+/** Molar absorption coefficients, L mol-1 cm-1: below the first hardly spin-allowed, above the second charge transfer (common practice, no source). */
+const weakBelow = 1;
+const strongAbove = 1000;
+
+/** Fitted bands whose strength does not go with a spin-allowed d-d transition, as printed. */
+function strengthMismatch(
+  measurement: Measurement, ion: GroundCase, fitted: readonly Assigned[], isOff: (spinAllowed: boolean, epsilon: number) => boolean,
+): string[] {
+  return fitted
+    .filter(({ label, observation }) => observation.bands.some((index) => {
+      const { epsilon } = measurement.bands[index]!;
+      return epsilon !== null && isOff(transitionOf(ion, label).spinAllowed, epsilon);
+    }))
+    .map(({ label }) => shownLabel(label, ion.electrons));
+}
+
+/** An interference dip lies on one broad band: maxima within this of it on both sides are its two edges. */
+const dipReach = 2500;
+
+function dipBetween(measurement: Measurement, usedIndices: readonly number[]): boolean {
+  const maxima = usedIndices.map((index) => measurement.bands[index]!).filter((band) => band.kind === 'maximum' || band.kind === 'shoulder');
+  return measurement.bands.some((dip) => dip.kind === 'dip' &&
+    maxima.some((band) => band.position < dip.position && dip.position - band.position < dipReach) &&
+    maxima.some((band) => band.position > dip.position && band.position - dip.position < dipReach));
+}
+
+/** Half of the last digit from which a position counts as rounded, cm-1. */
+const roundedFrom = 50;
+
+/** Roughly read band on which more than half of a tested fit, or any of an untested one with better bands beside it, hangs. */
+function roughBand(measurement: Measurement, ion: GroundCase | null, chosen: ScoredReading | null, fit: Fit | null): string | null {
+  if (!ion || !chosen || !fit) return null;
+  const rough = chosen.assigned.find(({ observation }, k) => fit.used[k] && (fit.leverage[k] ?? 0) > 0.5 &&
+    observation.bands.some((index) => doubtfulKinds.has(measurement.bands[index]!.kind) || measurement.bands[index]!.halfDigit >= roundedFrom));
+  return rough ? shownLabel(rough.label, ion.electrons) : null;
+}
+
+/**
+ * Overtones and combinations of common solvents in the near infrared, cm-1 (common practice, from memory): water
+ * 5180, 6900, 8350, 10 250; alcohols 4800, 6850; C-H stretches of organic solvents 5800 and 8500.
+ */
+const solventBands: readonly { readonly words: RegExp; readonly name: string; readonly positions: readonly number[] }[] = [
+  { words: /water|aqueous|acid|buffer/i, name: 'water', positions: [5180, 6900, 8350, 10_250] },
+  { words: /methanol|ethanol|alcohol|glycol/i, name: 'alcohol', positions: [4800, 5800, 6850, 8500] },
+  { words: /acetonitrile|acetone|toluene|hexane|dichloromethane|chloroform|dimethyl|formamide|nitromethane|tetrahydrofuran/i, name: 'C–H of the solvent', positions: [5800, 8500] },
+];
+const overtoneReach = 200;
+
+function solventOvertone(measurement: Measurement, usedIndices: readonly number[]): { band: number; solvent: string } | null {
+  const { medium } = measurement;
+  if (medium === null || measurement.phase !== 'solution' || /D2O|deuter/i.test(medium)) return null;
+  for (const { words, name, positions } of solventBands) {
+    if (!words.test(medium)) continue;
+    const hit = usedIndices.map((index) => measurement.bands[index]!).find((band) => positions.some((position) => Math.abs(position - band.position) < overtoneReach));
+    if (hit) return { band: Math.round(hit.position), solvent: name };
+  }
+  return null;
+}
+
 const splitKinds = new Set(['component']);
 const doubtfulKinds = new Set(['shoulder', 'dip', 'envelope']);
 
+/** Whether Delta or B moves with the assumed C/B by more than rounding. */
+const movesWithRatio = (fit: Fit): boolean => Math.abs(fit.byRatio[0]!) + Math.abs(fit.byRatio[1]!) > 1e-6 * fit.solutions[0]!.at.delta;
+
 /** Gathers what the spectral cautions are decided on. */
-export function spectralFacts({ measurement, ion, chosen, fit, parameters, ground, predicted }: ReadingParts): SpectralFacts {
+export function spectralFacts({ measurement, ion, chosen, fit, parameters, ground, predicted, rivals }: ReadingParts): SpectralFacts {
   const fittedBands = (chosen?.assigned ?? []).filter((_, k) => fit?.used[k] ?? false);
   const usedIndices = fittedBands.flatMap((one) => one.observation.bands);
   const usedBands = usedIndices.map((index) => measurement.bands[index]!);
@@ -60,13 +125,12 @@ export function spectralFacts({ measurement, ion, chosen, fit, parameters, groun
     coverageNotStated: measurement.bands.some((band) => band.coverageNotStated),
     componentsMerged: merged,
     componentWithoutDegeneracy: measurement.bands.some((band) => band.kind === 'component' && band.degeneracy === null && band.leftOut === null),
-    doubtfulReadingUsed: usedBands.some((band) => doubtfulKinds.has(band.kind)),
     mixesOriginsAndMaxima: origins > 0 && origins < fittedBands.length,
     innocenceDoubtful: measurement.innocenceDoubtful,
     nuclearity: measurement.nuclearity,
     emission: measurement.technique === 'emission',
     // Only where C/B moves a published number does it matter that it was assumed.
-    ratioAssumed: fit && fit.ratio.origin !== 'fitted' && (fit.byRatio[0] !== 0 || fit.byRatio[1] !== 0) && fit.mode !== 'field' ? concise(fit.ratio.value, fit.ratio.u) : null,
+    ratioAssumed: fit && fit.ratio.origin !== 'fitted' && fit.mode !== 'field' && movesWithRatio(fit) ? concise(fit.ratio.value, fit.ratio.u) : null,
     betaAssumed: fit?.mode === 'field, B assumed' && fit.assumedBeta ? concise(fit.assumedBeta.value, fit.assumedBeta.u) : null,
     beta: beta?.value ?? null,
     uBeta: beta?.uTotal ?? null,
@@ -75,6 +139,14 @@ export function spectralFacts({ measurement, ion, chosen, fit, parameters, groun
     singletGap: ion && fit ? singletGap(ion, fit) : null,
     octahedralCobaltTwo: measurement.ion.name === 'Co(II)' && measurement.geometry === 'octahedral' && ion?.multiplicity === 4 && fit !== null,
     notScanned: ion ? predicted.filter((band) => band.spinAllowed && band.looked === 'outside').map((band) => shownLabel(band.label, ion.electrons)) : [],
+    groundContradicted: ground === 'contradicts',
+    rival: rivals.best,
+    rivalGeometry: rivals.otherGeometry,
+    forbiddenUsedAsAllowed: ion ? strengthMismatch(measurement, ion, fittedBands, (expected, epsilon) => expected && epsilon < weakBelow) : [],
+    chargeTransferUsed: ion ? strengthMismatch(measurement, ion, fittedBands, (_, epsilon) => epsilon > strongAbove) : [],
+    dipBetweenMaxima: dipBetween(measurement, usedIndices),
+    roughBandCarriesFit: roughBand(measurement, ion, chosen, fit),
+    nearSolventOvertone: solventOvertone(measurement, usedIndices),
     equallyGoodBranch: fit !== null && fit.solutions.length > 1 && fit.solutions[1]!.chi2 - fit.solutions[0]!.chi2 < 1,
   };
 }

@@ -7,6 +7,7 @@ import { propagate, quadratic, singularValues, transform, withOuter } from './co
 import type { Covariance, Row } from './covariance.ts';
 import { transitionsAt } from './evaluate.ts';
 import type { TransitionAt } from './evaluate.ts';
+import { betaPenalty } from './betaPenalty.ts';
 import { minimaWithFreeRatio } from './freeRatio.ts';
 import type { Target } from './misfit.ts';
 import { symmetricU } from '../measurement/observation.ts';
@@ -75,21 +76,17 @@ export const isFit = (outcome: FitOutcome): outcome is Fit => !('status' in outc
 /** beta taken where one band has to give Delta although it feels B. */
 const usualBeta: Estimate = { value: 0.75, u: 0.12 };
 
+/** Two bands and two parameters leave no misfit where a solution exists; this much chi2 left means there is none. */
+const missedPair = 4;
+
 /** What the policy says of C/B for an ion. */
 export function ratioFor(policy: Policy, ionName: string): RatioUsed {
   const own = policy.cOverB.perIon[ionName];
   return own ? { ...own, origin: 'policy for this ion' } : { ...policy.cOverB.general, origin: 'policy' };
 }
 
-/** Penalty, on the scale of chi2, on a beta outside 0.5 to 1.0; 0 where B0 is not known. */
-export function betaPenalty(racahB: number, freeIon: FreeIon | null): number {
-  if (!freeIon) return 0;
-  const beta = racahB / freeIon.racahB0;
-  const beyond = beta > 1 ? beta - 1 : beta < 0.5 ? 0.5 - beta : 0;
-  return (beyond / 0.05) ** 2;
-}
-
-function targetOf(observation: Observation, floor: number): Target {
+/** What a fit aims at: an observation with the weights of its uncertainty and the floor. */
+export function targetOf(observation: Observation, floor: number): Target {
   return {
     observed: observation.position,
     weightBelow: 1 / (observation.uMinus ** 2 + floor ** 2),
@@ -193,6 +190,10 @@ function fitFieldAndB(task: Task, members: readonly number[], mode: 'field, B' |
   if (!best)
     return { status: 'refused', reason: 'no positive Delta and B reproduce these bands as assigned: the misfit falls all the way to an end of the diagram' };
   const calculated = calculatedAll(task, best.ground, best.at);
+  if (members.length === 2 && best.chi2 > missedPair) {
+    const misses = members.map((k) => `${task.assigned[k]!.observation.position > calculated[k]!.energy ? '+' : '\u2212'}${Math.abs(Math.round(task.assigned[k]!.observation.position - calculated[k]!.energy))}`);
+    return { status: 'refused', reason: `no Delta and B give both bands: the closest they come to misses them by ${misses.join(' and ')} cm⁻¹` };
+  }
   const rows = rowsOf(task, members, (k) => {
     const { delta, racahB, racahC } = calculated[k]!.gradient;
     return [delta, racahB + ratio.value * racahC];

@@ -1,5 +1,5 @@
 import type { FreeIon } from '../ions/types.ts';
-import { groundCrossings, lowestLevel } from '../levels/crossings.ts';
+import { lowestLevel } from '../levels/crossings.ts';
 import type { Fit } from './fit.ts';
 import type { GroundCase } from './transitions.ts';
 
@@ -15,6 +15,9 @@ const betaRange = [0.6, 0.95] as const;
 /** Where B was not fitted, Delta/B must miss the crossing by this much at both ends before a reading is refused. */
 const clearMargin = 0.15;
 
+/** Above this u(B)/B the fitted B is no ground for a refusal. */
+const looseB = 0.15;
+
 /** Where the ground multiplicity changes. */
 export interface SpinCrossing {
   readonly deltaOverB: number;
@@ -23,11 +26,25 @@ export interface SpinCrossing {
   readonly above: number;
 }
 
-const spinOf = (label: string): number => Number(label[1]);
+/** Delta/B up to which a crossing is looked for. */
+const strongestField = 60;
 
+/**
+ * The field only ever favours fewer unpaired electrons, so the ground multiplicity falls once from the
+ * highest; found by bisection to 1e-9 in Delta/B.
+ */
 function crossingOfSpin(ion: GroundCase, ratio: number): SpinCrossing | null {
-  const crossing = groundCrossings(ion.electrons, ion.geometry, ratio).find(({ below, above }) => spinOf(below) !== spinOf(above));
-  return crossing ? { deltaOverB: crossing.deltaOverB, below: spinOf(crossing.below), above: spinOf(crossing.above) } : null;
+  const spinAt = (x: number): number => lowestLevel(ion.electrons, ion.geometry, x, 1, ratio).multiplicity;
+  const below = spinAt(0.5);
+  if (spinAt(strongestField) === below) return null;
+  let low = 0.5;
+  let high = strongestField;
+  while (high - low > 1e-9) {
+    const middle = (low + high) / 2;
+    if (spinAt(middle) === below) low = middle;
+    else high = middle;
+  }
+  return { deltaOverB: (low + high) / 2, below, above: spinAt(high) };
 }
 
 const crossingsHeld = new Map<string, SpinCrossing | null>();
@@ -47,7 +64,9 @@ export function spinCrossing(ion: GroundCase, ratio: number): SpinCrossing | nul
 /** Compares the declared ground multiplicity with the ground level at the fitted parameters. */
 export function checkGround(ion: GroundCase, fit: Fit, freeIon: FreeIon | null): GroundCheck {
   const { delta, racahB, racahC } = fit.solutions[0]!.at;
-  if (fit.mode === 'field' || fit.mode === 'field, B assumed') return checkWithoutB(ion, delta, fit.ratio.value, freeIon);
+  // A B that these bands hardly fix says nothing of the spin state either.
+  const loose = Math.sqrt(fit.total[1]![1]!) > looseB * racahB;
+  if (fit.mode === 'field' || fit.mode === 'field, B assumed' || loose) return checkWithoutB(ion, delta, fit.ratio.value, freeIon);
   if (fit.ratio.origin === 'fitted')
     return lowestLevel(ion.electrons, ion.geometry, delta, racahB, racahC).multiplicity === ion.multiplicity ? 'agrees' : 'contradicts';
   const agrees = (ratio: number): boolean => {

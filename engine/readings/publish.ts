@@ -7,10 +7,10 @@ import type { ParameterName, Standing } from '../words/types.ts';
 import type { Fit } from './fit.ts';
 import type { Parameter } from './types.ts';
 
-const withheld = (name: ParameterName, reason: string): Parameter => ({ name, value: null, u: null, uTotal: null, standing: 'withheld', reason });
+const withheld = (name: ParameterName, reason: string): Parameter => ({ name, value: null, u: null, uTotal: null, limits: null, standing: 'withheld', reason });
 
 const published = (name: ParameterName, value: number, u: number, uTotal: number, standing: Standing, reason: string | null = null): Parameter => ({
-  name, value, u, uTotal, standing, reason,
+  name, value, u, uTotal, limits: null, standing, reason,
 });
 
 /** All four numbers withheld for one reason. */

@@ -1,58 +1,106 @@
 import { spectralCautions } from '../cautions/spectral.ts';
 import type { FreeIon } from '../ions/types.ts';
-import { groundLabel } from '../levels/labels.ts';
+import { groundLabel, shownLabel } from '../levels/labels.ts';
 import type { Measurement } from '../measurement/types.ts';
+import { policyId } from '../policy/policy.ts';
 import type { Policy } from '../policy/types.ts';
+import { rankingSentence } from '../words/ranking.ts';
+import { doubletSentence, groundSentence, rivalSentence } from '../words/remarks.ts';
+import { thesisSentence } from '../words/thesis.ts';
+import type { Verdict } from '../words/types.ts';
 import { verdictSentence } from '../words/verdict.ts';
+import { declaredCase } from './cases.ts';
 import { upperTail } from './chiSquare.ts';
+import type { Evidence } from './evidence.ts';
 import { spectralFacts } from './facts.ts';
-import { deltaOverB, isFit, ratioFor } from './fit.ts';
+import { deltaOverB, isFit } from './fit.ts';
 import type { Fit } from './fit.ts';
 import { checkGround } from './groundCheck.ts';
 import type { GroundCheck } from './groundCheck.ts';
-import { measureNext } from './measureNext.ts';
+import { doubletOrder, groundStateOf } from './groundState.ts';
+import { identify } from './identifiability.ts';
+import { withLimits } from './limits.ts';
+import { helpfulBands } from './measureNext.ts';
 import { predictedBands } from './predicted.ts';
 import { nothingPublished, publishedCorrelations, publishParameters, restingOn } from './publish.ts';
-import { searchReadings } from './search.ts';
+import { contest } from './rivals.ts';
 import type { ScoredReading } from './search.ts';
+import { stressOf } from './stress.ts';
 import type { GroundCase } from './transitions.ts';
-import type { Branch, Parameter, Reading, ReadingBand } from './types.ts';
-import type { Verdict } from '../words/types.ts';
+import type { Branch, Parameter, Reading, ReadingBand, ReadMeasurement } from './types.ts';
 
 /** Spare bands that disagree with a probability below this make a reading strained. */
 const strainedBelow = 0.01;
 
-/** The ground multiplicity of a measurement: as declared, or the highest where ion and geometry leave no choice. */
-function groundCase(measurement: Measurement): GroundCase | string {
-  const { ion, geometry, multiplicity } = measurement;
-  if (geometry === null) return `${measurement.geometryName} complexes are stored and drawn, not fitted`;
-  if (ion.electrons < 1 || ion.electrons > 9) return `a d${ion.electrons} ion has no d-d transitions`;
-  const highest = Math.min(ion.electrons, 10 - ion.electrons) + 1;
-  const choice = geometry === 'octahedral' && ion.electrons >= 4 && ion.electrons <= 7;
-  if (multiplicity === null && choice) return 'the spin state is not declared';
-  return { electrons: ion.electrons, geometry, multiplicity: multiplicity ?? highest };
+/** Two solutions whose chi2 differ by less fit equally well. */
+const equalWithin = 1;
+
+/** What a reading is written from. */
+interface Context {
+  readonly measurement: Measurement;
+  readonly policy: Policy;
+  readonly freeIon: FreeIon | null;
+  readonly rivals: Rivalry;
 }
 
+/** How the rivals stand to the chosen reading. */
+export interface Rivalry {
+  readonly best: 'near' | 'better' | null;
+  /** The other geometry of the best near or better rival, or null. */
+  readonly otherGeometry: boolean;
+}
+
+const noRivalry: Rivalry = { best: null, otherGeometry: false };
+
 /**
- * Reads one measurement: assigns its bands (as typed, or in the spin-allowed order where nothing is typed),
- * fits what they can fix, and says what may be published of it and what not.
+ * Reads one measurement: assigns its bands (as typed, or the best assignment where nothing is typed), fits
+ * what they can fix, says what may be published of it and what not, and sets its rivals beside it.
  *
  * Depends on the measurement, the policy and the free ion alone.
  *
  * @param freeIon the ion's entry in the policy's free-ion set; null where the set has none
  */
+export function readWithRivals(measurement: Measurement, policy: Policy, freeIon: FreeIon | null): ReadMeasurement {
+  const ion = declaredCase(measurement);
+  if (typeof ion === 'string') return { chosen: unread(measurement, policy, ion), rivals: [] };
+  const { chosen, rivals } = contest(measurement, ion, policy, freeIon);
+  if (!chosen) return { chosen: unread(measurement, policy, 'no band can be assigned'), rivals: [] };
+  const context: Context = { measurement, policy, freeIon, rivals: rivalry(chosen, rivals, policy) };
+  const first = write(context, chosen);
+  const fitStands = first.score !== null;
+  return {
+    chosen: first,
+    rivals: rivals.map((rival) => ({
+      ...write({ ...context, rivals: noRivalry }, rival),
+      ranking: rankingSentence(inWords(rival.evidence, rival.ion), inWords(chosen.evidence, chosen.ion), fitStands ? rival.score - chosen.score : null, policy.rivalMargin),
+    })),
+  };
+}
+
+/** The chosen reading of a measurement; see `readWithRivals`. */
 export function readMeasurement(measurement: Measurement, policy: Policy, freeIon: FreeIon | null): Reading {
-  const ion = groundCase(measurement);
-  if (typeof ion === 'string') return unread(measurement, ion);
-  const ratio = ratioFor(policy, measurement.ion.name);
-  const [chosen] = searchReadings(measurement, ion, policy, ratio, freeIon);
-  if (!chosen) return unread(measurement, 'no band can be assigned');
-  const { outcome } = chosen;
-  if (!isFit(outcome)) return withoutFit(measurement, ion, chosen, policy, outcome.status, outcome.reason);
-  const ground = checkGround(ion, outcome, freeIon);
-  if (ground === 'contradicts')
-    return withoutFit(measurement, ion, chosen, policy, 'refused', groundContradiction(ion, outcome), outcome);
-  return fitted(measurement, ion, chosen, outcome, ground, policy, freeIon);
+  return readWithRivals(measurement, policy, freeIon).chosen;
+}
+
+function rivalry(chosen: ScoredReading, rivals: readonly ScoredReading[], policy: Policy): Rivalry {
+  const [best] = rivals;
+  if (!best) return noRivalry;
+  const difference = best.score - chosen.score;
+  if (!(difference <= policy.rivalMargin)) return noRivalry;
+  return { best: difference < -policy.rivalMargin ? 'better' : 'near', otherGeometry: best.ion.geometry !== chosen.ion.geometry };
+}
+
+function inWords(evidence: readonly Evidence[], ion: GroundCase): { code: string; penalty: number; label: string; value: number | null }[] {
+  return evidence.map((one) => ({ ...one, label: one.label === '' ? '' : shownLabel(one.label, ion.electrons) }));
+}
+
+/** Writes the reading of one assignment: with its fit, or with the reason why none stands. */
+function write(context: Context, reading: ScoredReading): Reading {
+  const { outcome, ion } = reading;
+  if (!isFit(outcome)) return withoutFit(context, reading, outcome.status, outcome.reason, null);
+  const ground = checkGround(ion, outcome, context.freeIon);
+  if (ground === 'contradicts') return withoutFit(context, reading, 'refused', groundContradiction(ion, outcome), outcome);
+  return fitted(context, reading, outcome, ground);
 }
 
 function groundContradiction(ion: GroundCase, fit: Fit): string {
@@ -62,42 +110,54 @@ function groundContradiction(ion: GroundCase, fit: Fit): string {
   return `at ${where} the ground state has another spin than the declared multiplicity ${ion.multiplicity}`;
 }
 
-function readingBands(chosen: ScoredReading, fit: Fit | null, policy: Policy, floors: readonly number[]): readonly ReadingBand[] {
-  return chosen.assigned.map(({ label, observation }, k) => {
+function readingBands(reading: ScoredReading, fit: Fit | null, policy: Policy): readonly ReadingBand[] {
+  return reading.assigned.map(({ label, observation }, k) => {
     const calculated = fit?.calculated[k] ?? null;
     return {
       bands: observation.bands, label, observed: observation.position, uMinus: observation.uMinus, uPlus: observation.uPlus,
-      uAssumed: observation.uAssumed, floor: fit?.floors[k] ?? floors[k] ?? policy.floors.general, used: fit?.used[k] ?? false,
+      uAssumed: observation.uAssumed, floor: fit?.floors[k] ?? policy.floors.general, used: fit?.used[k] ?? false,
       calculated: calculated?.energy ?? null, residual: calculated ? observation.position - calculated.energy : null,
-      gradient: calculated?.gradient ?? null,
+      leverage: fit?.leverage[k] ?? null, gradient: calculated?.gradient ?? null,
     };
   });
 }
 
+const noFacts = { bandsUsed: 0, spareBands: 0, chi2: null, probability: null, reason: null, resting: [], assumed: null } as const;
+
+/** The parts of a reading that need a fit, where there is none. */
+const nothingFitted = {
+  correlations: [], deltaOverB: null, bandsUsed: 0, spareBands: 0, rmsResidual: null, ratio: null, predicted: [], measureNext: null, helpfulBands: [],
+  score: null, evidence: [], ranking: null, identifiability: null, stress: null, groundState: null, doubletOrder: null, remarks: [],
+} as const;
+
+function thesisWithout(reason: string, verdict: Verdict, policy: Policy): string {
+  return thesisSentence({ verdict, bands: [], parameters: [], freeIon: null, spareBands: 0, assumed: null, reason, policy: policyId(policy) });
+}
+
 /** A reading of a measurement to which nothing can be assigned. */
-function unread(measurement: Measurement, reason: string): Reading {
+function unread(measurement: Measurement, policy: Policy, reason: string): Reading {
   return {
-    verdict: 'not determinable', reason: verdictSentence({ ...noFacts, verdict: 'not determinable', reason }), assignment: 'none',
+    ...nothingFitted, verdict: 'not determinable', reason: verdictSentence({ ...noFacts, verdict: 'not determinable', reason }), assignment: 'none',
     geometry: measurement.geometry, multiplicity: measurement.multiplicity, ground: null, bands: [],
-    notFitted: measurement.bands.map((_, band) => ({ band, reason })), branches: [], parameters: nothingPublished(reason), correlations: [],
-    deltaOverB: null, chi2: null, bandsUsed: 0, spareBands: 0, rmsResidual: null, ratio: null, predicted: [],
-    cautions: spectralCautions(spectralFacts({ measurement, ion: null, chosen: null, fit: null, parameters: [], ground: 'agrees', predicted: [] })),
-    measureNext: null,
+    notFitted: measurement.bands.map((_, band) => ({ band, reason })), branches: [], parameters: nothingPublished(reason), chi2: null,
+    cautions: spectralCautions(spectralFacts({ measurement, policy, ion: null, chosen: null, fit: null, parameters: [], ground: 'agrees', predicted: [], rivals: noRivalry })),
+    sentence: thesisWithout(reason, 'not determinable', policy),
   };
 }
 
-const noFacts = { bandsUsed: 0, spareBands: 0, chi2: null, probability: null, reason: null, resting: [], assumed: null } as const;
-
-function withoutFit(
-  measurement: Measurement, ion: GroundCase, chosen: ScoredReading, policy: Policy, verdict: 'refused' | 'not determinable', reason: string, fit: Fit | null = null,
-): Reading {
+function withoutFit(context: Context, reading: ScoredReading, verdict: 'refused' | 'not determinable', reason: string, fit: Fit | null): Reading {
+  const { measurement, policy, rivals } = context;
+  const { ion } = reading;
+  const contradicted = fit !== null;
   return {
-    verdict, reason: verdictSentence({ ...noFacts, verdict, reason }), assignment: chosen.origin, geometry: ion.geometry, multiplicity: ion.multiplicity,
-    ground: groundLabel(ion.electrons, ion.geometry, ion.multiplicity), bands: readingBands(chosen, fit, policy, []), notFitted: chosen.notFitted,
-    branches: fit ? branchesOf(fit, false) : [], parameters: nothingPublished(reason), correlations: [], deltaOverB: null, chi2: fit?.solutions[0]?.chi2 ?? null,
-    bandsUsed: 0, spareBands: 0, rmsResidual: null, ratio: null, predicted: [],
-    cautions: spectralCautions(spectralFacts({ measurement, ion, chosen, fit: null, parameters: [], ground: 'agrees', predicted: [] })),
-    measureNext: null,
+    ...nothingFitted, verdict, reason: verdictSentence({ ...noFacts, verdict, reason }) + rivalSentence(rivals.best, false), assignment: reading.origin,
+    geometry: ion.geometry, multiplicity: ion.multiplicity, ground: groundLabel(ion.electrons, ion.geometry, ion.multiplicity),
+    bands: readingBands(reading, fit, policy), notFitted: reading.notFitted, branches: fit ? branchesOf(fit, false) : [],
+    parameters: nothingPublished(reason), chi2: fit?.solutions[0]?.chi2 ?? null,
+    cautions: spectralCautions(spectralFacts({
+      measurement, policy, ion, chosen: reading, fit: null, parameters: [], ground: contradicted ? 'contradicts' : 'agrees', predicted: [], rivals,
+    })),
+    sentence: thesisWithout(reason, verdict, policy),
   };
 }
 
@@ -105,33 +165,49 @@ function branchesOf(fit: Fit, firstIsChosen: boolean): readonly Branch[] {
   return fit.solutions.map(({ at, chi2 }, i) => ({ ...at, chi2, chosen: firstIsChosen && i === 0 }));
 }
 
-function fitted(
-  measurement: Measurement, ion: GroundCase, chosen: ScoredReading, fit: Fit, ground: GroundCheck, policy: Policy, freeIon: FreeIon | null,
-): Reading {
+function fitted(context: Context, reading: ScoredReading, fit: Fit, ground: GroundCheck): Reading {
+  const { measurement, policy, freeIon, rivals } = context;
+  const { ion, assigned } = reading;
   const best = fit.solutions[0]!;
-  const parameters = publishParameters(measurement, fit, policy, freeIon);
-  const bands = readingBands(chosen, fit, policy, fit.floors);
+  const parameters = withLimits(ion, assigned, fit, publishParameters(measurement, fit, policy, freeIon));
+  const bands = readingBands(reading, fit, policy);
   const used = bands.filter((band) => band.used);
   const probability = fit.spare > 0 ? upperTail(best.chi2, fit.spare) : null;
   const resting = restingOn(parameters, fit);
   const verdict = verdictOf(parameters, fit, probability, resting !== null);
-  const predicted = predictedBands(measurement, ion, chosen.assigned, fit, policy);
-  const helpful = measureNext(ion, chosen.assigned, fit, predicted, policy);
-  return {
-    verdict,
-    reason: verdictSentence({
+  const predicted = predictedBands(measurement, ion, assigned, fit, policy);
+  const helpful = helpfulBands(ion, assigned, fit, parameters, predicted, policy);
+  const second = fit.solutions[1];
+  const secondSolution = second !== undefined && second.chi2 - best.chi2 < equalWithin;
+  const reason =
+    verdictSentence({
       verdict, bandsUsed: used.length, spareBands: fit.spare, chi2: best.chi2, probability,
       reason: verdict === 'not determinable' ? `no number stays under the policy's ceilings; Delta is withheld because ${parameters[0]!.reason}` : null,
       resting: resting?.names ?? [], assumed: resting?.assumed ?? null,
-    }),
-    assignment: chosen.origin, geometry: ion.geometry, multiplicity: ion.multiplicity, ground: best.ground, bands, notFitted: chosen.notFitted,
-    branches: branchesOf(fit, true), parameters, correlations: publishedCorrelations(parameters, fit),
-    deltaOverB: parameters[0]!.value !== null && parameters[1]!.value !== null ? deltaOverB(best.at) : null,
+    }) + rivalSentence(rivals.best, secondSolution);
+  const groundState = groundStateOf(ion, fit);
+  const order = doubletOrder(ion, fit, freeIon);
+  const ratioText = resting ? resting.assumed.replace('the assumed ', '') : null;
+  const published = parameters[1]!.value !== null && parameters[0]!.value !== null ? deltaOverB(best.at) : null;
+  return {
+    verdict, reason, assignment: reading.origin, geometry: ion.geometry, multiplicity: ion.multiplicity, ground: best.ground, bands,
+    notFitted: reading.notFitted, branches: branchesOf(fit, true), parameters, correlations: publishedCorrelations(parameters, fit), deltaOverB: published,
     chi2: best.chi2, bandsUsed: used.length, spareBands: fit.spare,
-    rmsResidual: Math.sqrt(used.reduce((sum, band) => sum + band.residual! ** 2, 0) / used.length),
-    ratio: fit.ratio, predicted,
-    cautions: spectralCautions(spectralFacts({ measurement, ion, chosen, fit, parameters, ground, predicted })),
-    measureNext: helpful,
+    rmsResidual: Math.sqrt(used.reduce((sum, band) => sum + band.residual! ** 2, 0) / used.length), ratio: fit.ratio, predicted,
+    cautions: spectralCautions(spectralFacts({ measurement, policy, ion, chosen: reading, fit, parameters, ground, predicted, rivals })),
+    measureNext: helpful[0]?.sentence ?? null, helpfulBands: helpful, score: Number.isFinite(reading.score) ? reading.score : null,
+    evidence: reading.evidence, ranking: null, identifiability: identify(assigned, fit, parameters),
+    stress: stressOf(ion, assigned, fit, policy, freeIon), groundState, doubletOrder: order,
+    remarks: [
+      groundSentence({ ...groundState, deltaOverB: published, ground: shownLabel(best.ground, ion.electrons) }),
+      ...(order ? [doubletSentence(order)] : []),
+    ],
+    sentence: thesisSentence({
+      verdict, bands: used.map((band) => ({ observed: band.observed, label: shownLabel(band.label, ion.electrons) })), parameters,
+      freeIon: freeIon && parameters[3]!.value !== null ? { racahB0: freeIon.racahB0, set: freeIon.set } : null, spareBands: fit.spare,
+      assumed: ratioText,
+      reason: parameters[0]!.reason, policy: policyId(policy),
+    }),
   };
 }
 
@@ -141,4 +217,3 @@ function verdictOf(parameters: readonly Parameter[], fit: Fit, probability: numb
   if (resting) return 'assumed';
   return fit.spare === 0 ? 'untested' : 'tested';
 }
-

@@ -63,6 +63,9 @@ function groundSegments(table: LevelTable, multiplicity: number): readonly Segme
   return found;
 }
 
+/** Grid points passed over in a coarse scan: half a degree. */
+const coarseStride = 2;
+
 /** Cubic Hermite interpolation in one grid cell: value and derivative at fraction s. */
 function interpolate(energy: Float64Array, slope: Float64Array, i: number, s: number, out: [number, number]): void {
   const y0 = energy[i]!;
@@ -121,12 +124,14 @@ export function minimaOnCurve(
       const { rho } = bestScale(targets, point.energies, symmetric);
       return misfitSlope(targets, point.energies, point.slopes, rho);
     };
+    const stride = precision === 'grid' ? coarseStride : 1;
     let before = slopeOnGrid(segment.first);
-    for (let i = segment.first; i < segment.last; i++) {
-      const after = slopeOnGrid(i + 1);
+    for (let i = segment.first; i < segment.last; i += stride) {
+      const next = Math.min(i + stride, segment.last);
+      const after = slopeOnGrid(next);
       const bracketed = before <= 0 && after > 0 && !(before === 0 && i === segment.first);
       if (bracketed && precision === 'grid') {
-        const nearer = -before < after ? i : i + 1;
+        const nearer = -before < after ? i : next;
         slopeOnGrid(nearer);
         found.push({ t: nearer * gridStep, ...bestScale(targets, point.energies, symmetric), ground: segment.ground });
       } else if (bracketed) {

@@ -1,209 +1,172 @@
 import type { FreeIon } from '../ions/types.ts';
-import { readLabel } from '../levels/labels.ts';
+import type { Measurement } from '../measurement/types.ts';
 import type { Policy } from '../policy/types.ts';
-import { transitionsAt } from './evaluate.ts';
-import { betaPenalty, fitAssignment, isFit } from './fit.ts';
+import { boundFor } from './bound.ts';
+import { gatherItems } from './candidates.ts';
+import type { Freedom, Item, NotFitted } from './candidates.ts';
+import { bandEvidence, gatherEvidence, leftOverPenalty, scoreOf } from './evidence.ts';
+import type { Evidence } from './evidence.ts';
+import { fitAssignment, isFit } from './fit.ts';
 import type { Assigned, FitOutcome } from './fit.ts';
-import { mergedBands, setAside, singleBand } from '../measurement/observation.ts';
-import type { Observation } from '../measurement/observation.ts';
-import { transitionOf, transitionsOf } from './transitions.ts';
-import type { GroundCase, Transition } from './transitions.ts';
-import type { Band, Measurement } from '../measurement/types.ts';
-import type { Range } from '../quantity/range.ts';
+import { floorOf, transitionOf } from './transitions.ts';
+import type { GroundCase } from './transitions.ts';
 import type { RatioUsed } from './types.ts';
-
-/** One band, or merged components, with the transitions it may be. */
-interface Item {
-  readonly observation: Observation;
-  readonly candidates: readonly string[];
-  /** Whether the candidates were typed; an untyped band may also stay unassigned. */
-  readonly typed: boolean;
-}
 
 /** One way to assign the bands, with what the fit made of it. */
 export interface ScoredReading {
+  readonly ion: GroundCase;
   readonly assigned: readonly Assigned[];
   /** Bands that stay out, with the reason. */
-  readonly notFitted: readonly { readonly band: number; readonly reason: string }[];
+  readonly notFitted: readonly NotFitted[];
   readonly outcome: FitOutcome;
+  readonly evidence: readonly Evidence[];
   /** chi2 + 2 x free parameters + evidence; infinite where no fit stands. Lower is better. */
   readonly score: number;
   readonly origin: 'typed' | 'proposed' | 'none';
 }
 
-/** Narrower than this, or fainter, a band is taken for a spin-flip line where no term is typed. */
-const narrowWidth = 600;
-const faintEpsilon = 1;
-
-/** How many spin-forbidden candidates an untyped band gets. */
-const candidatesAtMost = 6;
-
-const unassignedPenalty = 9;
-const gapPenalty = 9;
-const unseenPenalty = 4;
-const skippedLinePenalty = 2;
-
-/** More assignments than this are not tried; typed terms keep real records far below. */
-const assignmentsAtMost = 20_000;
-
-const parametersOf = { field: 1, 'field, B assumed': 1, 'field, B': 2, 'field, B by a line': 2, 'field, B, C': 3 } as const;
-
-function looksLikeLine(band: Band): boolean {
-  return band.kind === 'line' || band.kind === 'zero-phonon' || (band.width !== null && band.width < narrowWidth) || (band.epsilon !== null && band.epsilon < faintEpsilon);
+/** Everything a search needs, gathered once. */
+export interface SearchTask {
+  readonly measurement: Measurement;
+  readonly ion: GroundCase;
+  readonly policy: Policy;
+  readonly ratio: RatioUsed;
+  readonly freeIon: FreeIon | null;
 }
 
-/** Transitions an untyped band may be: spin-allowed for a broad band, spin-flip for a line; quartets of high-spin d5 for both. */
-function proposedFor(band: Band, transitions: readonly Transition[], groundMultiplicity: number): readonly string[] {
-  const everyAllowed = transitions.filter((t) => t.spinAllowed);
-  // Of high-spin d5 only the quartets are seen: one spin turned, not two.
-  if (everyAllowed.length === 0) return transitions.filter((t) => t.multiplicity === groundMultiplicity - 2).slice(0, candidatesAtMost).map((t) => t.label);
-  if (looksLikeLine(band)) return transitions.filter((t) => !t.spinAllowed && t.sameConfiguration).slice(0, candidatesAtMost).map((t) => t.label);
-  // Up to three spin-allowed transitions are all within reach; of the many of low-spin ions only the lowest of each block.
-  return (everyAllowed.length <= 3 ? everyAllowed : everyAllowed.filter((t) => t.label.startsWith('a')).slice(0, 2)).map((t) => t.label);
+/** Readings that score worse than the best by more than this are not kept. */
+export const keepWithin = 12;
+
+/** How many of the best readings are wanted. */
+export const readingsAtMost = 6;
+
+/** A search stops after this many fits; no record of eight bands comes near. */
+const fitsAtMost = 5000;
+
+/** C0/B0 of the free ion, by which parents in typed labels are resolved. */
+const parentRatioOf = (freeIon: FreeIon | null): number => (freeIon?.racahC0 ? freeIon.racahC0 / freeIon.racahB0 : 4.5);
+
+interface Choice {
+  readonly item: Item;
+  readonly label: string | null;
 }
 
-function typedCandidates(band: Band, ion: GroundCase, ratio: number): readonly string[] {
-  const labels = band.terms.flatMap((term) => {
-    const reading = readLabel(term, { electrons: ion.electrons, geometry: ion.geometry, multiplicity: ion.multiplicity, ratio });
-    return reading.ok ? reading.labels : [];
-  });
-  return [...new Set(labels)];
-}
-
-interface Gathered {
-  readonly items: readonly Item[];
-  readonly notFitted: readonly { readonly band: number; readonly reason: string }[];
-}
-
-/** Turns bands into items: sets aside what is never fitted and merges the components of one term. */
-function gather(measurement: Measurement, ion: GroundCase, policy: Policy, parentRatio: number): Gathered {
-  const transitions = transitionsOf(ion);
-  const items: Item[] = [];
-  const notFitted: { band: number; reason: string }[] = [];
-  const components = new Map<string, number[]>();
-  measurement.bands.forEach((band, index) => {
-    const reason = setAside(band);
-    if (reason !== null) {
-      notFitted.push({ band: index, reason });
-      return;
+function scored(task: SearchTask, choices: readonly Choice[], notFitted: readonly NotFitted[]): ScoredReading {
+  const { measurement, ion, policy, ratio, freeIon } = task;
+  const assigned: Assigned[] = [];
+  const left = [...notFitted];
+  let leftOver = 0;
+  for (const { item, label } of choices) {
+    if (label !== null) assigned.push({ label, observation: item.observation });
+    else {
+      if (item.leaveOut?.counts) leftOver++;
+      for (const band of item.observation.bands) left.push({ band, reason: item.leaveOut?.reason ?? 'no transition is left for it' });
     }
-    if (band.kind === 'component') {
-      if (band.degeneracy === null) {
-        notFitted.push({ band: index, reason: 'a component without its degeneracy cannot enter a barycentre' });
-        return;
-      }
-      const key = [...band.terms].sort().join('|');
-      const group = components.get(key);
-      if (group) group.push(index);
-      else components.set(key, [index]);
-      return;
-    }
-    const typed = band.terms.length > 0;
-    const candidates = typed ? typedCandidates(band, ion, parentRatio) : proposedFor(band, transitions, ion.multiplicity);
-    if (typed && candidates.length === 0) notFitted.push({ band: index, reason: `no transition of this ion is named ${band.terms.join(' or ')}` });
-    else items.push({ observation: singleBand(measurement, index, policy), candidates, typed });
-  });
-  for (const indices of components.values()) {
-    const first = measurement.bands[indices[0]!]!;
-    const typed = first.terms.length > 0;
-    items.push({
-      observation: mergedBands(measurement, indices, policy),
-      candidates: typed ? typedCandidates(first, ion, parentRatio) : proposedFor(first, transitions, ion.multiplicity),
-      typed,
-    });
   }
-  items.sort((a, b) => a.observation.position - b.observation.position);
-  return { items, notFitted };
-}
-
-/** Every way to give each item one of its candidates, no transition twice (the d5 pair excepted); null leaves an untyped item out. */
-function assignments(items: readonly Item[]): (string | null)[][] {
-  const found: (string | null)[][] = [];
-  const chosen: (string | null)[] = [];
-  const visit = (at: number): void => {
-    if (found.length >= assignmentsAtMost) return;
-    if (at === items.length) {
-      found.push([...chosen]);
-      return;
-    }
-    const item = items[at]!;
-    for (const label of item.candidates) {
-      if (chosen.includes(label) && !label.includes('/')) continue;
-      chosen.push(label);
-      visit(at + 1);
-      chosen.pop();
-    }
-    if (!item.typed) {
-      chosen.push(null);
-      visit(at + 1);
-      chosen.pop();
-    }
+  assigned.sort((a, b) => a.observation.position - b.observation.position);
+  const outcome = fitAssignment(ion, assigned, policy, ratio, freeIon);
+  const legal = isFit(outcome) && keepsOrder(choices, assigned, outcome);
+  const evidence = legal ? gatherEvidence(measurement, ion, assigned, leftOver, outcome, freeIon) : [];
+  const origin = choices.length === 0 ? 'none' : choices.some(({ item }) => item.typed) ? 'typed' : 'proposed';
+  return {
+    ion, assigned, notFitted: left.sort((a, b) => a.band - b.band), outcome, evidence,
+    score: legal ? scoreOf(evidence) : Number.POSITIVE_INFINITY, origin,
   };
-  visit(0);
-  return found;
-}
-
-const within = (ranges: readonly Range[], position: number): boolean => ranges.some((range) => position >= range.low && position <= range.high);
-
-/** Transitions that the fit predicts where a band should have been seen. */
-function unseenEvidence(measurement: Measurement, ion: GroundCase, assigned: readonly Assigned[], outcome: FitOutcome): number {
-  if (!isFit(outcome)) return 0;
-  const { at, ground } = outcome.solutions[0]!;
-  const positions = assigned.map((one) => one.observation.position);
-  const lowest = Math.min(...positions);
-  const highest = Math.max(...positions);
-  const all = transitionsOf(ion);
-  const noneAllowed = all.every((t) => !t.spinAllowed);
-  const expected = (t: Transition): boolean => t.spinAllowed || (noneAllowed && t.multiplicity === ion.multiplicity - 2);
-  const open = all.filter((t) => (expected(t) || t.sameConfiguration) && !assigned.some((one) => one.label === t.label));
-  const lines = assigned.filter((one) => !transitionOf(ion, one.label).spinAllowed).map((one) => one.observation.position);
-  return transitionsAt(ion, ground, open.map((t) => t.label), at).reduce((sum, { energy }, i) => {
-    // A spin-flip line below an assigned one is seldom missed: the lowest, 2E, is the strongest.
-    if (!expected(open[i]!)) return lines.some((position) => position > energy) ? sum + skippedLinePenalty : sum;
-    if (energy < lowest) return sum;
-    if (energy <= highest) return sum + gapPenalty;
-    return within([...measurement.scanned, ...measurement.absent], energy) ? sum + unseenPenalty : sum;
-  }, 0);
 }
 
 /** Whether bands that the engine assigned keep the order of the calculated transitions. */
-function keepsOrder(items: readonly Item[], labels: readonly (string | null)[], assigned: readonly Assigned[], outcome: FitOutcome): boolean {
+function keepsOrder(choices: readonly Choice[], assigned: readonly Assigned[], outcome: FitOutcome): boolean {
   if (!isFit(outcome)) return true;
-  const rows = assigned
-    .map((one, k) => ({ position: one.observation.position, calculated: outcome.calculated[k]!.energy, open: items[labels.indexOf(one.label)]?.candidates.length !== 1 }))
-    .filter((row) => row.open)
-    .sort((a, b) => a.position - b.position);
-  return rows.every((row, i) => i === 0 || row.calculated >= rows[i - 1]!.calculated - 1e-6);
+  const open = new Set(choices.filter(({ item }) => item.candidates.length > 1).map(({ item }) => item.observation));
+  let last = Number.NEGATIVE_INFINITY;
+  return assigned.every(({ observation }, k) => {
+    if (!open.has(observation)) return true;
+    const calculated = outcome.calculated[k]!.energy;
+    const keeps = calculated >= last - 1e-6;
+    last = calculated;
+    return keeps;
+  });
 }
 
 /**
- * All assignments of a measurement's bands within the typed candidates, or in the spin-allowed order where
- * none is typed, each with its fit; best score first.
+ * The best assignments of the bands within their candidates, at most `readingsAtMost` and within `keepWithin` of
+ * the best score, each with its fit, best first.
+ *
+ * Depth first, broad bands before lines. A branch is cut where the least score it can reach lies beyond what is
+ * kept: a lower bound of chi2 over the whole diagram (bound.ts), bands left over, and what a band's looks say
+ * against its transition. Nothing within the bound is lost.
+ *
+ * @param known a score already reached elsewhere, against which `keepWithin` counts
  */
-export function searchReadings(measurement: Measurement, ion: GroundCase, policy: Policy, ratio: RatioUsed, freeIon: FreeIon | null): readonly ScoredReading[] {
-  const parentRatio = freeIon?.racahC0 ? freeIon.racahC0 / freeIon.racahB0 : 4.5;
-  const { items, notFitted } = gather(measurement, ion, policy, parentRatio);
-  const fixed = items.every((item) => item.typed && item.candidates.length === 1);
-  const origin = items.length === 0 ? 'none' : items.some((item) => item.typed) ? 'typed' : 'proposed';
-  const readings = assignments(items).map((labels): ScoredReading => {
-    const assigned: Assigned[] = [];
-    const left = [...notFitted];
-    items.forEach(({ observation }, i) => {
-      const label = labels[i];
-      if (label) assigned.push({ label, observation });
-      else for (const band of observation.bands) left.push({ band, reason: 'no spin-allowed transition is left for it' });
-    });
-    const outcome = fitAssignment(ion, assigned, policy, ratio, freeIon);
-    const unassigned = labels.filter((label) => label === null).length;
-    const legal = isFit(outcome) && (fixed || keepsOrder(items, labels, assigned, outcome));
-    const score = legal
-      ? outcome.solutions[0]!.chi2 + 2 * parametersOf[outcome.mode] + unassignedPenalty * unassigned +
-        betaPenalty(outcome.solutions[0]!.at.racahB, outcome.assumedBeta ? null : freeIon) + unseenEvidence(measurement, ion, assigned, outcome)
-      : Number.POSITIVE_INFINITY;
-    return { assigned, notFitted: left.sort((a, b) => a.band - b.band), outcome, score, origin };
-  });
+export function searchReadings(task: SearchTask, freedom: Freedom, known = Number.POSITIVE_INFINITY): readonly ScoredReading[] {
+  const { measurement, ion, policy, ratio, freeIon } = task;
+  const { items, notFitted } = gatherItems(measurement, ion, policy, parentRatioOf(freeIon), freedom);
+  // Broad bands first: they fix Delta and B, against which lines are soon judged.
+  const ordered = [...items].sort((a, b) => isLine(measurement, a) - isLine(measurement, b));
+  const hasLines = ordered.some((item) => item.candidates.some((label) => !transitionOf(ion, label).spinAllowed));
+  // With spin-forbidden bands C may become free, and with it every window that depends on it.
+  const windowRatio = hasLines ? null : ratio.value;
+  const bound = boundFor(ion, windowRatio);
+  const found: ScoredReading[] = [];
+  /** The best scores so far, ascending: nothing worse than the last of them is wanted. */
+  const scores = Number.isFinite(known) ? [known] : [];
+  let fits = 0;
+  const chosen: Choice[] = [];
+
+  const bandCost = (item: Item, label: string): number =>
+    scoreOf(item.observation.bands.flatMap((index) => bandEvidence(ion, label, measurement.bands[index]!)));
+
+  const cut = (): number => Math.min((scores[0] ?? Number.POSITIVE_INFINITY) + keepWithin, scores[readingsAtMost - 1] ?? Number.POSITIVE_INFINITY);
+
+  const leaf = (): void => {
+    fits++;
+    const reading = scored(task, chosen, notFitted);
+    found.push(reading);
+    if (!Number.isFinite(reading.score)) return;
+    scores.push(reading.score);
+    scores.sort((a, b) => a - b);
+    if (scores.length > readingsAtMost) scores.pop();
+  };
+
+  /** Everything the next item may be, with the sums and the least score that each leads to; the most promising first. */
+  const branches = (item: Item, cost: number, sums: Float64Array | null) => {
+    const next = item.candidates
+      .filter((label) => label.includes('/') || !chosen.some((one) => one.label === label))
+      .map((label) => {
+        const { position, uMinus, uPlus } = item.observation;
+        const variance = Math.max(uMinus, uPlus) ** 2 + floorOf(ion, label, policy) ** 2;
+        const grown = bound.add(sums, label, position, variance);
+        const paid = cost + bandCost(item, label);
+        return { label: label as string | null, sums: grown as Float64Array | null, cost: paid, least: paid + bound.least(grown) };
+      });
+    if (item.leaveOut) {
+      const paid = cost + (item.leaveOut.counts ? leftOverPenalty : 0);
+      next.push({ label: null, sums, cost: paid, least: paid + bound.least(sums) });
+    }
+    return next.sort((a, b) => a.least - b.least);
+  };
+
+  const visit = (at: number, cost: number, sums: Float64Array | null): void => {
+    if (at === ordered.length) {
+      leaf();
+      return;
+    }
+    const item = ordered[at]!;
+    for (const branch of branches(item, cost, sums)) {
+      if (fits >= fitsAtMost || branch.least > cut()) return;
+      chosen.push({ item, label: branch.label });
+      visit(at + 1, branch.cost, branch.sums);
+      chosen.pop();
+    }
+  };
+  visit(0, 0, null);
   // With nothing that fits, the reading that assigns most bands tells most about why.
-  return readings.sort((a, b) => compareScores(a.score, b.score) || b.assigned.length - a.assigned.length);
+  found.sort((a, b) => compareScores(a.score, b.score) || b.assigned.length - a.assigned.length);
+  return found.filter((reading, i) => i === 0 || reading.score <= cut());
+}
+
+function isLine(measurement: Measurement, item: Item): number {
+  return item.observation.bands.some((index) => measurement.bands[index]!.kind === 'line') ? 1 : 0;
 }
 
 function compareScores(a: number, b: number): number {

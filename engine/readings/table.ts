@@ -1,7 +1,9 @@
 import type { Geometry } from '../ions/types.ts';
 import type { Gradient } from '../levels/levels.ts';
+import { degeneratePair } from '../levels/labels.ts';
 import { fieldSign, levelLabel } from '../levels/levels.ts';
-import { solveBlock } from '../levels/solve.ts';
+import { diagonalise, levelSlopes, solveBlock } from '../levels/solve.ts';
+import type { Diagonal } from '../levels/solve.ts';
 import { shellBlocks } from '../shell/blocks.ts';
 import type { Block } from '../shell/blocks.ts';
 
@@ -54,25 +56,29 @@ interface LevelPlace {
   readonly index: number;
 }
 
-const places = new Map<string, ReadonlyMap<string, LevelPlace>>();
+/** By geometry and number of electrons, so that no key has to be built on the hot path. */
+const places: Record<Geometry, Map<string, LevelPlace>[]> = { octahedral: [], tetrahedral: [] };
 
 /** Where each level label of an ion sits among the blocks. A joined label ("a4A1g/a4Eg") goes by its first name. */
-function placesOf(ion: FieldCase): ReadonlyMap<string, LevelPlace> {
-  const key = `${ion.electrons} ${ion.geometry}`;
-  let found = places.get(key);
+function placesOf(ion: FieldCase): Map<string, LevelPlace> {
+  const held = places[ion.geometry];
+  let found = held[ion.electrons];
   if (!found) {
     found = new Map(
       shellBlocks(ion.electrons).flatMap((block) =>
         Array.from({ length: block.size }, (_, index) => [levelLabel(block, index + 1, ion.geometry), { block, index }] as const),
       ),
     );
-    places.set(key, found);
+    const pair = degeneratePair(ion.electrons, ion.geometry);
+    if (pair) found.set(pair.label, found.get(pair.members[0])!);
+    held[ion.electrons] = found;
   }
   return found;
 }
 
+/** @throws RangeError for a label that is no level of the ion */
 export function levelPlace(ion: FieldCase, label: string): LevelPlace {
-  const place = placesOf(ion).get(label.split('/')[0]!);
+  const place = placesOf(ion).get(label);
   if (!place) throw new RangeError(`label: "${label}" is no level of d${ion.electrons} ${ion.geometry}`);
   return place;
 }
@@ -125,19 +131,19 @@ function makeTable(ion: FieldCase, ratio: number): LevelTable {
     },
     exact(labels, t) {
       const { delta, racahB, racahC } = pointOnCurve(t, ratio);
-      const solutions = new Map<Block, ReturnType<typeof solveBlock>>();
+      const solved = new Map<Block, Diagonal>();
       return labels.map((label) => {
         const { block, index } = levelPlace(ion, label);
-        let solution = solutions.get(block);
-        if (!solution) {
-          solution = solveBlock(block, sign, delta, racahB, racahC);
-          solutions.set(block, solution);
+        let diagonal = solved.get(block);
+        if (!diagonal) {
+          diagonal = diagonalise(block, sign, delta, racahB, racahC);
+          solved.set(block, diagonal);
         }
-        const gradient = { delta: solution.field[index]!, racahB: solution.racahB[index]!, racahC: solution.racahC[index]! };
+        const slopes = levelSlopes(block, sign, diagonal, index);
         return {
-          energy: solution.energy[index]!,
-          slope: slopeAt(t, ratio, gradient.delta, gradient.racahB, gradient.racahC),
-          gradient,
+          energy: delta * slopes.field + racahB * slopes.racahB + racahC * slopes.racahC,
+          slope: slopeAt(t, ratio, slopes.field, slopes.racahB, slopes.racahC),
+          gradient: { delta: slopes.field, racahB: slopes.racahB, racahC: slopes.racahC },
         };
       });
     },

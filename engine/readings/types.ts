@@ -1,5 +1,10 @@
 import type { Caution } from '../cautions/types.ts';
 import type { Geometry } from '../ions/types.ts';
+import type { Evidence } from './evidence.ts';
+import type { DoubletOrder, GroundState } from './groundState.ts';
+import type { Identifiability } from './identifiability.ts';
+import type { HelpfulBand } from './measureNext.ts';
+import type { Stress } from './stress.ts';
 import type { ParameterName, Standing, Verdict } from '../words/types.ts';
 
 /** A derived number. Where `standing` is "withheld" value and both u are null and `reason` says why. */
@@ -10,6 +15,8 @@ export interface Parameter {
   readonly u: number | null;
   /** With the model's floor and the uncertainty of an assumed C/B. */
   readonly uTotal: number | null;
+  /** Limits of one standard uncertainty (total) from the chi2 profile, where the curve is not parabolic; else null. */
+  readonly limits: { readonly low: number; readonly high: number } | null;
   readonly standing: Standing;
   readonly reason: string | null;
 }
@@ -32,6 +39,8 @@ export interface ReadingBand {
   readonly calculated: number | null;
   /** observed - calculated. */
   readonly residual: number | null;
+  /** How much of the fit hangs on this band, 0 to 1; null where it took no part. */
+  readonly leverage: number | null;
   /** d(transition energy)/d(Delta, B, C) at the fit. */
   readonly gradient: { readonly delta: number; readonly racahB: number; readonly racahC: number } | null;
 }
@@ -89,6 +98,28 @@ export interface Reading {
   readonly ratio: RatioUsed | null;
   readonly predicted: readonly PredictedBand[];
   readonly cautions: readonly Caution[];
-  /** Bands or a measurement that would help most, in words; null where nothing is missing. */
+  /** The band that would help most, in words; null where nothing is missing. */
   readonly measureNext: string | null;
+  /** Every band worth looking for, most helpful first. */
+  readonly helpfulBands: readonly HelpfulBand[];
+  /** chi2 + 2 x free parameters + evidence; null where no fit stands. Lower is better. */
+  readonly score: number | null;
+  /** What speaks against this reading. */
+  readonly evidence: readonly Evidence[];
+  /** For a rival: why it ranks where it does against the chosen reading; null for the chosen one. */
+  readonly ranking: string | null;
+  readonly identifiability: Identifiability | null;
+  readonly stress: Stress | null;
+  readonly groundState: GroundState | null;
+  readonly doubletOrder: DoubletOrder | null;
+  /** Sentences about ground level, spin crossing and order of levels. */
+  readonly remarks: readonly string[];
+  /** One sentence for a thesis: bands, numbers, uncertainties, standing. */
+  readonly sentence: string;
+}
+
+/** A measurement read: the chosen reading and its rivals, best first. */
+export interface ReadMeasurement {
+  readonly chosen: Reading;
+  readonly rivals: readonly Reading[];
 }

@@ -32,6 +32,7 @@ const fileCodes = {
   FILE_UNKNOWN: 'a YAML file or folder that nothing reads',
   DUPLICATE_ID: 'one id used twice, capitals aside',
   BAD_ID: 'an id that breaks the rule for ids',
+  MORE_FAULTS: 'a file with more than 100 faults: only the first are shown',
 } as const;
 
 const yamlCodes = {
@@ -91,7 +92,6 @@ const chemistryCodes = {
   TERM_UNKNOWN: 'a term that the ion has not',
   TERM_IS_GROUND: 'the ground level typed as a transition',
   TERM_AMBIGUOUS: 'a term label that names no single level',
-  TERM_GEOMETRY: 'a label with g for a tetrahedral ion',
   TERM_TWICE: 'two bands that claim one term and are not components',
   HAZARD_UNKNOWN: 'an override of a hazard caution that does not exist',
   POLICY_VALUE: 'a policy value outside its limits',

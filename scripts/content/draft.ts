@@ -7,6 +7,7 @@ import type { ContentNode, MapNode, Path } from './node.ts';
 import { nearNames, orList } from './nearest.ts';
 import { typedText } from './report.ts';
 import type { Finding, Reporter } from './report.ts';
+import { metaOf } from './schema/meta.ts';
 import { homesOf } from './schema/names.ts';
 
 type Schema = z.core.$ZodType;
@@ -29,7 +30,7 @@ export function readDraft<S extends Schema>(schema: S, node: ContentNode, report
 function walk(schema: Schema, described: Schema, node: ContentNode, path: Path, report: Reporter): unknown {
   if (schema instanceof z.ZodOptional) return walk(schema.unwrap(), described, node, path, report);
   if (node.kind === 'text' && node.text.trim() === '' && path.length > 0) {
-    report.at(path, { code: 'EMPTY_VALUE', found: 'nothing behind the colon', expected: expectation(described), mend: 'type a value, or delete the field where nothing is known: missing is left out' });
+    report.at(path, { code: 'EMPTY_VALUE', found: typeof path.at(-1) === 'number' ? 'nothing behind the dash' : 'nothing behind the colon', expected: expectation(described), mend: 'type a value, or delete the field where nothing is known: missing is left out' });
     return undefined;
   }
   if (schema instanceof z.ZodUnion) {
@@ -97,7 +98,7 @@ function findingOf(issue: z.core.$ZodIssue, typed: string): Finding {
   if (issue.code === 'invalid_value') {
     const names = issue.values.map(String);
     const near = nearNames(typed, names, 2);
-    return { code: 'UNKNOWN_CHOICE', found: typedText(typed), expected: `one of ${orList(names)}`, mend: near.length > 0 ? `write ${orList(near)}` : 'write one of these words' };
+    return { code: 'UNKNOWN_CHOICE', found: typedText(typed), expected: names.length === 1 ? `the word ${names[0]}` : `one of ${orList(names)}`, mend: near.length > 0 ? `write ${orList(near)}` : names.length === 1 ? `write ${names[0]}, or leave the field out` : 'write one of these words' };
   }
   return { code: 'WRONG_SHAPE', found: typedText(typed), expected: issue.message, mend: 'compare with the example record of content/README.md' };
 }
@@ -149,11 +150,6 @@ function limitOf(schema: z.ZodArray, check: 'max_length'): number | null {
     if (def.check === check && def.maximum !== undefined) return def.maximum;
   }
   return null;
-}
-
-function metaOf(schema: Schema): z.core.GlobalMeta {
-  const own = z.globalRegistry.get(schema);
-  return own?.description === undefined && schema instanceof z.ZodOptional ? metaOf(schema.unwrap()) : (own ?? {});
 }
 
 function expectation(schema: Schema): string {

@@ -20,7 +20,7 @@ export function editDistance(a: string, b: string): number {
 
 /**
  * The known names nearest to a typed one, at most `most`, best first; none where nothing is near.
- * Near is: at most a third of the letters differ (at least one may), capitals aside, or one name begins with the other.
+ * Near is: at most a third of the letters differ (at least one may), capitals aside, or one name holds the other.
  */
 export function nearNames(typed: string, known: Iterable<string>, most = 3): string[] {
   if (typed.length > 60) return [];
@@ -36,7 +36,7 @@ export function nearNames(typed: string, known: Iterable<string>, most = 3): str
         continue;
       }
     }
-    if (wanted.length >= 3 && other.length >= 3 && (other.startsWith(wanted) || wanted.startsWith(other))) {
+    if (wanted.length >= 3 && other.length >= 3 && (other.includes(wanted) || wanted.includes(other))) {
       scored.push({ name, score: reach + 1 });
     }
   }
@@ -46,6 +46,14 @@ export function nearNames(typed: string, known: Iterable<string>, most = 3): str
 
 /** "a", "a or b", "a, b or c". */
 export function orList(names: readonly string[]): string {
-  if (names.length < 2) return names.join('');
-  return `${names.slice(0, -1).join(', ')} or ${names[names.length - 1]}`;
+  return joined(names, 'or');
+}
+
+/** "a", "a and b", "a, b and c". */
+export function andList(names: readonly string[]): string {
+  return joined(names, 'and');
+}
+
+function joined(names: readonly string[], word: string): string {
+  return names.length < 2 ? names.join('') : `${names.slice(0, -1).join(', ')} ${word} ${names[names.length - 1]}`;
 }

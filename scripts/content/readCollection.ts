@@ -59,7 +59,7 @@ export function readCollection(directory: string): ReadResult {
   for (const { draft, report } of complexes) checkComplex(draft, report, known);
 
   const files = [...ligands, ...sources, ...complexes, ...(group === null ? [] : [group]), ...(policyFile === null ? [] : [policyFile])];
-  for (const { report } of files) faults.push(...report.faults);
+  for (const { report } of files) faults.push(...firstFaults(report));
   if (faults.length > 0 || group === null) return { collection: null, faults: sortedFaults(faults), filesRead: files.length };
 
   const policy = policyOf(policyFile === null ? {} : whole(policyFile));
@@ -79,6 +79,18 @@ const noGroup: Fault = {
   found: 'no file group.yaml', expected: 'group.yaml with title, group, licence, url, release and started', mend: 'copy the example of content/README.md into group.yaml',
 };
 
+/** Most faults that one file is reported with. */
+const mostFaults = 100;
+
+function firstFaults({ faults }: Reporter): readonly Fault[] {
+  if (faults.length <= mostFaults) return faults;
+  const sorted = sortedFaults(faults);
+  const rest = sorted[mostFaults]!;
+  return [...sorted.slice(0, mostFaults), {
+    ...rest, code: 'MORE_FAULTS', found: 'further faults in this file', expected: `at most ${mostFaults} in a report`, mend: 'mend those above and check again',
+  }];
+}
+
 /** A draft without faults is a whole record: every required field is there and every value was read. */
 function whole<S extends RecordSchema>(read: ReadFile<S>): z.output<S> {
   return read.draft as unknown as z.output<S>;
@@ -87,7 +99,7 @@ function whole<S extends RecordSchema>(read: ReadFile<S>): z.output<S> {
 function readFile<S extends RecordSchema>(schema: S, opened: OpenedFile): ReadFile<S> {
   const { root, faults } = readYaml(opened.text);
   const report = createReporter(opened.file, root);
-  for (const { place, finding } of faults) report.atPlace(place, root === null ? [] : pathAt(root, place), finding);
+  for (const { place, finding, path } of faults.slice(0, mostFaults + 1)) report.atPlace(place, path ?? (root === null ? [] : pathAt(root, place)), finding);
   if (root === null) {
     if (faults.length === 0) report.at([], { code: 'FILE_EMPTY', found: 'a file without any field', expected: 'a record', mend: 'type the record, or delete the file' });
     return { opened, draft: undefined as unknown as Draft<S>, report };

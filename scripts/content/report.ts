@@ -15,8 +15,8 @@ export interface Finding {
 
 export interface Reporter {
   readonly file: string;
-  /** Reports at the value of a path, or at the nearest value around it where it is absent. */
-  at(path: Path, finding: Finding): void;
+  /** Reports at the value of a path, or at the nearest value around it where it is absent; under the name of another field where one is given. */
+  at(path: Path, finding: Finding, field?: Path): void;
   /** Reports at a place that is known already. */
   atPlace(place: Place, path: Path, finding: Finding): void;
   readonly faults: readonly Fault[];
@@ -32,7 +32,7 @@ export function createReporter(file: string, root: ContentNode | null): Reporter
     file,
     faults,
     atPlace,
-    at: (path, finding) => atPlace(root === null ? { line: 1, column: 1 } : placeOf(root, path), path, finding),
+    at: (path, finding, field = path) => atPlace(root === null ? { line: 1, column: 1 } : placeOf(root, path), field, finding),
   };
 }
 

@@ -18,6 +18,14 @@ export function engineHash(folder: string = engineFolder): string {
   return hash.update(matrixVersion()).digest('hex');
 }
 
+let ofThisProcess: string | null = null;
+
+/** `engineHash` of the sources that this process runs: taken once, for a change on the disk does not change what is loaded. */
+export function loadedEngineHash(): string {
+  ofThisProcess ??= engineHash();
+  return ofThisProcess;
+}
+
 /** Name and version of this software, "bandstead 0.1.0". */
 export function softwareName(): string {
   const { name, version } = JSON.parse(readFileSync(packageFile, 'utf8')) as { name: string; version: string };

@@ -1,4 +1,4 @@
-import { freeIon, readMeasurement } from '#engine';
+import { freeIon, readWithRivals } from '#engine';
 import type { Reading } from '#engine';
 import type { Collection, MeasurementRecord } from '../content/types.ts';
 import type { ReadingCache } from './cache.ts';
@@ -30,7 +30,7 @@ export function readCollectionReadings(
       const key = readingKey(measurement.engine, measurement.policy, ion, engine);
       let json = fresh.get(key) ?? cache.get(key);
       if (json === null) {
-        json = JSON.stringify([fitOne(id, measurement)]);
+        json = JSON.stringify(readOne(id, measurement));
         fresh.set(key, json);
       }
       current.add(key);
@@ -42,9 +42,10 @@ export function readCollectionReadings(
   return { readings, refitted: fresh.size };
 }
 
-function fitOne(id: string, { engine, policy }: MeasurementRecord): Reading {
+function readOne(id: string, { engine, policy }: MeasurementRecord): readonly Reading[] {
   try {
-    return readMeasurement(engine, policy, freeIon(policy.freeIons, engine.ion));
+    const { chosen, rivals } = readWithRivals(engine, policy, freeIon(policy.freeIons, engine.ion));
+    return [chosen, ...rivals];
   } catch (error) {
     throw new Error(`the fit of ${id} failed: ${error instanceof Error ? error.message : String(error)}`, { cause: error });
   }

@@ -2,7 +2,7 @@ import type { Reading, Verdict } from '#engine';
 import { readCollection } from '../content/readCollection.ts';
 import type { Collection, Fault } from '../content/types.ts';
 import { noCache, openCache } from './cache.ts';
-import { engineHash, softwareName } from './fingerprint.ts';
+import { loadedEngineHash, softwareName } from './fingerprint.ts';
 import { readCollectionReadings } from './readings.ts';
 import { allTables } from './rows/tables.ts';
 import { writeDatabase } from './write.ts';
@@ -37,7 +37,7 @@ export type RefitResult =
 export function refit(order: RefitOrder): RefitResult {
   const { collection, faults, filesRead } = readCollection(order.content);
   if (collection === null) return { ok: false, faults, records: filesRead };
-  const engine = engineHash();
+  const engine = loadedEngineHash();
   const measurements = collection.complexes.reduce((count, complex) => count + complex.measurements.length, 0);
   const cache = order.cache === null ? noCache : openCache(order.cache);
   try {

@@ -74,7 +74,7 @@ function recordOf(recipe: Recipe, seed: number): string | null {
     if (bands.length === 0) return [];
     const notebook = `${random.whole(1, 30)}, p. ${random.whole(1, 200)}`;
     const date = `20${random.whole(10, 25)}-0${random.whole(1, 9)}-${random.whole(10, 28)}`;
-    return [{ setting, bands, provenance: { notebook, by: random.pick(['AB', 'CD', 'EF']), date }, absent: null, quoted: quotedBy(truth, random) }];
+    return [{ setting, bands, provenance: { notebook, by: random.pick(['AB', 'CD', 'EF']), date }, quoted: quotedBy(truth, random) }];
   });
   return measurements.length === 0 ? null : complexText(recipe, measurements);
 }
@@ -92,7 +92,7 @@ function believable(recipe: Recipe, seed: number): Truth | null {
 function quotedBy(truth: Truth, random: Random): DraftMeasurement['quoted'] {
   if (!random.chance(0.1)) return [];
   const delta = Math.round((truth.delta * (1 + random.normal(0, 0.01))) / 50) * 50;
-  return [{ fields: [['Delta', `${delta} cm-1`], ['cite', 'generated'], ['where', `p. ${random.whole(1, 90)}`]] }];
+  return [[['Delta', `${delta} cm-1`], ['cite', 'generated'], ['where', `p. ${random.whole(1, 90)}`]]];
 }
 
 function settingsFor(recipe: Recipe, random: Random): Setting[] {

@@ -25,7 +25,7 @@ export interface MetalEntry {
 
 /**
  * Invented: near the printed g and k (C. K. Jorgensen, Modern Aspects of Ligand Field Theory, 1971) and on purpose not equal
- * to them; where nothing is printed, a plausible number. High-spin and low-spin states of an ion have entries of their own.
+ * to them; where nothing is printed, a plausible number. k of Fe(III) departs from the print on purpose. High-spin and low-spin states of an ion have entries of their own.
  */
 export const metalEntries: readonly MetalEntry[] = [
   { key: 'ti', ion: 'Ti(III)', spin: null, g: 20100, k: 0.2, ratio: null, acceptorShift: 3000, donorEdge: 15000 },

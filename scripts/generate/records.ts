@@ -16,17 +16,12 @@ export interface Provenance {
   readonly date: string;
 }
 
-export interface Quotation {
-  readonly fields: Fields;
-}
-
 export interface DraftMeasurement {
   readonly setting: Setting;
   readonly bands: readonly SeenBand[];
   readonly provenance: Provenance;
-  /** A range looked at and found empty, as typed; null: none noted. */
-  readonly absent: string | null;
-  readonly quoted: readonly Quotation[];
+  /** Parameters printed before, one set of fields each. */
+  readonly quoted: readonly Fields[];
 }
 
 /** A whole complex record. */
@@ -42,7 +37,7 @@ export function complexText(recipe: Recipe, measurements: readonly DraftMeasurem
   return [...head, 'measurements:', ...measurements.flatMap((one) => measurementLines(one, recipe)), ''].join('\n');
 }
 
-function measurementLines({ setting, bands, provenance, absent, quoted }: DraftMeasurement, recipe: Recipe): string[] {
+function measurementLines({ setting, bands, provenance, quoted }: DraftMeasurement, recipe: Recipe): string[] {
   const fields: Fields = [
     ['sample', setting.sample && blockText(setting.sample)],
     ['phase', setting.phase],
@@ -58,8 +53,7 @@ function measurementLines({ setting, bands, provenance, absent, quoted }: DraftM
     ...blockLines(fields, '    '),
     '    bands:',
     ...bands.map((band) => `      - ${bandText(band, setting, recipe)}`),
-    ...(absent === null ? [] : [`      - { absent: ${absent} }`]),
-    ...(quoted.length === 0 ? [] : ['    quoted:', ...quoted.map((one) => `      - ${flowMap(one.fields)}`)]),
+    ...(quoted.length === 0 ? [] : ['    quoted:', ...quoted.map((one) => `      - ${flowMap(one)}`)]),
   ];
 }
 

@@ -1,6 +1,6 @@
 import type { Plugin, ViteDevServer } from 'vite';
 import type { Address } from './address.ts';
-import { projectFolder, siteSettings } from './pages.ts';
+import { misleading, projectFolder, siteSettings } from './pages.ts';
 
 /** The site served live: pages are drawn when they are asked for. */
 export interface LiveSite {
@@ -13,7 +13,7 @@ export interface LiveSite {
 /** Starts the live site over a database file. Throws where the port cannot be had. */
 export async function startLiveSite(databaseFile: string, address: Address, port: number): Promise<LiveSite> {
   // The site's settings travel by the environment, as in a build.
-  Object.assign(process.env, siteSettings(databaseFile, address, 'dist'));
+  setEnvironment(siteSettings(databaseFile, address, 'dist'));
   const { dev } = await import('astro');
   let server: ViteDevServer | null = null;
   const keepServer: Plugin = {
@@ -30,6 +30,11 @@ export async function startLiveSite(databaseFile: string, address: Address, port
     },
     stop: () => site.stop(),
   };
+}
+
+function setEnvironment(settings: Readonly<Record<string, string>>): void {
+  for (const name of misleading) delete process.env[name];
+  Object.assign(process.env, settings);
 }
 
 // The site's data modules read the database when they are loaded: forgetting every loaded module makes the next page read it anew.

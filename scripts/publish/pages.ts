@@ -30,11 +30,19 @@ export function countPages(folder: string): number {
   return readdirSync(folder, { recursive: true, encoding: 'utf8' }).filter((name) => name.endsWith('.html')).length;
 }
 
+/** Environment variables that the page builder mixes into what the pages see of their own address and mode. */
+export const misleading: readonly string[] = ['BASE_URL', 'SITE', 'ASSETS_PREFIX', 'MODE', 'DEV', 'PROD', 'SSR'];
+
+function cleanEnvironment(): NodeJS.ProcessEnv {
+  const kept = Object.entries(process.env).filter(([name]) => !misleading.includes(name));
+  return { ...Object.fromEntries(kept), NODE_ENV: 'production' };
+}
+
 function run(words: readonly string[], settings: Readonly<Record<string, string>>): Promise<{ code: number; said: string }> {
   return new Promise((resolve, reject) => {
     const builder = join(projectFolder, 'node_modules', 'astro', 'bin', 'astro.mjs');
     const child = spawn(process.execPath, [builder, ...words], {
-      cwd: projectFolder, env: { ...process.env, ...settings }, stdio: ['ignore', 'pipe', 'pipe'],
+      cwd: projectFolder, env: { ...cleanEnvironment(), ...settings }, stdio: ['ignore', 'pipe', 'pipe'],
     });
     let said = '';
     for (const stream of [child.stdout, child.stderr]) stream.setEncoding('utf8').on('data', (text: string) => { said += text; });

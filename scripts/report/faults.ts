@@ -1,13 +1,13 @@
 // Faults as a terminal shows them and as --json gives them.
 
-import { basename, isAbsolute, relative, sep } from 'node:path';
+import { isAbsolute, join, relative, sep } from 'node:path';
 import type { Fault } from '../content/types.ts';
 
-/** The name of a content folder in messages: as seen from where the user stands, where it lies below. */
+/** The name of a content folder in messages, such that an editor can follow it: as seen from where the user stands where that is near, else whole. */
 export function folderName(directory: string, standing: string = process.env['INIT_CWD'] ?? process.cwd()): string {
   const seen = relative(standing, directory);
   if (seen === '') return '.';
-  return seen.startsWith('..') || isAbsolute(seen) ? basename(directory) : seen.split(sep).join('/');
+  return seen.startsWith(join('..', '..')) || isAbsolute(seen) ? directory : seen.split(sep).join('/');
 }
 
 /** One fault in four lines: place, field and code; found; expected; to mend. `folder` is put before the file's name. */

@@ -1,4 +1,4 @@
-import { type FieldIon, groundCrossings, levels } from '#engine';
+import { type FieldIon, groundCrossings, levels, parentOf } from '#engine';
 
 export interface CurvePoint { readonly x: number; readonly y: number }
 
@@ -19,7 +19,7 @@ export interface LevelDiagram {
   readonly curves: readonly LevelCurve[];
   /** The ground level along the axis, in order; more than one where the ground level changes. */
   readonly grounds: readonly GroundRange[];
-  /** Free-ion terms at Delta = 0; `letter` null where terms coincide. */
+  /** Free-ion terms at Delta = 0; `letter` names several where terms coincide, "P,H". */
   readonly terms: readonly { readonly letter: string | null; readonly multiplicity: number; readonly y: number }[];
 }
 
@@ -63,9 +63,9 @@ function merged(curves: ReadonlyMap<string, { readonly multiplicity: number; rea
 
 function freeTerms(ion: FieldIon, cOverB: number): LevelDiagram['terms'] {
   const terms: { letter: string | null; multiplicity: number; y: number }[] = [];
-  for (const { multiplicity, parent, energy } of levels(ion, { delta: 0, racahB: 1, racahC: cOverB })) {
+  for (const { label, multiplicity, energy } of levels(ion, { delta: 0, racahB: 1, racahC: cOverB })) {
     if (terms.some((term) => term.multiplicity === multiplicity && Math.abs(term.y - energy) < 1e-6)) continue;
-    terms.push({ letter: parent, multiplicity, y: energy });
+    terms.push({ letter: parentOf(label, ion.electrons, cOverB)?.replace(', ', ',') ?? null, multiplicity, y: energy });
   }
   return terms;
 }

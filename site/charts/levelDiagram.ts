@@ -81,7 +81,7 @@ function termLabels({ x, y }: Drawing, { terms }: LevelDiagram, ceiling: number)
   const placed = spreadLabels(shown.map((term) => y(term.y)), shown.map(() => LABEL + 1), [MARGIN.top, y(0) + 6]);
   return shown.map((term, index) => {
     const parts: TextPart[] = [{ text: String(term.multiplicity), style: 'super' }, { text: term.letter ?? '…', style: 'plain' }];
-    return label(parts, x(0) - 5, placed[index]!, 'end', leader(x(0) - 4, placed[index]!, x(0), y(term.y)));
+    return label(parts, x(0) - 5, placed[index]!, 'end', leader(x(0) - 4, placed[index]!, x(0), y(term.y)), LABEL);
   }).join('');
 }
 
@@ -92,11 +92,15 @@ function levelLabels({ x, y }: Drawing, diagram: LevelDiagram, ceiling: number):
   const right = ends.filter(({ piece }) => piece.at(-1)!.x === diagram.reach);
   const top = ends.filter(({ piece }) => piece.at(-1)!.x < diagram.reach);
   const heights = spreadLabels(right.map(({ piece }) => y(piece.at(-1)!.y)), right.map(() => LABEL + 0.5), [MARGIN.top - 6, y(0) + 8]);
-  const places = spreadLabels(top.map(({ piece }) => x(piece.at(-1)!.x)), top.map(() => LABEL), [x(0) - 20, x(diagram.reach) + 10]);
+  // Turned labels share the top edge: where there are many, they are set smaller rather than on each other.
+  const [from, to] = [x(0) - 20, x(diagram.reach) + 10];
+  const extent = Math.min(15, (to - from) / Math.max(1, top.length));
+  const size = Math.min(LABEL, 0.86 * extent);
+  const places = spreadLabels(top.map(({ piece }) => x(piece.at(-1)!.x)), top.map(() => extent), [from, to]);
   return right.map(({ curve, piece }, index) => label(labelParts(curve, diagram), x(diagram.reach) + 13, heights[index]!, 'start',
-    leader(x(diagram.reach), y(piece.at(-1)!.y), x(diagram.reach) + 11, heights[index]!))).join('')
+    leader(x(diagram.reach), y(piece.at(-1)!.y), x(diagram.reach) + 11, heights[index]!), LABEL)).join('')
     + top.map(({ curve, piece }, index) => label(labelParts(curve, diagram), places[index]!, MARGIN.top - 19, 'turned',
-      leader(x(piece.at(-1)!.x), MARGIN.top, places[index]!, MARGIN.top - 16))).join('');
+      leader(x(piece.at(-1)!.x), MARGIN.top, places[index]!, MARGIN.top - 16), size)).join('');
 }
 
 function labelParts(curve: LevelCurve, { ion }: LevelDiagram): readonly TextPart[] {
@@ -107,11 +111,11 @@ function leader(fromX: number, fromY: number, toX: number, toY: number): string 
   return `<path class="leader" d="M${c(fromX)} ${c(fromY)}L${c(toX)} ${c(toY)}"/>`;
 }
 
-function label(parts: readonly TextPart[], x: number, y: number, anchor: 'start' | 'end' | 'turned', line: string): string {
+function label(parts: readonly TextPart[], x: number, y: number, anchor: 'start' | 'end' | 'turned', line: string, size: number): string {
   const place = anchor === 'turned'
     ? `transform="translate(${c(x + 4)} ${c(y)}) rotate(-90)"`
     : `x="${c(x)}" y="${c(y + 4)}" text-anchor="${anchor}"`;
-  return `${line}<text ${place} font-size="${LABEL}">${spans(parts, LABEL)}</text>`;
+  return `${line}<text ${place} font-size="${c(size)}">${spans(parts, size)}</text>`;
 }
 
 /** Where Delta/B and E/B lie in the drawing: the scales that Plot makes, so that marks can be laid over a finished diagram. */
@@ -129,13 +133,21 @@ export function diagramOverlay(reach: number, ceiling: number, marks: readonly D
   return svgElement(dress, WIDTH, HEIGHT, complexMarks(diagramPlace(reach, ceiling), marks));
 }
 
-/** Complexes in the accent colour: an upright hairline, dots at observed bands, the key above the field axis. */
+/** More complexes than this, and their uprights shrink to ticks. */
+const MOST_UPRIGHTS = 12;
+const KEY_SIZE = 12.5;
+
+/** Complexes in the accent colour: an upright at Delta/B, dots at observed bands, the key above the field axis. */
 function complexMarks({ x, y }: Pick<Drawing, 'x' | 'y'>, marks: readonly DiagramMark[]): string {
-  const placed = spreadLabels(marks.map((mark) => x(mark.x)), marks.map((mark) => 6 + 7 * mark.key.length), [x(0), WIDTH]);
-  return marks.map((mark, index) => {
-    const at = x(mark.x);
-    const dots = mark.bands.map((band) => `<circle class="${band.used ? 'mark' : 'mark-open'}" cx="${c(at)}" cy="${c(y(band.y))}" r="3.2"/>`).join('');
-    const key = mark.key === '' ? '' : `<text class="mark-text" x="${c(placed[index]!)}" y="${c(y(0) - 5)}" text-anchor="middle" font-size="12.5" font-style="italic">${escapeText(mark.key)}</text>`;
-    return `<g><path class="mark-thin" d="M${c(at)} ${c(y(0))}V${MARGIN.top}"/>${dots}${key}</g>`;
+  const keyed = marks.filter((mark) => mark.key !== '');
+  const places = spreadLabels(keyed.map((mark) => x(mark.x)), keyed.map((mark) => 5 + 7 * mark.key.length), [x(0), WIDTH]);
+  const base = y(0);
+  const uprights = marks.map((mark) => `M${c(x(mark.x))} ${c(base)}V${c(marks.length > MOST_UPRIGHTS ? base - 5 : MARGIN.top)}`).join('');
+  const dots = marks.flatMap((mark) => mark.bands.map((band) => `<circle class="${band.used ? 'mark' : 'mark-open'}" cx="${c(x(mark.x))}" cy="${c(y(band.y))}" r="${marks.length > MOST_UPRIGHTS ? 2.6 : 3.2}"/>`)).join('');
+  const keys = keyed.map((mark, index) => {
+    const [at, place] = [x(mark.x), places[index]!];
+    const line = marks.length > MOST_UPRIGHTS || Math.abs(at - place) > 3 ? `<path class="mark-thin" d="M${c(at)} ${c(base - 5)}L${c(place)} ${c(base - 16)}"/>` : '';
+    return `${line}<text class="mark-text" x="${c(place)}" y="${c(base - 19)}" text-anchor="middle" font-size="${KEY_SIZE}" font-style="italic">${escapeText(mark.key)}</text>`;
   }).join('');
+  return `<path class="mark-thin" d="${uprights}"/>${dots}${keys}`;
 }

@@ -6,9 +6,9 @@ export interface SchemeLevel { readonly energy: number; readonly parts: readonly
 export interface SchemeBand { readonly observed: number; readonly used: boolean }
 
 const WIDTH = 300;
-const HEIGHT = 420;
+const HEIGHT = 350;
 const TOP = 14;
-const BOTTOM = 392;
+const BOTTOM = 330;
 const AXIS = 52;
 const [LEFT, RIGHT] = [150, 216];
 const SIZE = 12.5;

@@ -50,6 +50,6 @@ export function dressed({ svg }: Drawing, dress: Dress): string {
 
 /** An SVG element with role, name and description around hand-made or dressed content. */
 export function svgElement({ id, title, description }: Dress, width: number, height: number, content: string): string {
-  return `<svg class="drawing" role="img" aria-labelledby="${id}-title" aria-describedby="${id}-desc" viewBox="0 0 ${width} ${height}" width="${width}" height="${height}">`
+  return `<svg class="drawing${width > 600 ? ' broad-drawing' : width > 400 ? ' middle-drawing' : ''}" role="img" aria-labelledby="${id}-title" aria-describedby="${id}-desc" viewBox="0 0 ${width} ${height}" width="${width}" height="${height}">`
     + `<title id="${id}-title">${escapeText(title)}</title><desc id="${id}-desc">${escapeText(description)}</desc>${content}</svg>`;
 }

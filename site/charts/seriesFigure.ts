@@ -13,7 +13,7 @@ export interface SeriesPoint {
   readonly open: boolean;
 }
 
-const WIDTH = 760;
+const WIDTH = 560;
 const ROW = 22;
 const SIZE = 13.5;
 
@@ -28,7 +28,7 @@ export function seriesFigure(points: readonly SeriesPoint[], axis: readonly Text
   const [low, high] = ends.length === 0 ? [0, 1] : [Math.min(...ends), Math.max(...ends)];
   const pad = 0.06 * (high - low) || 0.05 * Math.abs(high) || 1;
   const ticks = tickLabels(low - pad, high + pad);
-  const left = Math.min(320, Math.max(90, 16 + Math.max(0, ...points.map(({ label }) => textWidth(label, SIZE)))));
+  const left = Math.min(240, Math.max(80, 16 + Math.max(0, ...points.map(({ label }) => textWidth(label, SIZE)))));
   const bottom = 44;
   const drawing = drawPlot(document, {
     width: WIDTH, height: 12 + ROW * Math.max(1, points.length) + bottom,
@@ -53,7 +53,7 @@ export function seriesFigure(points: readonly SeriesPoint[], axis: readonly Text
 
 /** Tick labels with as many decimals as the step between ticks needs, all alike. */
 function tickLabels(low: number, high: number): { readonly values: number[]; readonly text: (value: number) => string } {
-  const rough = (high - low) / 6;
+  const rough = (high - low) / 5;
   const power = 10 ** Math.floor(Math.log10(rough));
   const step = [1, 2, 5, 10].map((factor) => factor * power).find((candidate) => candidate >= rough)!;
   const decimals = Math.max(0, -Math.floor(Math.log10(step) + 1e-9));

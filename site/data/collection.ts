@@ -1,10 +1,12 @@
 import type { ResultRow } from '../components/resultRow.ts';
 import { conditions } from './conditions.ts';
+import { oncePerCollection } from './memo.ts';
 import { collectionPath, ionPath } from './paths.ts';
 import { counted, parameterShown } from './show.ts';
 import { stripRow, stripTitle } from './strip.ts';
 import type { CollectionTree, ComplexNode, MeasurementNode } from './tree.ts';
 import { type Parts, configuration } from './typeset.ts';
+import { groupBy } from './group.ts';
 
 export const ROWS_A_PAGE = 200;
 
@@ -20,14 +22,16 @@ export interface CollectionPage {
 }
 
 /** All results in the order of the book: by d count, metal, geometry and Delta; withheld last. */
-export function orderedResults(tree: CollectionTree): readonly MeasurementNode[] {
-  return tree.complexes.flatMap((complex) => complex.measurements).sort((a, b) =>
+export const orderedResults = oncePerCollection((tree): readonly MeasurementNode[] =>
+  tree.complexes.flatMap((complex) => complex.measurements).sort((a, b) =>
     compareIons(a.complex, b.complex)
-    || a.complex.row.geometry.localeCompare(b.complex.row.geometry, 'en')
+    || inOrder(a.complex.row.geometry, b.complex.row.geometry)
     || lowestDelta(a.complex) - lowestDelta(b.complex)
-    || (a.complex.row.id < b.complex.row.id ? -1 : a.complex.row.id > b.complex.row.id ? 1 : 0)
-    || a.row.number - b.row.number);
-}
+    || inOrder(a.complex.row.id, b.complex.row.id)
+    || a.row.number - b.row.number));
+
+/** Binary order, alike under every locale. */
+const inOrder = (a: string, b: string): number => (a < b ? -1 : a > b ? 1 : 0);
 
 const ROWS_OF_TABLE = ['3d', '4d', '5d'];
 
@@ -61,7 +65,7 @@ export function collectionPages(tree: CollectionTree): readonly number[] {
 export function collectionPage(tree: CollectionTree, number: number): CollectionPage {
   const results = orderedResults(tree);
   const shownRows = results.slice((number - 1) * ROWS_A_PAGE, number * ROWS_A_PAGE);
-  const sections = [...Map.groupBy(shownRows, (measurement) => measurement.complex.ion)].map(([ion, rows]) => ({
+  const sections = [...groupBy(shownRows, (measurement) => measurement.complex.ion)].map(([ion, rows]) => ({
     ion: ion.name, path: ionPath(ion.name), configuration: configuration(ion.electrons), rows: rows.map(resultRowOf),
   }));
   const ions = new Set(results.map((measurement) => measurement.complex.ion.name));

@@ -1,4 +1,5 @@
-import type { CollectionTree, MeasurementNode, ReadingNode } from './tree.ts';
+import type { CollectionTree, ComplexNode, MeasurementNode, ReadingNode } from './tree.ts';
+import { groupBy } from './group.ts';
 
 /** Complexes of one ion, geometry and spin, or what was left out of them and why. */
 export interface Series {
@@ -29,6 +30,7 @@ export function seriesOf(tree: CollectionTree, candidates: readonly MeasurementN
   let rest = keep(candidates, (m) => value(m).value !== null, (m) => value(m).reason ?? 'withheld');
   rest = keep(rest, (m) => m.row.policy === tree.policy.id, (m) => `fitted under another policy: ${m.row.policy_reason ?? m.row.policy}`);
   rest = keep(rest, (m) => m.chosen.row.verdict !== 'refused', () => 'the reading is refused');
+  rest = keep(rest, (m) => !m.chosen.cautions.some((caution) => caution.code === 'JAHN_TELLER_ENVELOPE'), () => 'one envelope stands for a transition that a Jahn–Teller distortion splits');
   const inSolution = new Set(rest.filter((m) => m.row.phase === 'solution').map((m) => m.complex.row.id));
   const inSolid = new Set(rest.filter((m) => m.row.phase !== 'solution').map((m) => m.complex.row.id));
   const solution = inSolution.size >= inSolid.size;
@@ -68,8 +70,11 @@ function transitionsOf(reading: ReadingNode): string {
 /** Measurements of one ion, geometry and spin. */
 export interface Kind { readonly ion: string; readonly geometry: string; readonly spin: string | null; readonly measurements: readonly MeasurementNode[] }
 
+/** What complexes of one kind share, as a key. */
+export const kindKey = ({ row }: ComplexNode): string => `${row.ion}|${row.geometry}|${row.spin ?? ''}`;
+
 export function kinds(measurements: readonly MeasurementNode[]): readonly Kind[] {
-  const groups = Map.groupBy(measurements.filter((m) => m.complex.row.fitted === 1), ({ complex: { row } }) => `${row.ion}|${row.geometry}|${row.spin ?? ''}`);
+  const groups = groupBy(measurements.filter((m) => m.complex.row.fitted === 1), ({ complex }) => kindKey(complex));
   return [...groups.values()].map((members) => {
     const { ion, geometry, spin } = members[0]!.complex.row;
     return { ion, geometry, spin, measurements: members };

@@ -1,14 +1,16 @@
 import { additiveName, elementName, romanNumeral } from '#engine';
 import { conditions } from './conditions.ts';
+import { type PlaceOnDiagram, placeOnDiagram } from './diagram.ts';
 import { type MeasurementMeaning, measurementMeaning } from './measurementMeaning.ts';
 import { type MeasurementRead, measurementRead } from './measurementRead.ts';
 import { type Neighbours, neighbours } from './neighbours.ts';
 import { complexPath, ionPath, ligandPath } from './paths.ts';
-import { parameterShown } from './show.ts';
+import { groupBy } from './group.ts';
+import { listed, parameterShown } from './show.ts';
 import { type Origin, type Quote, measurementOrigin, quotes } from './origin.ts';
-import { type Table, quantity, rowColumn, column, soft } from './table.ts';
+import { type Table, column, quantity, rowColumn, soft, words } from './table.ts';
 import type { CollectionTree, ComplexNode, MeasurementNode } from './tree.ts';
-import { type FormulaShown, type Parts, configuration } from './typeset.ts';
+import { type FormulaShown, type Parts, configuration, sentenceShown } from './typeset.ts';
 
 export interface MeasurementShown {
   readonly id: string;
@@ -16,7 +18,6 @@ export interface MeasurementShown {
   readonly sample: string | null;
   readonly read: MeasurementRead;
   readonly meaning: MeasurementMeaning;
-  readonly cautions: readonly { readonly code: string; readonly text: string }[];
   readonly origin: Origin;
   readonly notes: string | null;
 }
@@ -26,7 +27,9 @@ export interface ComplexPage {
   readonly formula: FormulaShown;
   readonly name: string;
   readonly description: string;
-  readonly hazards: readonly { readonly code: string; readonly text: string; readonly foundIn: string | null }[];
+  readonly hazards: readonly { readonly code: string; readonly name: string; readonly text: string; readonly foundIn: string | null }[];
+  /** What all hazard cautions of the complex end with, said once. */
+  readonly hazardAdvice: string;
   readonly hazardOverrides: readonly { readonly code: string; readonly reason: string }[];
   readonly ion: { readonly name: string; readonly path: string; readonly configuration: Parts };
   readonly facts: readonly { readonly name: string; readonly value: string }[];
@@ -35,10 +38,13 @@ export interface ComplexPage {
   /** Side by side where there is more than one measurement. */
   readonly summary: Table | null;
   readonly measurements: readonly MeasurementShown[];
+  /** Spectral cautions, each once; `where` names the measurements where not all have it. */
+  readonly cautions: readonly { readonly code: string; readonly text: Parts; readonly where: string | null }[];
   readonly neighbours: Neighbours;
+  readonly diagram: PlaceOnDiagram | null;
   readonly quotes: readonly Quote[];
   readonly record: { readonly file: string; readonly hash: string };
-  readonly citation: string;
+  readonly citation: Parts;
   readonly report: { readonly text: string; readonly address: string | null };
 }
 
@@ -49,7 +55,7 @@ export function complexPage(tree: CollectionTree, complex: ComplexNode): Complex
   return {
     id: row.id, formula: complex.formula, name: complexName(complex),
     description: `${complex.formula.text}: band readings, assignment and ligand-field parameters of ${row.geometry} ${ion.name}.`,
-    hazards: complex.hazards.map(({ code, text, found_in }) => ({ code, text, foundIn: found_in })),
+    ...hazards(complex),
     hazardOverrides: complex.hazardOverrides.map(({ code, reason }) => ({ code, reason })),
     ion: { name: ion.name, path: ionPath(ion.name), configuration: configuration(ion.electrons) },
     facts: identity(complex),
@@ -58,7 +64,7 @@ export function complexPage(tree: CollectionTree, complex: ComplexNode): Complex
     })),
     notes: row.notes, summary: summary(complex),
     measurements: complex.measurements.map((measurement) => measurementShown(tree, measurement)),
-    neighbours: neighbours(tree, complex), quotes: quotes(tree, complex),
+    cautions: cautions(complex), neighbours: neighbours(tree, complex), diagram: placeOnDiagram(tree, complex), quotes: quotes(tree, complex),
     record: { file: row.file, hash: row.hash },
     citation: citation(tree, complex), report: report(tree, complex),
   };
@@ -80,6 +86,24 @@ function identity({ row }: ComplexNode): ComplexPage['facts'] {
   ];
 }
 
+function hazards({ hazards: rows }: ComplexNode): Pick<ComplexPage, 'hazards' | 'hazardAdvice'> {
+  const sentences = rows.map(({ text }) => text.split(/(?<=\.)\s+/));
+  const shared: string[] = [];
+  // The first sentence names the hazard and always stays.
+  while (rows.length > 0 && sentences.every((list) => list.length > 1 && list.at(-1) === sentences[0]!.at(-1))) {
+    shared.unshift(sentences[0]!.at(-1)!);
+    for (const list of sentences) list.pop();
+  }
+  return { hazards: rows.map(({ code, found_in }, index) => ({ code, name: sentences[index]![0] ?? code, text: sentences[index]!.slice(1).join(' '), foundIn: found_in })), hazardAdvice: shared.join(' ') };
+}
+
+function cautions({ measurements }: ComplexNode): ComplexPage['cautions'] {
+  const each = measurements.flatMap((measurement) => measurement.chosen.cautions.map(({ code, text }) => ({ code, text, id: measurement.row.id })));
+  return [...groupBy(each, ({ code, text }) => `${code} ${text}`).values()].map((same) => ({
+    code: same[0]!.code, text: sentenceShown(same[0]!.text), where: same.length === measurements.length ? null : listed(same.map(({ id }) => id)),
+  }));
+}
+
 function summary({ measurements }: ComplexNode): Table | null {
   if (measurements.length < 2) return null;
   return {
@@ -94,20 +118,22 @@ function summary({ measurements }: ComplexNode): Table | null {
 }
 
 function measurementShown(tree: CollectionTree, measurement: MeasurementNode): MeasurementShown {
-  const { row, chosen } = measurement;
+  const { row } = measurement;
   return {
     id: row.id, heading: conditions(measurement), sample: row.sample, notes: row.notes,
-    read: measurementRead(measurement, row.id), meaning: measurementMeaning(tree, measurement, row.id),
-    cautions: chosen.cautions.map(({ code, text }) => ({ code, text })),
+    read: measurementRead(measurement, row.id), meaning: measurementMeaning(measurement, row.id),
     origin: measurementOrigin(tree, measurement),
   };
 }
 
-function citation(tree: CollectionTree, { row, formula }: ComplexNode): string {
+function citation(tree: CollectionTree, { row, formula }: ComplexNode): Parts {
   const release = tree.meta.get('group.release') ?? 'not recorded';
   const doi = tree.meta.get('group.doi');
   const address = new URL(complexPath(row.id), tree.meta.get('group.url') ?? 'https://example.org/').href;
-  return `${tree.meta.get('group.name') ?? 'The group'}, ${collectionName(tree)}, release ${release}, record ${row.id}, ${formula.text}, ${address}. DOI: ${doi ?? 'not yet assigned'}.`;
+  return [
+    ...words(`${tree.meta.get('group.name') ?? 'The group'}, ${collectionName(tree)}, release ${release}, record ${row.id}, `), ...formula.parts,
+    ...words(`, ${address}. DOI: ${doi ?? 'not yet assigned'}.`),
+  ];
 }
 
 function report(tree: CollectionTree, { row }: ComplexNode): ComplexPage['report'] {

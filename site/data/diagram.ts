@@ -3,12 +3,14 @@ import { type LevelDiagram, levelDiagram } from '../charts/levelCurves.ts';
 import { type DiagramMark, diagramCeiling, diagramOverlay, levelDiagramFigure } from '../charts/levelDiagram.ts';
 import { newDocument } from '../charts/plot.ts';
 import { oncePerCollection } from './memo.ts';
-import { type PublishedFigure, csvText, figureFiles } from './figure.ts';
+import { csvText } from '../../scripts/export/csv.ts';
+import { type PublishedFigure, figureFiles } from './figure.ts';
 import { complexPath, ionSlug } from './paths.ts';
 import { counted, difference, energy, figures, ratio } from './show.ts';
 import { type Cell, type Table, column, quantity, rowColumn, words } from './table.ts';
-import type { CollectionTree, MeasurementNode } from './tree.ts';
+import type { CollectionTree, ComplexNode, MeasurementNode } from './tree.ts';
 import { configuration, termShown } from './typeset.ts';
+import { groupBy } from './group.ts';
 
 /** The diagram of one ion in one geometry, and what the collection has to put on it. */
 export interface IonDiagram {
@@ -24,7 +26,7 @@ export interface IonDiagram {
 /** One diagram for each ion and fitted geometry of the collection. */
 export const ionDiagrams = oncePerCollection((tree): readonly IonDiagram[] => {
   const fitted = tree.complexes.filter((complex) => complex.row.fitted === 1 && complex.ion.electrons > 0 && complex.ion.electrons < 10);
-  return [...Map.groupBy(fitted, (complex) => `${complex.ion.name}|${complex.row.geometry}`).values()].map((complexes) => {
+  return [...groupBy(fitted, (complex) => `${complex.ion.name}|${complex.row.geometry}`).values()].map((complexes) => {
     const { ion, row } = complexes[0]!;
     return ionDiagram(tree, ion.name, ion.electrons, row.geometry as Geometry, complexes.flatMap((complex) => complex.measurements));
   });
@@ -86,7 +88,9 @@ function diagramFigure(one: IonDiagram): PublishedFigure {
       marked.length > 0
         ? `${counted(marked.length, 'reading')} of the collection at the fitted Δ/B, n = ${marked.length}: full dots are observed bands in the fit, open dots are bands only compared with it.`
         : 'No complex of the collection has both Δ and B here.',
+      ...(marked.some(({ measurement }) => measurement.chosen.parameters.C.standing === 'fitted') ? ['Where C is fitted, spin-flip bands lie off these curves by as much as that C/B differs.'] : []),
     ],
+    keys: marked.map(({ key, measurement: { complex, row } }) => ({ key, formula: complex.formula.parts, path: `${complexPath(complex.row.id)}#${row.id}`, measurement: row.id })),
     source: 'Levels computed from the full configuration; bands from this collection, conditions as listed in its table.',
     table: markTable(one), files: figureFiles(id), csv: diagramCsv(one),
   };
@@ -97,8 +101,29 @@ export function diagramBackground(one: IonDiagram): string {
   return levelDiagramFigure(one.diagram, one.ceiling, [], newDocument(), { id: `${one.id}-background`, title: `Energy levels of ${one.geometry} ${one.ion}`, description: describe(one) });
 }
 
-export function complexOverlay(one: IonDiagram, mark: Omit<DiagramMark, 'key'>, id: string, title: string): string {
-  return diagramOverlay(one.diagram.reach, one.ceiling, [{ ...mark, key: '' }], { id, title, description: `Observed bands at Δ/B = ${figures(mark.x, 4)}: E/B = ${mark.bands.map((band) => figures(band.y, 4)).join(', ')}.` });
+/** A complex on its ion's diagram: the background's file, and its own marks to lay over it. */
+export interface PlaceOnDiagram {
+  readonly background: string;
+  readonly alt: string;
+  readonly overlay: string;
+  readonly caption: string;
+}
+
+/** All measurements of a complex that have a place on its ion's diagram; null where none has. */
+export function placeOnDiagram(tree: CollectionTree, complex: ComplexNode): PlaceOnDiagram | null {
+  const one = ionDiagrams(tree).find(({ ion, geometry }) => ion === complex.ion.name && geometry === complex.row.geometry);
+  const placed = one?.marked.filter(({ measurement }) => measurement.complex === complex) ?? [];
+  if (one === undefined || placed.length === 0) return null;
+  const marks = placed.map(({ mark }, index) => ({ ...mark, key: placed.length === 1 ? '' : letterKey(index) }));
+  const names = placed.map(({ measurement }, index) => `${placed.length === 1 ? '' : `${letterKey(index)}: `}${measurement.row.id} at Δ/B = ${figures(placed[index]!.mark.x, 3)}`);
+  return {
+    background: `figures/${one.id}-background.svg`, alt: `Tanabe-Sugano diagram of ${one.geometry} ${one.ion}`,
+    overlay: diagramOverlay(one.diagram.reach, one.ceiling, marks, {
+      id: 'place', title: `${complex.formula.text} on the diagram`,
+      description: marks.map((mark) => `Observed bands at Δ/B = ${figures(mark.x, 4)}: E/B = ${mark.bands.map((band) => figures(band.y, 4)).join(', ')}.`).join(' '),
+    }),
+    caption: `E/B against Δ/B at the policy’s C/B = ${ratio(one.diagram.cOverB, 2)}. ${names.join('; ')}. Full dots are observed bands in the fit, open dots are compared only.`,
+  };
 }
 
 function describe({ diagram, ceiling }: IonDiagram): string {

@@ -9,6 +9,8 @@ export interface FigureShown {
   /** The title typeset, where it holds a formula. */
   readonly titleParts?: Parts;
   readonly caption: readonly string[];
+  /** What the letters in the drawing stand for. */
+  readonly keys?: readonly { readonly key: string; readonly formula: Parts; readonly path: string; readonly measurement: string }[];
   readonly source: string;
   readonly table: Table | null;
   /** Files to keep, from the site's root; empty where the figure is saved from the page only. */
@@ -20,15 +22,9 @@ export interface PublishedFigure extends FigureShown {
   readonly csv: string;
 }
 
+/** Id of the picture of a series figure on the series page. */
+export const plateId = (id: string): string => `${id}-plate`;
+
 export function figureFiles(id: string): FigureShown['files'] {
   return [{ name: 'SVG', path: `figures/${id}.svg` }, { name: 'CSV', path: `figures/${id}.csv` }];
-}
-
-/** Rows as CSV (RFC 4180): numbers in full, absent ones empty. */
-export function csvText(head: readonly string[], rows: readonly (readonly (string | number | null)[])[]): string {
-  const field = (value: string | number | null): string => {
-    const text = value === null ? '' : String(value);
-    return /[",\r\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text;
-  };
-  return `${[head, ...rows].map((row) => row.map(field).join(',')).join('\r\n')}\r\n`;
 }

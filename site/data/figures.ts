@@ -1,6 +1,6 @@
+import colours from '../styles/colours.css?raw';
 import figureStyles from '../styles/figures.css?raw';
-import bookStyles from '../styles/book.css?raw';
-import type { PublishedFigure } from './figure.ts';
+import { type PublishedFigure, plateId } from './figure.ts';
 import { diagramBackground, ionDiagramFigures, ionDiagrams } from './diagram.ts';
 import { ionSeries, ligandSeries } from './seriesFigures.ts';
 import type { CollectionTree } from './tree.ts';
@@ -13,22 +13,29 @@ export function publishedFigures(tree: CollectionTree): readonly PublishedFigure
   ];
 }
 
-/** Diagrams without marks, on which complex pages lay theirs. */
-export function backgrounds(tree: CollectionTree): readonly { readonly id: string; readonly svg: string }[] {
-  return ionDiagrams(tree).map((one) => ({ id: `${one.id}-background`, svg: diagramBackground(one) }));
+/** Figures that pages show as pictures and that follow the reader's theme: diagrams to lay marks over, and plates of the series page. */
+export function pictures(tree: CollectionTree): readonly { readonly id: string; readonly svg: string }[] {
+  const series = [...tree.ions.flatMap(({ name }) => ionSeries(tree, name)), ...tree.ligands.flatMap(({ id }) => ligandSeries(tree, id))];
+  return [
+    ...ionDiagrams(tree).map((one) => ({ id: `${one.id}-background`, svg: diagramBackground(one) })),
+    ...series.map(({ figure }) => ({ id: plateId(figure.id), svg: figure.svg })),
+  ];
 }
 
-/** The colours of the book, by day and by night, and the rules for figures: what a figure needs to stand by itself. */
-function ownStyles(): string {
-  const rules = [...bookStyles.matchAll(/(?::root \{[^}]*\}|@media \(prefers-color-scheme: dark\) \{\s*:root \{[^}]*\}\s*\})/g)].map(([rule]) => rule);
-  return `${rules.join('\n')}\n${figureStyles}`;
-}
-
-/** A figure as a file: its own namespace and styles, and the paper behind it where it is to be kept. */
-export function standalone(svg: string, paper: boolean): string {
+/** A figure as a file to keep: its own namespace and styles, ink on white paper. */
+export function keptFigure(svg: string): string {
   const [, width, height] = /viewBox="0 0 ([\d.]+) ([\d.]+)"/.exec(svg) ?? [];
-  const ground = paper ? `<rect width="${width}" height="${height}" fill="var(--paper)"/>` : '';
-  const scheme = paper ? ':root { color-scheme: light; }' : '';
-  const styles = paper ? ownStyles().replace(/@media \(prefers-color-scheme: dark\) \{\s*:root \{[^}]*\}\s*\}/, '') : ownStyles();
-  return `<?xml version="1.0" encoding="UTF-8"?>\n${svg.replace('<svg ', '<svg xmlns="http://www.w3.org/2000/svg" ').replace('>', `><style>${styles}${scheme}</style>${ground}`)}\n`;
+  return standalone(svg, `${DAY}\n:root { color-scheme: light; }`, `<rect width="${width}" height="${height}" fill="var(--paper)"/>`);
+}
+
+/** A figure as a picture for a page: nothing behind it, colours by the reader's theme. */
+export function picture(svg: string): string {
+  return standalone(svg, colours, '');
+}
+
+const DAY = /:root \{[^}]*\}/.exec(colours)?.[0] ?? '';
+
+function standalone(svg: string, rules: string, ground: string): string {
+  const styled = svg.replace('<svg ', '<svg xmlns="http://www.w3.org/2000/svg" ').replace('>', `><style>${rules}\n${figureStyles}</style>${ground}`);
+  return `<?xml version="1.0" encoding="UTF-8"?>\n${styled}\n`;
 }

@@ -1,3 +1,4 @@
+import { hazardFooter } from '#engine';
 import type { CollectionTree } from './tree.ts';
 
 /** What every page of the site shows around its content. */
@@ -24,7 +25,7 @@ export function frame(tree: CollectionTree): Frame {
     licence: tree.meta.get('group.licence') ?? 'licence not recorded',
     policy: tree.policy.id,
     colophon: `${title}, ${group}, release ${tree.meta.get('group.release') ?? 'not recorded'}.`,
-    hazardNote: 'No caution here does not mean no hazard.',
+    hazardNote: hazardFooter,
     sections: [
       { text: 'Collection', path: '' }, { text: 'Ions', path: 'ions/' }, { text: 'Ligands', path: 'ligands/' },
       { text: 'Series', path: 'series/' }, { text: 'Methods', path: 'methods/' }, { text: 'Data', path: 'data/' },

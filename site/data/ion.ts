@@ -9,6 +9,7 @@ import { type SeriesShown, ionSeries } from './seriesFigures.ts';
 import { type Cell, type Table, column, quantity, rowColumn, soft } from './table.ts';
 import type { CollectionTree } from './tree.ts';
 import { type Parts, configuration } from './typeset.ts';
+import { groupBy } from './group.ts';
 
 export interface IonPage {
   readonly name: string;
@@ -52,7 +53,7 @@ export interface IonList {
 
 /** Every ion of the collection, in the order of the table of elements. */
 export function ionList(tree: CollectionTree): IonList {
-  const groups = [...Map.groupBy(tree.complexes, (complex) => complex.ion.name).values()].sort((a, b) => compareIons(a[0]!, b[0]!));
+  const groups = [...groupBy(tree.complexes, (complex) => complex.ion.name).values()].sort((a, b) => compareIons(a[0]!, b[0]!));
   return {
     table: {
       caption: 'Ions of the collection',

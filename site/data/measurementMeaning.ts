@@ -1,11 +1,10 @@
 import { levels } from '#engine';
 import { levelScheme } from '../charts/levelScheme.ts';
-import { complexOverlay, ionDiagrams, placeOf } from './diagram.ts';
 import type { FigureShown } from './figure.ts';
 import { type ParameterShown, difference, energy, energyTwoSided, figures, nanometres, parameterShown, ratio } from './show.ts';
 import { type Cell, type Table, column, quantity, rowColumn, soft, words } from './table.ts';
-import type { CollectionTree, MeasurementNode } from './tree.ts';
-import { type Parts, termShown } from './typeset.ts';
+import type { MeasurementNode } from './tree.ts';
+import { type Parts, sentenceShown, termShown } from './typeset.ts';
 
 /** What the readings mean: the assignment against the fit, the parameters, and how far they may be trusted. */
 export interface MeasurementMeaning {
@@ -13,11 +12,9 @@ export interface MeasurementMeaning {
   readonly assignment: string;
   readonly transitions: Table | null;
   readonly parameters: readonly ParameterShown[];
-  readonly diagram: { readonly background: string; readonly alt: string; readonly overlay: string; readonly caption: string } | null;
   readonly scheme: FigureShown | null;
-  readonly verdict: string;
-  readonly reason: string;
-  readonly measureNext: string | null;
+  readonly reason: Parts;
+  readonly measureNext: Parts | null;
   /** Facts about the fit, name and value. */
   readonly facts: readonly { readonly name: Parts; readonly value: string }[];
   readonly branches: Table | null;
@@ -28,7 +25,7 @@ const ASSIGNMENT: Readonly<Record<string, string>> = {
   typed: 'The assignment is the one typed in the record.', proposed: 'No assignment was typed; the engine proposes this one.', none: 'No assignment stands.',
 };
 
-export function measurementMeaning(tree: CollectionTree, measurement: MeasurementNode, id: string): MeasurementMeaning {
+export function measurementMeaning(measurement: MeasurementNode, id: string): MeasurementMeaning {
   const { chosen, complex } = measurement;
   const { row } = chosen;
   const { electrons } = complex.ion;
@@ -37,8 +34,8 @@ export function measurementMeaning(tree: CollectionTree, measurement: Measuremen
     assignment: ASSIGNMENT[row.assignment] ?? row.assignment,
     transitions: transitionTable(measurement),
     parameters: (['Delta', 'B', 'C', 'beta'] as const).map((name) => parameterShown(chosen.parameters[name])),
-    diagram: diagram(tree, measurement, id), scheme: scheme(measurement, id),
-    verdict: row.verdict, reason: row.reason, measureNext: row.measure_next,
+    scheme: scheme(measurement, id),
+    reason: sentenceShown(row.reason), measureNext: row.measure_next === null ? null : sentenceShown(row.measure_next),
     facts: facts(measurement), branches: branchTable(measurement), predicted: predictedTable(measurement),
   };
 }
@@ -48,7 +45,7 @@ function transitionTable({ chosen, complex }: MeasurementNode): Table | null {
   const none = soft('no fit');
   return {
     caption: 'Transitions, observed against calculated',
-    columns: [rowColumn('Transition to'), quantity('observed', 'cm-1', true), quantity('calculated', 'cm-1', true), quantity('obs. − calc.', 'cm-1', true), quantity('model floor', 'cm-1', true), column('In the fit')],
+    columns: [rowColumn('To'), quantity('observed', 'cm-1', true), quantity('calculated', 'cm-1', true), quantity('obs. − calc.', 'cm-1', true), quantity('floor', 'cm-1', true), column('In fit')],
     rows: chosen.transitions.map(({ row, bands }): readonly Cell[] => [
       { parts: termShown(row.label, complex.ion.electrons) },
       energyTwoSided(row.observed, row.u_minus, row.u_plus),
@@ -57,18 +54,6 @@ function transitionTable({ chosen, complex }: MeasurementNode): Table | null {
       energy(row.floor, null),
       `${row.used === 1 ? 'yes' : 'compared only'}${bands.length > 1 ? `, barycentre of ${bands.length} components` : ''}`,
     ]),
-  };
-}
-
-function diagram(tree: CollectionTree, measurement: MeasurementNode, id: string): MeasurementMeaning['diagram'] {
-  const place = placeOf(measurement);
-  const { complex } = measurement;
-  const one = ionDiagrams(tree).find((candidate) => candidate.ion === complex.ion.name && candidate.geometry === complex.row.geometry);
-  if (place === null || one === undefined || place.x > one.diagram.reach) return null;
-  return {
-    background: `figures/${one.id}-background.svg`, alt: `Tanabe-Sugano diagram of ${one.geometry} ${one.ion}`,
-    overlay: complexOverlay(one, place, `${id}-place`, `${complex.formula.text} on the diagram`),
-    caption: `E/B against Δ/B at the policy’s C/B = ${ratio(one.diagram.cOverB, 2)}; this reading at Δ/B = ${figures(place.x, 3)}, full dots in the fit, open dots compared only.`,
   };
 }
 
@@ -101,8 +86,8 @@ function facts({ chosen }: MeasurementNode): MeasurementMeaning['facts'] {
   const correlation = chosen.correlations.find((one) => one.first === 'Delta' && one.second === 'B');
   return [
     { name: words('Bands in the fit'), value: `${row.bands_used}, of these ${row.spare_bands === 0 ? 'none' : row.spare_bands} spare` },
-    ...(row.rms_residual === null ? [] : [{ name: words('Root-mean-square residual'), value: `${ratio(row.rms_residual, 0)} cm⁻¹` }]),
-    ...(row.chi2 === null ? [] : [{ name: words('χ²'), value: figures(row.chi2, 3) }]),
+    ...(row.rms_residual === null || row.spare_bands === 0 ? [] : [{ name: words('Root-mean-square residual'), value: `${ratio(row.rms_residual, 0)} cm⁻¹` }]),
+    ...(row.chi2 === null || row.spare_bands === 0 ? [] : [{ name: words('χ²'), value: figures(row.chi2, 3) }]),
     ...(correlation === undefined ? [] : [{ name: words('Correlation of Δ with B'), value: ratio(correlation.value, 2) }]),
     ...(row.Delta_over_B === null ? [] : [{ name: slanted('Δ/B'), value: figures(row.Delta_over_B, 4) }]),
     ...(row.C_over_B === null ? [] : [{ name: slanted('C/B'), value: `${row.C_over_B_u === null || row.C_over_B_u === 0 ? figures(row.C_over_B, 4) : energyRatio(row.C_over_B, row.C_over_B_u)}, ${row.C_over_B_origin === 'fitted' ? 'fitted' : `assumed (${row.C_over_B_origin})`}` }]),
@@ -126,7 +111,7 @@ function predictedTable({ chosen, complex }: MeasurementNode): Table | null {
   if (rows.length === 0) return null;
   return {
     caption: 'Spin-allowed bands that the fit predicts and no reading takes',
-    columns: [rowColumn('Transition to'), quantity('ν̃', 'cm-1'), quantity('λ', 'nm'), column('Range')],
+    columns: [rowColumn('To'), quantity('ν̃', 'cm-1'), quantity('λ', 'nm'), column('Range')],
     rows: rows.map((band) => [
       { parts: termShown(band.label, complex.ion.electrons) }, energy(band.position, band.u), nanometres(band.position, band.u),
       band.looked === 'inside' ? 'inside what was scanned' : band.looked === 'outside' ? 'outside what was scanned' : 'scanned range not recorded',

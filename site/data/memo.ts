@@ -4,8 +4,8 @@ import type { CollectionTree } from './tree.ts';
 export function oncePerCollection<Result>(work: (tree: CollectionTree, key: string) => Result): (tree: CollectionTree, key?: string) => Result {
   const made = new WeakMap<CollectionTree, Map<string, Result>>();
   return (tree, key = '') => {
-    let results = made.get(tree);
-    if (results === undefined) made.set(tree, results = new Map());
+    const results = made.get(tree) ?? new Map<string, Result>();
+    made.set(tree, results);
     const known = results.get(key);
     if (known !== undefined) return known;
     const result = work(tree, key);

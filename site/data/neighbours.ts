@@ -1,4 +1,5 @@
-import { differenceU, kinds, seriesOf } from './comparable.ts';
+import { differenceU, kindKey, kinds, seriesOf } from './comparable.ts';
+import { oncePerCollection } from './memo.ts';
 import { kindWords } from './seriesFigures.ts';
 import { complexPath } from './paths.ts';
 import { energy, parameterShown } from './show.ts';
@@ -13,11 +14,13 @@ export interface Neighbours {
   readonly table: Table | null;
 }
 
+const deltaSeries = oncePerCollection((tree) => new Map(kinds(tree.complexes.flatMap((complex) => complex.measurements))
+  .map((kind) => [kindKey(kind.measurements[0]!.complex), { kind, series: seriesOf(tree, kind.measurements, 'Delta') }])));
+
 export function neighbours(tree: CollectionTree, complex: ComplexNode): Neighbours {
-  const kind = kinds(tree.complexes.flatMap((one) => one.measurements)).find((one) => one.measurements[0]!.complex.row.ion === complex.row.ion
-    && one.geometry === complex.row.geometry && one.spin === complex.row.spin);
-  if (kind === undefined) return { sentence: 'The engine does not fit this geometry, so the complex stands in no series.', table: null };
-  const series = seriesOf(tree, kind.measurements, 'Delta');
+  const found = deltaSeries(tree).get(kindKey(complex));
+  if (found === undefined) return { sentence: 'The engine does not fit this geometry, so the complex stands in no series.', table: null };
+  const { kind, series } = found;
   const place = series.members.findIndex((member) => member.complex === complex);
   if (place < 0) {
     const out = series.leftOut.find(({ measurement }) => measurement.complex === complex);
@@ -30,7 +33,7 @@ export function neighbours(tree: CollectionTree, complex: ComplexNode): Neighbou
     sentence: `Number ${place + 1} of ${series.members.length} by Δ among ${kindWords(kind)} (${series.conditions}).`,
     table: {
       caption: 'Nearest by Δ',
-      columns: [rowColumn('Complex'), quantity('Δ', 'cm-1'), quantity('difference', 'cm-1', true), column('Against this complex')],
+      columns: [rowColumn('Complex'), quantity('Δ', 'cm-1'), quantity('difference', 'cm-1', true), column('Against this')],
       rows: shown.map((member) => neighbourRow(tree, here, member)),
     },
   };
@@ -38,7 +41,7 @@ export function neighbours(tree: CollectionTree, complex: ComplexNode): Neighbou
 
 function neighbourRow(tree: CollectionTree, here: MeasurementNode, other: MeasurementNode): readonly Cell[] {
   const value = parameterShown(other.chosen.parameters.Delta).total.text ?? 'withheld';
-  if (other === here) return [{ parts: other.complex.formula.parts }, value, '', 'this complex'];
+  if (other === here) return [{ parts: other.complex.formula.parts }, value, '', 'itself'];
   const difference = other.chosen.parameters.Delta.value! - here.chosen.parameters.Delta.value!;
   const u = differenceU(tree, here.chosen, other.chosen, 'Delta');
   const sign = difference >= 0 ? '+' : '';

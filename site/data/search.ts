@@ -1,13 +1,14 @@
 import { type CompactBand, type CompactCollection, KINDS } from '../client/compact.ts';
 import { collectionPage, orderedResults, resultRowOf } from './collection.ts';
 import type { CollectionTree, MeasurementNode } from './tree.ts';
+import { groupBy } from './group.ts';
 
 /** What the search in the page reads, in the order of the book. */
 export function searchData(tree: CollectionTree): CompactCollection {
   const verdicts = [...new Set(tree.complexes.flatMap((complex) => complex.measurements.map((measurement) => measurement.chosen.row.verdict)))].sort();
   const ionPlace = new Map(tree.ions.map((row, place) => [row.name, place]));
   const ligandPlace = new Map(tree.ligands.map((row, place) => [row.id, place]));
-  const byComplex = Map.groupBy(orderedResults(tree), (measurement) => measurement.complex);
+  const byComplex = groupBy(orderedResults(tree), (measurement) => measurement.complex);
   return {
     counts: collectionPage(tree, 1).counts,
     words: verdicts,

@@ -1,7 +1,8 @@
 import { newDocument } from '../charts/plot.ts';
 import { type SeriesPoint, seriesFigure } from '../charts/seriesFigure.ts';
 import { type Kind, type Series, kinds, seriesOf } from './comparable.ts';
-import { type PublishedFigure, csvText, figureFiles } from './figure.ts';
+import { csvText } from '../../scripts/export/csv.ts';
+import { type PublishedFigure, figureFiles } from './figure.ts';
 import { compareIons } from './collection.ts';
 import { oncePerCollection } from './memo.ts';
 import { complexPath, ionSlug } from './paths.ts';
@@ -9,6 +10,7 @@ import { counted, parameterShown } from './show.ts';
 import { type Cell, type Column, type Table, column, quantity, rowColumn, soft } from './table.ts';
 import type { CollectionTree, MeasurementNode } from './tree.ts';
 import type { Parts } from './typeset.ts';
+import { groupBy } from './group.ts';
 
 type Name = 'Delta' | 'beta';
 
@@ -41,7 +43,7 @@ export const kindWords = ({ ion, geometry, spin }: Kind): string => `${geometry}
 /** Delta and beta by metal ion for complexes that hold one kind of ligand only, octahedral and tetrahedral apart. */
 export const ligandSeries = oncePerCollection((tree, ligand): readonly SeriesShown[] => {
   const alone = tree.complexes.filter((complex) => complex.row.fitted === 1 && complex.ligands.length === 1 && complex.ligands[0]!.row.ligand === ligand);
-  return [...Map.groupBy(alone, (complex) => complex.row.geometry)].flatMap(([geometry, complexes]) => (['Delta', 'beta'] as const).flatMap((name) => {
+  return [...groupBy(alone, (complex) => complex.row.geometry)].flatMap(([geometry, complexes]) => (['Delta', 'beta'] as const).flatMap((name) => {
     const each = kinds(complexes.flatMap((complex) => complex.measurements)).map((kind) => seriesOf(tree, kind.measurements, name));
     const members = each.flatMap((series) => series.members).sort((a, b) => compareIons(a.complex, b.complex));
     if (members.length < 2) return [];

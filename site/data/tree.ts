@@ -1,5 +1,6 @@
 import type * as R from './rows.ts';
 import { type FormulaShown, formulaShown } from './typeset.ts';
+import { groupBy } from './group.ts';
 
 export interface TransitionNode { readonly row: R.ReadingBandRow; readonly bands: readonly R.BandRow[] }
 
@@ -147,7 +148,7 @@ function byKey<Row>(rows: readonly Row[], key: (row: Row) => string): ReadonlyMa
 }
 
 function grouped<Row>(rows: readonly Row[], key: (row: Row) => string): (key: string) => readonly Row[] {
-  const groups = Map.groupBy(rows, key);
+  const groups = groupBy(rows, key);
   return (wanted) => groups.get(wanted) ?? [];
 }
 

@@ -37,3 +37,38 @@ export function termShown(label: string, electrons: number): Parts {
 export function configuration(electrons: number): Parts {
   return [{ text: 'd', style: 'plain' }, { text: String(electrons), style: 'super' }];
 }
+
+const INLINE = /(?<![\w[(])([a-j]?[1-6](?:A1|A2|E|T1|T2)g?(?:\/[a-j]?[1-6](?:A1|A2|E|T1|T2)g?)?(?:\([SPDFGHI]'{0,2}\))?)(?![\w])|\b(Delta|beta)\b/g;
+const GREEK: Readonly<Record<string, string>> = { Delta: 'Δ', beta: 'β' };
+
+/** A stored sentence with its term labels and symbols typeset. */
+export function sentenceShown(text: string): Parts {
+  const parts: TextPart[] = [];
+  let reached = 0;
+  for (const found of text.matchAll(INLINE)) {
+    if (found.index > reached) parts.push({ text: text.slice(reached, found.index), style: 'plain' });
+    const [whole, term, symbol = ''] = found;
+    if (term === undefined) parts.push({ text: GREEK[symbol]!, style: 'italic' });
+    else parts.push(...termParts(term));
+    reached = found.index + whole.length;
+  }
+  if (reached < text.length) parts.push({ text: text.slice(reached), style: 'plain' });
+  return parts;
+}
+
+const LOW: Readonly<Record<string, string>> = Object.fromEntries([...'0123456789'].map((digit, index) => [digit, '₀₁₂₃₄₅₆₇₈₉'[index]!]));
+const HIGH: Readonly<Record<string, string>> = { ...Object.fromEntries([...'0123456789'].map((digit, index) => [digit, '⁰¹²³⁴⁵⁶⁷⁸⁹'[index]!])), '+': '⁺', '\u2212': '⁻', '-': '⁻' };
+const raised = (text: string, marks: Readonly<Record<string, string>>): string => [...text].map((sign) => marks[sign] ?? sign).join('');
+
+/**
+ * A medium or host as one line of text that keeps its typesetting where only plain text can stand: "mol L-1" and formulas
+ * with raised and lowered figures.
+ */
+export function inlineText(typed: string): string {
+  const units = typed.replace(/\b(mol|L|dm|cm|kg|g|mL)[-−](\d)/g, (_, unit: string, power: string) => `${unit}⁻${raised(power, HIGH)}`);
+  return units.split(' ').map((word) => {
+    if (!/[A-Z][a-z]?\d|[A-Z)\]]\d/.test(word)) return word;
+    const read = parseFormula(word);
+    return read.ok ? formulaParts(read.formula).map(({ text, style }) => style === 'sub' ? raised(text, LOW) : style === 'super' ? raised(text, HIGH) : text).join('') : word;
+  }).join(' ');
+}

@@ -39,9 +39,8 @@ const houseRules: readonly (readonly [string, rules.Rule, readonly Source[]])[] 
     { path: 'site/pages/a.astro', text: "---\nimport { levels } from '../../engine/index.ts';\n---\n<p></p>" },
     { path: 'site/pages/b.astro', text: "<p></p><script>import { levels } from '#engine/levels';</script>" },
   ]],
-  ['scripts never import site, nor site scripts: they meet in the database', rules.scriptsAndSiteMeetInTheDatabase, [
+  ['scripts never import site', rules.scriptsNeverImportSite, [
     { path: 'scripts/build.ts', text: "import { url } from '../site/url.ts';" },
-    { path: 'site/data/rows.ts', text: "import { table } from '../../scripts/database/tables.ts';" },
   ]],
   ['the site parses no YAML, holds no schema, and opens the database in site/data/ alone', rules.siteReadsRowsOnly, [
     { path: 'site/data/a.ts', text: "import { parse } from 'yaml';" },
@@ -69,6 +68,14 @@ test.each(houseRules.flatMap(([sentence, rule, bad]) => bad.map((file) => [sente
   'the rule "%s" notices %j', (_, __, rule, files) => {
     expect(rule(files)).not.toEqual([]);
   });
+
+test('the site cannot fetch YAML through a file of scripts, however far behind', () => {
+  const columns: Source = { path: 'scripts/export/columns.ts', text: "import { words } from './words.ts';" };
+  const words = (text: string): Source => ({ path: 'scripts/export/words.ts', text });
+  const page: Source = { path: 'site/data/downloads.ts', text: "import { columns } from '../../scripts/export/columns.ts';" };
+  expect(rules.siteReadsRowsOnly([page, columns, words('export const words = 1;')])).toEqual([]);
+  expect(rules.siteReadsRowsOnly([page, columns, words("import { parse } from 'yaml';")])).toEqual(['scripts/export/words.ts imports yaml']);
+});
 
 test('the rules allow what the house needs', () => {
   const good: Source[] = [

@@ -59,10 +59,10 @@ function checkSpin(complex: ComplexDraft, report: Reporter): number | null | 'un
   if (spin === undefined) {
     if (fitted !== 'octahedral' || !hasSpinChoice(electrons, fitted)) return null;
     const [high, low] = [possibleMultiplicities(electrons)[0]!, lowSpinMultiplicity(electrons, fitted)!];
-    report.at(['spin'], {
+    report.at(['ion'], {
       code: 'SPIN_MISSING', found: 'no "spin"', expected: `the spin of octahedral ${ion.name}, d${electrons}: high (multiplicity ${high}) or low (${low})`,
       mend: 'add a line  spin: high  or  spin: low',
-    });
+    }, ['spin']);
     return 'unknown';
   }
   const resolved = resolvedSpin(electrons, geometry, spin);

@@ -7,10 +7,10 @@ import type { Finding, Reporter } from '../report.ts';
 import type { ComplexDraft, KnownRecords, MeasurementDraft } from './complex.ts';
 import type { CountedLigand } from './ligands.ts';
 
-/** "3+", "2-", "0". */
+/** "3+", "1-", "0". */
 export function chargeText(charge: number): string {
   if (charge === 0) return '0';
-  return `${Math.abs(charge) === 1 ? '' : Math.abs(charge)}${charge > 0 ? '+' : '-'}`;
+  return `${Math.abs(charge)}${charge > 0 ? '+' : '-'}`;
 }
 
 /** A formula that cannot be read, in the words of a fault report. */
@@ -51,12 +51,15 @@ export function checkFormula(complex: ComplexDraft, ligands: readonly CountedLig
     const parts = [`${metals === 1 ? '' : `${metals} `}${ion.name}`, ...ligands.map(({ record, count }) => `${count} ${record.id} (${chargeText(record.charge)})`)].join(', ');
     report.at(['formula'], {
       code: 'CHARGE_SUM', found: `${typedText(typed)}, charge ${chargeText(formula.charge ?? 0)}`, expected: `charge ${chargeText(charge)}: ${parts}`,
-      mend: charge === 0 ? 'take the charge out of the formula, or check the ion, the ligands and their charges' : `write ${chargeText(charge)} behind the bracket, or check the ion, the ligands and their charges`,
+      mend: charge === 0 ? 'take the charge out of the formula, or check the ion, the ligands and their charges' : `write ${chargeText(charge).replace(/^1(?=[+-])/, '')} behind the bracket, or check the ion, the ligands and their charges`,
     });
   }
   const difference = compositionDifference(formula, ion.metal, metals, ligands, abbreviations);
-  if (difference !== null) {
-    report.at(['formula'], { code: 'FORMULA_CONTENT', found: `${typedText(typed)}: ${difference.formula}`, expected: `${difference.sum} from ion and ligands`, mend: difference.unknown === null ? 'correct the formula, or the ion and the ligands' : `give ${difference.unknown} as abbreviation: in its ligand record, or write the ligand in full` });
+  if (difference?.unknown != null) {
+    const { unknown } = difference;
+    report.at(['formula'], { code: 'FORMULA_CONTENT', found: `${typedText(typed)}, with ${unknown}`, expected: 'symbols of elements, and ligands by the abbreviation, id or name of their record', mend: `give ${unknown} as abbreviation: in its ligand record, or write the ligand in full` });
+  } else if (difference !== null) {
+    report.at(['formula'], { code: 'FORMULA_CONTENT', found: `${typedText(typed)}: ${difference.formula}`, expected: `${difference.sum} from ion and ligands`, mend: 'correct the formula, or the ion and the ligands' });
   }
   return formula;
 }

@@ -2,7 +2,7 @@
 
 import { degeneratePair, freeIon, levelNames, readLabel, shownLabel } from '#engine';
 import type { Geometry, Ion } from '#engine';
-import { nearNames, orList } from '../nearest.ts';
+import { andList, nearNames, orList } from '../nearest.ts';
 import { bandRoles } from '../records/measurement.ts';
 import { typedText } from '../report.ts';
 import type { Finding, Reporter } from '../report.ts';
@@ -67,9 +67,11 @@ export function checkTerms(complex: ComplexDraft, { bands }: MeasurementDraft, p
     if (claimants.length <= most) continue;
     const last = claimants[most]!;
     report.at(last.at, {
-      code: 'TERM_TWICE', found: `${typedText(last.typed)}, claimed by ${claimants.map(({ position }) => position).join(' and ')}`,
-      expected: components ? `at most three components of one level, ${shownLabel(label, ion.electrons)}` : `one band for the level ${shownLabel(label, ion.electrons)}; only components share a term`,
-      mend: components ? 'give one of them another term' : 'give one of the two another term, leave one out with a reason, or write kind: component on both',
+      code: 'TERM_TWICE', found: `${typedText(last.typed)}, claimed by ${andList(claimants.map(({ position }) => position))}`,
+      expected: label === pair ? `at most two bands for the pair ${shownLabel(label, ion.electrons)}`
+        : components ? `at most three components of one level, ${shownLabel(label, ion.electrons)}`
+        : `one band for the level ${shownLabel(label, ion.electrons)}; only components share a term`,
+      mend: components || label === pair ? 'give one of them another term, or leave it out with a reason' : 'give one of the two another term, leave one out with a reason, or write kind: component on both',
     });
   }
 }

@@ -3,6 +3,7 @@
 import { z } from 'zod';
 import { codeGroups } from '../codes.ts';
 import { recordKinds } from '../schema/kinds.ts';
+import { metaOf } from '../schema/meta.ts';
 
 type Schema = z.core.$ZodType;
 
@@ -16,7 +17,8 @@ interface FieldRow {
 /** One table for each kind of record, in Markdown. */
 export function fieldTables(): string {
   return recordKinds.map(({ files, schema }) => {
-    const rows = rowsOf(schema, '');
+    // Two ways of typing an item may share a field.
+    const rows = [...new Map(rowsOf(schema, '').reverse().map((row) => [row.path, row])).values()].reverse();
     return [`### \`${files}\``, '', '| field | needed | what | example |', '| --- | --- | --- | --- |', ...rows.map(tableLine)].join('\n');
   }).join('\n\n');
 }
@@ -61,15 +63,9 @@ function nested(schema: Schema, path: string): FieldRow[] {
 }
 
 function choices(schema: Schema): string {
-  return schema instanceof z.ZodEnum ? schema.options.join(', ') : '';
+  return schema instanceof z.ZodEnum && schema.options.length > 1 ? schema.options.join(', ') : '';
 }
 
 function unwrapped(schema: Schema): Schema {
   return schema instanceof z.ZodOptional ? unwrapped(schema.unwrap()) : schema;
-}
-
-function metaOf(schema: Schema): z.core.GlobalMeta {
-  const own = z.globalRegistry.get(schema);
-  if (own?.description !== undefined) return own;
-  return schema instanceof z.ZodOptional ? metaOf(schema.unwrap()) : (own ?? {});
 }

@@ -2,6 +2,7 @@
 
 import { z } from 'zod';
 import { recordKinds } from '../schema/kinds.ts';
+import { metaOf } from '../schema/meta.ts';
 
 /**
  * The text of record.schema.json (JSON Schema draft 7, which YAML editors read). One file for all kinds of record: an editor
@@ -24,10 +25,12 @@ function recordJsonSchema(schema: z.ZodObject): unknown {
     io: 'input',
     target: 'draft-7',
     reused: 'inline',
-    override: ({ jsonSchema }) => {
+    override: ({ zodSchema, jsonSchema }) => {
       const node = jsonSchema as Record<string, unknown>;
-      const bare = node['bare'];
+      const { bare, examples } = metaOf(zodSchema);
       delete node['bare'];
+      if (examples !== undefined) node['examples'] = examples;
+      delete node['propertyNames'];
       if (bare === 'number') node['type'] = ['string', 'number'];
       if (bare === 'boolean') node['type'] = ['string', 'boolean'];
     },

@@ -18,6 +18,7 @@ export function engineMeasurement(complex: ComplexFile, typed: MeasurementFile):
     geometryName: complex.geometry,
     multiplicity: complex.spin === undefined ? null : spin.multiplicity,
     phase: typed.phase,
+    medium: typed.medium ?? null,
     temperature: typed.temperature?.value ?? null,
     technique: typed.technique ?? null,
     bands: typed.bands.flatMap((band) => ('position' in band ? [engineBand(band)] : [])),

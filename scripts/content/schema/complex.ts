@@ -49,7 +49,7 @@ const observedBand = z.strictObject({
 });
 
 const absentRange = z.strictObject({
-  absent: ranges().meta({ description: 'a range where the group looked and saw no band', examples: ['28600 - 33300 cm-1'] }),
+  absent: ranges().meta({ description: 'in an item of its own, without position: a range where the group looked and saw no band', examples: ['28600 - 33300 cm-1'] }),
   notes: text().optional().meta({ description: 'anything else', examples: ['"10 cm cell"'] }),
 });
 
@@ -82,8 +82,8 @@ const measurement = z.strictObject({
   'magnetic-moment': withUnit('3.85 BM').optional().meta({ description: 'effective magnetic moment' }),
   'epr-g': text().optional().meta({ description: 'g values of electron paramagnetic resonance', examples: ['1.98'] }),
   source: source.meta({ description: 'notebook or cite; where the readings come from', examples: ['{ notebook: "17, p. 42", by: TL }'] }),
-  bands: z.array(z.union([observedBand, absentRange])).min(1).max(200).meta({ description: 'bands, and ranges without a band', examples: ['- { position: 21550(60) cm-1, term: 4T2g }'] }),
-  quoted: z.array(quoted).min(1).max(50).optional().meta({ description: 'parameters printed before; audited, never fitted', examples: ['- { Delta: 21600 cm-1, cite: author-1999 }'] }),
+  bands: z.array(z.union([observedBand, absentRange])).min(1).max(200).meta({ description: 'bands, and ranges without a band', examples: ['[{ position: 21550(60) cm-1, term: 4T2g }]'] }),
+  quoted: z.array(quoted).min(1).max(50).optional().meta({ description: 'parameters printed before; audited, never fitted', examples: ['[{ Delta: 21600 cm-1, cite: author-1999 }]'] }),
   policy: overrideSchema.optional().meta({ description: 'one policy value that holds for this measurement only, with the reason', examples: ['{ C/B: 4.0(3), because: "fitted in the parent compound" }'] }),
   notes: text().optional().meta({ description: 'anything else', examples: ['"second crop"'] }),
 });
@@ -92,14 +92,14 @@ export const complexSchema = z.strictObject({
   formula: text().meta({ description: 'the complex with its charge, in double quotes; equals ion and ligands', examples: ['"[Cr(NH3)6]3+"'] }),
   name: text().optional().meta({ description: 'a name, where one is wanted', examples: ['hexaamminechromium(III)'] }),
   ion: ion().meta({ description: 'metal and oxidation state', examples: ['Cr(III)'] }),
-  geometry: choice(geometryNames).meta({ description: 'octahedral and tetrahedral are fitted; the others are stored and drawn', examples: ['octahedral'] }),
+  geometry: choice(geometryNames).meta({ description: 'geometry around the metal; octahedral and tetrahedral are fitted, the others stored and drawn', examples: ['octahedral'] }),
   isomer: choice(['none', 'cis', 'trans', 'fac', 'mer']).optional().meta({ description: 'part of the identity; none where nothing is typed', examples: ['none'] }),
   ligands: z.record(text(), ligandCount).meta({ description: 'ids of records in ligands/ and how many of each', examples: ['{ ammine: 6 }', '{ oxalato: { count: 2, bound: 1 } }'] }),
-  spin: choice(spinNames).optional().meta({ description: 'needed for octahedral d4 to d7, else derived; high, low, intermediate or the multiplicity', examples: ['quartet'] }),
+  spin: choice(spinNames).optional().meta({ description: 'needed for octahedral d4 to d7, else derived', examples: ['quartet'] }),
   nuclearity: count(1, 12).optional().meta({ description: 'number of metal centres; 1 where nothing is typed', examples: ['1'] }),
-  innocence: choice(['doubtful']).optional().meta({ description: 'doubtful where a ligand may share its electrons; beta is then withheld', examples: ['doubtful'] }),
+  innocence: choice(['doubtful']).optional().meta({ description: 'the word doubtful, where a ligand may share its electrons; beta is then withheld', examples: ['doubtful'] }),
   'charge-note': text().optional().meta({ description: 'a remark on how the charge was assigned', examples: ['"from the EPR spectrum"'] }),
   hazards: z.record(text(), text()).optional().meta({ description: 'hazard cautions that do not apply, each with the reason', examples: ['{ PERCHLORATE: "never in contact with perchlorate" }'] }),
   notes: text().optional().meta({ description: 'anything else', examples: ['"made by the old route"'] }),
-  measurements: z.array(measurement).max(200).optional().meta({ description: 'spectra of this complex' }),
+  measurements: z.array(measurement).max(200).optional().meta({ description: 'spectra of this complex', examples: ['[{ id: aq-295, ... }]'] }),
 });

@@ -13,7 +13,7 @@ export const groupSchema = z.strictObject({
     name: text().meta({ description: 'name', examples: ['Tove Lind'] }),
     initials: text().optional().meta({ description: 'as in by: of a measurement', examples: ['TL'] }),
     orcid: orcid().optional().meta({ description: 'ORCID identifier', examples: ['0000-0002-1825-0097'] }),
-  })).max(500).optional().meta({ description: 'who measured and keeps the collection', examples: ['- { name: Tove Lind, initials: TL }'] }),
+  })).max(500).optional().meta({ description: 'who measured and keeps the collection', examples: ['[{ name: Tove Lind, initials: TL }]'] }),
   licence: licence().meta({ description: 'SPDX identifier of the licence of the content', examples: ['CC-BY-4.0'] }),
   url: webAddress().meta({ description: 'address of the published site with its base path', examples: ['https://example.org/bands/'] }),
   release: text().meta({ description: 'name of this release', examples: ['2026.1'] }),

@@ -46,10 +46,11 @@ export const choice = <const T extends string>(names: readonly [T, ...T[]]) => z
 /** A whole number, `least` or more. */
 export const count = (least: number, most: number) =>
   leaf<number>((typed) => {
-    const value = /^\d{1,6}$/.test(typed.trim()) ? Number(typed) : Number.NaN;
-    return value >= least && value <= most
-      ? { value }
-      : finding('BAD_COUNT', typed, `a whole number from ${least} to ${most}`, `write a whole number, ${Math.max(least, Math.min(most, 6))} for instance`);
+    const expected = `a whole number from ${least} to ${most}`;
+    const parsed = parseQuantity(typed, 'count');
+    if (!parsed.ok) return finding(parsed.code, parsed.found, expected, parsed.corrected === null ? 'write a whole number in digits' : parsed.mend);
+    const { value } = parsed.quantity;
+    return value >= least && value <= most ? { value } : finding('BAD_COUNT', typed, expected, 'check the number');
   }).meta({ bare: 'number' });
 
 /** A charge as it is typed: 0, -2, 3, 2-, 3+. */
@@ -76,8 +77,8 @@ export function quantity(wanted: WantedQuantity, options: { readonly zero?: bool
   return leaf<Quantity>((typed) => {
     const parsed = parseQuantity(typed, wanted, { zero: options.zero ?? false });
     if (!parsed.ok) {
-      const unfit = parsed.corrected !== null && options.units !== undefined && !fits(parsed.corrected, wanted, options.units);
-      return finding(parsed.code, parsed.found, options.units === undefined ? parsed.expected : energyDifference, unfit ? `write the number with its unit, ${options.units.join(', ')}` : parsed.mend);
+      if (options.units === undefined) return finding(parsed.code, parsed.found, parsed.expected, parsed.mend);
+      return finding(parsed.code, parsed.found, energyDifference, parsed.code === 'NO_UNIT' ? unitAdvice(typed) : parsed.mend);
     }
     if (options.units !== undefined && !options.units.includes(parsed.quantity.unit)) {
       return finding('WRONG_UNIT', typed, energyDifference, 'convert the value: an energy difference cannot be given as a wavelength');
@@ -88,9 +89,10 @@ export function quantity(wanted: WantedQuantity, options: { readonly zero?: bool
 
 const energyDifference = 'an energy with its unit, e.g. 650 cm-1 or 0.65 kK';
 
-function fits(typed: string, wanted: WantedQuantity, units: readonly Unit[]): boolean {
-  const parsed = parseQuantity(typed, wanted, { zero: true });
-  return parsed.ok && units.includes(parsed.quantity.unit);
+/** A bare number for an energy difference: hundreds are cm-1, small numbers kK. */
+function unitAdvice(typed: string): string {
+  const bare = typed.trim();
+  return Number.parseFloat(bare.replaceAll(' ', '')) >= 20 ? `write ${bare} cm-1 if it is a wavenumber` : `write ${bare} kK if it is in kilokayser, or the unit that it has`;
 }
 
 /** An energy that is no band position: a wavelength makes no sense for it. */
@@ -105,7 +107,7 @@ export const withUnit = (example: string) =>
     if (/^\d[\d.]*(\(\d+(\.\d+)?\))?\s*[A-Za-zµμ°/%]/.test(value) && value.length <= 60) return { value };
     const bare = /^[\d.]+$/.test(value);
     return finding(bare ? 'NO_UNIT' : 'NOT_A_NUMBER', typed, `a number with its unit, e.g. ${example}`, bare ? `write the unit behind the number, as in ${example}` : `write it as in ${example}`);
-  }).meta({ bare: 'number', examples: [example] });
+  }).meta({ examples: [example] });
 
 export interface TypedRanges {
   readonly typed: string;
@@ -116,6 +118,10 @@ export interface TypedRanges {
 export const ranges = () =>
   leaf<TypedRanges>((typed) => {
     const parsed = parseRanges(typed);
-    if (!parsed.ok) return finding(parsed.code, parsed.found, parsed.expected, parsed.mend);
+    if (!parsed.ok) {
+      const single = parseQuantity(typed, 'energy');
+      if (single.ok) return finding('BAD_RANGE', typed, parsed.expected, 'write two limits with a dash between them');
+      return finding(parsed.code, parsed.found === '' ? typed : parsed.found, parsed.expected, parsed.mend);
+    }
     return { value: { typed: typed.trim(), ranges: parsed.ranges } };
   });

@@ -16,7 +16,7 @@ export function homesOf(field: string): readonly string[] {
 
 function collect(schema: z.core.$ZodType, kind: string, path: readonly string[]): void {
   if (schema instanceof z.ZodOptional) collect(schema.unwrap(), kind, path);
-  else if (schema instanceof z.ZodArray) collect(schema.element, kind, path);
+  else if (schema instanceof z.ZodArray) collect(schema.element, kind, [...path.slice(0, -1), `an item of ${path.at(-1)}`]);
   else if (schema instanceof z.ZodRecord) collect(schema.valueType, kind, path);
   else if (schema instanceof z.ZodUnion) for (const option of schema.options) collect(option, kind, path);
   else if (schema instanceof z.ZodObject) {

@@ -24,14 +24,17 @@ export function outsideBands(typed: string, quantity: Quantity): Finding | null 
   return { code: 'BAND_RANGE', found: typed, expected: 'a position from 1000 to 100 000 cm-1 (100 to 10 000 nm)', mend: unitAdvice(typed, quantity) };
 }
 
-function unitAdvice(typed: string, { value, unit }: Quantity): string {
-  const other = (meant: string) => typed.replace(/\s*[^\d\s().+\-±]+.*$/u, '').trim() + ` ${meant}`;
-  if (unit === 'cm-1' && value >= 100 && value < lowestBand) return `this looks like nm; if it is a wavelength write ${other('nm')}`;
-  if (unit === 'cm-1' && value < 100) return `if it is in kilokayser write ${other('kK')}; in electronvolt, ${other('eV')}`;
-  if (unit === 'nm' && value > 10_000) return `this looks like cm-1; if it is a wavenumber write ${other('cm-1')}`;
-  if (unit === 'nm' && value < 100) return `if it is in kilokayser write ${other('kK')}`;
-  if ((unit === 'eV' || unit === 'kK') && value >= 100) return `if it is a wavelength write ${other('nm')}; if a wavenumber, ${other('cm-1')}`;
-  return 'check the number and its unit; a band outside these limits is no d-d band';
+/** The other units in which the number would be a band position. */
+function unitAdvice(typed: string, quantity: Quantity): string {
+  const number = typed.replace(/\s*(cm|\/cm|1\/cm|kK|nm|µm|μm|um|eV|meV).*$/u, '').trim();
+  const fitting = (['nm', 'cm-1', 'kK', 'eV'] as const).filter((unit) => {
+    if (unit === quantity.unit) return false;
+    const { position } = toWavenumber({ ...quantity, unit });
+    return position >= lowestBand && position <= highestBand;
+  });
+  if (fitting.length === 0) return 'check the number and its unit; a band outside these limits is no d-d band';
+  const meant = { nm: 'a wavelength', 'cm-1': 'a wavenumber', kK: 'in kilokayser', eV: 'in electronvolt' };
+  return `this looks like ${fitting[0]}; ${fitting.map((unit) => `if it is ${meant[unit]} write ${number} ${unit}`).join(', ')}`;
 }
 
 export interface Temperature {

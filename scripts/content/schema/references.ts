@@ -62,7 +62,7 @@ export const doi = () =>
   leaf<string>((typed) => {
     const value = typed.trim().replace(/^(https?:\/\/(dx\.)?doi\.org\/|doi:\s*)/i, '');
     if (/^10\.\d{4,9}\/[^\s"<>]{1,200}$/.test(value)) return { value };
-    return { code: 'BAD_DOI', found: typed, expected: 'a DOI, e.g. 10.5555/example.12', mend: 'copy the DOI from the article: it starts with 10.' };
+    return { code: 'BAD_DOI', found: typed, expected: 'a DOI, e.g. 10.5555/example.12', mend: 'copy the DOI from the page that gives it: it starts with 10.' };
   });
 
 /** An SPDX licence identifier by its shape. Whether SPDX lists it is not checked. */

@@ -1,6 +1,6 @@
 // The mended stretches that a scan for YAML traps can propose.
 
-import { parseQuantity } from '#engine';
+import { parseQuantity, parseRange } from '#engine';
 import type { Finding } from '../report.ts';
 
 /** A mended stretch of one line. `shown` is what the message offers, over shownFrom..shownTo where that is wider. */
@@ -75,7 +75,7 @@ export function commaInBraces(line: string, start: number, cut: number, next: nu
   const joined = joinedNumber(before, after, key) ?? quote(typed);
   return {
     start, end, replacement: joined, shown: joined,
-    finding: { code: 'COMMA_IN_BRACES', found: typed, expected: 'no comma in a value between { }: there a comma starts the next field', mend: '' },
+    finding: { code: 'COMMA_IN_BRACES', found: typed, expected: 'a value without a comma, or in double quotes: between { } a comma starts the next field', mend: '' },
   };
 }
 
@@ -89,5 +89,6 @@ function joinedNumber(before: string, after: string, key: string): string | null
     const parsed = parseQuantity(`${before},${after}`, wanted);
     if (!parsed.ok && parsed.corrected !== null && parsed.code.endsWith('_COMMA')) return parsed.corrected;
   }
-  return null;
+  const range = parseRange(`${before},${after}`);
+  return !range.ok && range.corrected !== null && range.code.endsWith('_COMMA') ? range.corrected : null;
 }

@@ -1,11 +1,14 @@
 // Small readers of one line of YAML, and the state that a scan carries from line to line.
 
+import type { Place } from '../node.ts';
 import { fieldNames } from '../schema/names.ts';
 
 /** One open brace or bracket. `key` is the field being read; `last` the plain value before the latest comma. */
 export interface FlowFrame {
   readonly kind: '{' | '[';
   key: string | null;
+  /** Line on which the key was read. */
+  keyLine: number;
   last: PlainValue | null;
 }
 
@@ -18,9 +21,13 @@ export interface PlainValue {
 }
 
 export interface ScanState {
+  /** Number of the line being read, from 1. */
+  lineNumber: number;
   readonly flow: FlowFrame[];
   /** The quote that is open at the end of the line. */
   quote: '"' | "'" | null;
+  /** Where the last quote that went on into another line was opened. */
+  quotePlace: Place | null;
   /** Indentation of the key whose text block (| or >) is being read. */
   blockIndent: number | null;
   /** Indentation of the key whose unquoted text may go on in the next line. */
@@ -46,6 +53,12 @@ export function skipQuoted(line: string, at: number, mark: '"' | "'"): number | 
     }
   }
   return null;
+}
+
+/** Remembers a quote that the line leaves open. `at` is the index of the quote mark. */
+export function openQuote(mark: '"' | "'", at: number, state: ScanState): void {
+  state.quote = mark;
+  state.quotePlace = { line: state.lineNumber, column: at + 1 };
 }
 
 /** Index of the # that starts a comment behind unquoted text, or null. */
@@ -78,12 +91,16 @@ export function keyAt(line: string, at: number): { readonly name: string; readon
   return null;
 }
 
+/** Brackets within brackets that a formula or SMILES may have. */
+const deepestFormula = 8;
+
 /** true where the bracket at an index is closed on its line and something is glued behind it: "[Cr(NH3)6]3+". */
 export function closesAsFormula(line: string, at: number): boolean {
   let open = 0;
   for (let index = at; index < line.length; index += 1) {
     if (line[index] === '[') open += 1;
     if (line[index] === ']') open -= 1;
+    if (open > deepestFormula) return false;
     if (open === 0) return /[^\s,\]}]/.test(line[index + 1] ?? ' ');
   }
   return false;

@@ -4,16 +4,18 @@
 
 import { typedText } from '../report.ts';
 import type { Finding } from '../report.ts';
-import type { Place } from '../node.ts';
+import type { Path, Place } from '../node.ts';
 import { scanFlow } from './flow.ts';
 import { colonInText, lostText, noSpaceAfterColon, specialStart, unquotedFormula } from './edits.ts';
 import type { Edit } from './edits.ts';
-import { closesAsFormula, inlineComment, isFieldName, keyAt, skipQuoted, skipSpaces, textFields } from './line.ts';
+import { closesAsFormula, inlineComment, isFieldName, keyAt, openQuote, skipQuoted, skipSpaces, textFields } from './line.ts';
 import type { FlowFrame, ScanState } from './line.ts';
 
 export interface Trap {
   readonly place: Place;
   readonly finding: Finding;
+  /** The field, where the reader knows it. */
+  readonly path?: Path;
 }
 
 export interface ScannedText {
@@ -22,25 +24,30 @@ export interface ScannedText {
   readonly traps: readonly Trap[];
   /** true where a tab stood in an indentation: how deep the line was meant to stand is then unknown. */
   readonly indentationUnknown: boolean;
+  /** Where a quote was opened that nothing closes, or null. */
+  readonly openQuote: Place | null;
   /** Deepest nesting of brackets or list marks in one place. */
   readonly depth: number;
 }
 
 /** Scans a whole file. Never throws. */
 export function scanTraps(text: string): ScannedText {
-  const state: ScanState = { flow: [], quote: null, blockIndent: null, plainIndent: null };
+  const state: ScanState = { lineNumber: 0, flow: [], quote: null, quotePlace: null, blockIndent: null, plainIndent: null };
   const traps: Trap[] = [];
   let indentationUnknown = false;
   let depth = 0;
   const lines = text.split('\n').map((whole, index) => {
     const line = whole.endsWith('\r') ? whole.slice(0, -1) : whole;
     const edits: Edit[] = [];
+    state.lineNumber = index + 1;
     depth = Math.max(depth, scanLine(line, state, edits));
     if (edits.some((edit) => edit.finding.code === 'TAB' && /^\s*$/.test(line.slice(0, edit.start)))) indentationUnknown = true;
-    for (const edit of edits) traps.push({ place: { line: index + 1, column: edit.start + 1 }, finding: withMendedLine(edit, line, edits) });
+    if (edits.length === 0) return line;
+    const mended = mendedLine(line, edits);
+    for (const edit of edits) traps.push({ place: { line: index + 1, column: edit.start + 1 }, finding: withMendedLine(edit, mended) });
     return edited(line, edits);
   });
-  return { text: lines.join('\n'), traps, indentationUnknown, depth };
+  return { text: lines.join('\n'), traps, indentationUnknown, openQuote: state.quote === null ? null : state.quotePlace, depth };
 }
 
 /** Scans one line, adds what it finds to `edits` and returns how deep the line nests. */
@@ -91,7 +98,7 @@ function scanBlockLine(line: string, indent: number, state: ScanState, edits: Ed
     state.plainIndent = at;
     return dashes;
   }
-  if (dashes > 0) return Math.max(dashes, scanValue(line, at, indent, null, state, edits));
+  if (dashes > 0 || line[at] === '{' || line[at] === '[') return Math.max(dashes, scanValue(line, at, indent, null, state, edits));
   findLostText(line, at, edits);
   return dashes;
 }
@@ -106,7 +113,7 @@ function scanValue(line: string, at: number, keyIndent: number, key: string | nu
   }
   if (first === '"' || first === "'") {
     const end = skipQuoted(line, at + 1, first);
-    if (end === null) state.quote = first;
+    if (end === null) openQuote(first, at, state);
     return 0;
   }
   if (first === '{') return openFlow('{', line, at, state, edits);
@@ -136,7 +143,7 @@ function scanValue(line: string, at: number, keyIndent: number, key: string | nu
 }
 
 function openFlow(kind: FlowFrame['kind'], line: string, at: number, state: ScanState, edits: Edit[]): number {
-  state.flow.push({ kind, key: null, last: null });
+  state.flow.push({ kind, key: null, keyLine: 0, last: null });
   return scanFlow(line, at + 1, state, edits);
 }
 
@@ -152,34 +159,42 @@ function findLostText(line: string, from: number, edits: Edit[]): void {
   edits.push(lostText(line, from, comment, line.trimEnd().length));
 }
 
-/** Tabs outside quotes and comments. */
+/** Tabs outside quotes and comments: one finding a line, from its first tab to its last. */
 function findTabs(line: string, edits: Edit[]): void {
-  const first = line.indexOf('\t');
-  if (first < 0) return;
+  if (!line.includes('\t')) return;
+  let first = -1;
+  let last = -1;
   let at = 0;
   while (at < line.length) {
     const letter = line[at]!;
-    if (letter === '#' && (at === 0 || /\s/.test(line[at - 1]!))) return;
+    if (letter === '#' && (at === 0 || /\s/.test(line[at - 1]!))) break;
     if ((letter === '"' || letter === "'") && /[\s:,[{]/.test(line[at - 1] ?? ' ')) {
       at = skipQuoted(line, at + 1, letter) ?? line.length;
       continue;
     }
     if (letter === '\t') {
-      const indentation = line.slice(0, at).trim() === '';
-      edits.push({
-        start: at, end: at + 1, replacement: indentation ? '  ' : ' ', shown: indentation ? '  ' : ' ',
-        finding: { code: 'TAB', found: 'a tab', expected: 'spaces: YAML takes no tabs', mend: '' },
-      });
+      if (first < 0) first = at;
+      last = at;
     }
     at += 1;
   }
+  if (first < 0) return;
+  const indentation = line.slice(0, first).trim() === '';
+  const replacement = line.slice(first, last + 1).replaceAll('\t', indentation ? '  ' : ' ');
+  edits.push({
+    start: first, end: last + 1, replacement, shown: replacement,
+    finding: { code: 'TAB', found: 'a tab', expected: 'spaces: YAML takes no tabs', mend: '' },
+  });
 }
 
-/** The message of an edit, with the whole line as it should be typed: all slips of the line mended. */
-function withMendedLine({ finding }: Edit, line: string, edits: readonly Edit[]): Finding {
-  const mended = spliced(line, edits.map((edit) => ({ start: edit.shownFrom ?? edit.start, end: edit.shownTo ?? edit.end, text: edit.shown }))).trim();
+/** The line as it should be typed: all its slips mended. */
+function mendedLine(line: string, edits: readonly Edit[]): string {
+  return spliced(line, edits.map((edit) => ({ start: edit.shownFrom ?? edit.start, end: edit.shownTo ?? edit.end, text: edit.shown }))).trim();
+}
+
+function withMendedLine({ finding }: Edit, mended: string): Finding {
   const further = finding.mend === '' ? '' : `, ${finding.mend}`;
-  return { ...finding, found: line.includes(finding.found) ? typedText(finding.found) : finding.found, mend: `write  ${mended}${further}` };
+  return { ...finding, found: finding.code === 'TAB' ? finding.found : typedText(finding.found), mend: `write  ${mended}${further}` };
 }
 
 function edited(line: string, edits: readonly Edit[]): string {

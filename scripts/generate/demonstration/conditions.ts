@@ -31,21 +31,16 @@ function person(name: string, initials: string, from: number, to: number, habits
 export interface Planned {
   readonly conditions: Omit<Setting, 'sample' | 'habits'>;
   readonly by: Initials;
-  /** Counter-ion of this measurement where it is not the record's own. */
-  readonly counter?: string;
-  /** A range noted as empty, as typed. */
-  readonly absent?: string;
 }
 
-export interface Extra extends Pick<Planned, 'counter' | 'absent'> {
+export interface Extra {
   /** Id of the measurement where a second one of the kind needs its own. */
   readonly id?: string;
 }
 
 function planned(id: string, by: Initials, rest: Partial<Planned['conditions']>, extra: Extra): Planned {
   const plain = { phase: 'solution', medium: null, host: null, temperature: 295, technique: 'absorption', scan: scans.usual } as const;
-  const { id: ownId = id, ...others } = extra;
-  return { conditions: { ...plain, ...rest, id: ownId }, by, ...others };
+  return { conditions: { ...plain, ...rest, id: extra.id ?? id }, by };
 }
 
 /** A solution at 295 K. */

@@ -33,7 +33,7 @@ function drafted(complex: PlannedComplex, planned: Planned, seed: number): Draft
   const { recipe } = complex;
   const person = people[planned.by];
   // A doped crystal has no salt of its own.
-  const sample = planned.conditions.host === null ? sampleOf(recipe, planned.counter ?? complex.counter, complex.water) : null;
+  const sample = planned.conditions.host === null ? sampleOf(recipe, complex.counter, complex.water) : null;
   const setting: Setting = { ...planned.conditions, sample, habits: person.habits };
   const random = randomFrom(seed, `notebook ${recipe.id} ${setting.id}`);
   const year = random.whole(person.from, person.to - 1);
@@ -41,7 +41,7 @@ function drafted(complex: PlannedComplex, planned: Planned, seed: number): Draft
   return {
     setting, bands: spectrumOf(recipe, truthOf(recipe, seed), setting, seed),
     provenance: { notebook, by: person.initials, date: `${year}-${twoDigits(random.whole(1, 12))}-${workday(random)}` },
-    absent: planned.absent ?? null, quoted: [],
+    quoted: [],
   };
 }
 

@@ -1,12 +1,12 @@
 import type { APIRoute, GetStaticPaths } from 'astro';
 import { loadCollection } from '../../data/database.ts';
-import { backgrounds, publishedFigures, standalone } from '../../data/figures.ts';
+import { keptFigure, picture, pictures, publishedFigures } from '../../data/figures.ts';
 
 export const getStaticPaths: GetStaticPaths = () => {
   const tree = loadCollection();
   return [
-    ...publishedFigures(tree).map(({ id, svg }) => ({ params: { id }, props: { text: standalone(svg, true) } })),
-    ...backgrounds(tree).map(({ id, svg }) => ({ params: { id }, props: { text: standalone(svg, false) } })),
+    ...publishedFigures(tree).map(({ id, svg }) => ({ params: { id }, props: { text: keptFigure(svg) } })),
+    ...pictures(tree).map(({ id, svg }) => ({ params: { id }, props: { text: picture(svg) } })),
   ];
 };
 

@@ -10,7 +10,7 @@ afterAll(() => place.remove());
 
 const commands = ['check', 'refit', 'build', 'dev', 'preview', 'predict', 'test', 'bench'];
 
-describe('every command', () => {
+describe('every command', { timeout: 60_000 }, () => {
   for (const name of commands) {
     it(`${name} --help says how it is called, on stdout, with code 0`, () => {
       const { code, stdout, stderr } = runScript(name, ['--help']);
@@ -27,7 +27,7 @@ describe('every command', () => {
   }
 });
 
-describe('refit', () => {
+describe('refit', { timeout: 60_000 }, () => {
   const database = join(place.path, 'a.sqlite');
 
   it('ends with a summary: records, each verdict, time, the next step', () => {
@@ -51,12 +51,12 @@ describe('refit', () => {
     const content = sampleContent({ 'complexes/co3-am6.yaml': sampleFile('complexes/co3-am6.yaml').replace('21050(60) cm-1', '21050') });
     const { code, stdout, stderr } = runScript('refit', ['--content', content, '--database', database], settings);
     expect([code, stdout]).toEqual([1, '']);
-    expect(stderr).toMatch(/co3-am6\.yaml:11:\d+ {2}measurements\[0\]\.bands\[0\]\.position/);
+    expect(stderr).toMatch(/co3-am6\.yaml:12:\d+ {2}measurements\[0\]\.bands\[0\]\.position/);
     expect(stderr).toContain('1 fault in 1 file');
     expect(readFileSync(database, 'utf8')).toBe('old');
     const json = runScript('refit', ['--json', '--content', content, '--database', database], settings);
     expect([json.code, json.stderr]).toEqual([1, '']);
-    expect(JSON.parse(json.stdout)).toMatchObject({ ok: false, faults: [{ file: 'complexes/co3-am6.yaml', line: 11 }] });
+    expect(JSON.parse(json.stdout)).toMatchObject({ ok: false, faults: [{ file: 'complexes/co3-am6.yaml', line: 12 }] });
   });
 
   it('that cannot write ends with code 3 and one plain line', () => {
@@ -82,13 +82,13 @@ describe('refit', () => {
   });
 });
 
-describe('refit --explain', () => {
+describe('refit --explain', { timeout: 60_000 }, () => {
   const content = sampleContent();
 
   it('tells what was read, how it was fitted, what it means and what to watch', () => {
     const { code, stdout } = runScript('refit', ['--content', content, '--explain', 'cr-am6/aq-295']);
     expect(code).toBe(0);
-    for (const text of ['[Cr(NH3)6]3+', 'Caution: perchlorate', 'typed 351.0(8) nm', 'a4A2g to 4T2g'.replace('a4A2g', '4A2g'), 'Delta', 'readings alone', 'Verdict: ', 'house-']) expect(stdout).toContain(text);
+    for (const text of ['[Cr(NH3)6]3+', 'Caution: perchlorate', 'typed 351.0(8) nm', '4A2g to 4T2g', 'Delta', 'readings alone', 'Verdict: ', 'house-']) expect(stdout).toContain(text);
     expect(stdout).not.toMatch(/NaN|undefined|null/);
   });
 
@@ -113,7 +113,7 @@ describe('refit --explain', () => {
   });
 });
 
-describe('predict', () => {
+describe('predict', { timeout: 60_000 }, () => {
   it('puts the spin-allowed bands first and says what it assumed', () => {
     const { code, stdout, stderr } = runScript('predict', ['Co(II)', '--Delta', '9200', '--B', '850']);
     expect([code, stderr]).toEqual([0, '']);
@@ -138,7 +138,7 @@ describe('predict', () => {
 
   it('takes C, C/B, energies with units, geometry and spin', () => {
     const facts = (words: readonly string[]) => JSON.parse(runScript('predict', [...words, '--json']).stdout) as { C: number; Delta: number; ground: string; lowest: string; assumed: string[] };
-    expect(facts(['Fe(II)', '--Delta', '33000', '--B', '420', '--C/B', '4.6', '--spin', 'low', '--geometry', 'octahedral'])).toMatchObject({ C: 1932, ground: 'a1A1g', assumed: [] });
+    expect(facts(['Fe(II)', '--Delta', '33000', '--B', '420', '--C/B', '4.6', '--spin', 'low', '--geometry', 'octahedral'])).toMatchObject({ C: expect.closeTo(1932, 9), ground: 'a1A1g', assumed: [] });
     expect(facts(['Fe(II)', '--Delta', '10000', '--B', '900', '--C', '4000', '--spin', 'low'])).toMatchObject({ C: 4000, ground: 'a1A1g', lowest: 'a5T2g' });
     expect(facts(['Cr(III)', '--Delta', '21.55 kK', '--B', '650'])).toMatchObject({ Delta: 21550 });
   });
@@ -163,7 +163,7 @@ describe('predict', () => {
   });
 });
 
-describe('preview', () => {
+describe('preview', { timeout: 60_000 }, () => {
   it('without a built site says what to do, with code 2', () => {
     const { code, stderr } = runScript('preview', ['--site', place.path]);
     expect(code).toBe(2);

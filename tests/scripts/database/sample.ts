@@ -19,7 +19,7 @@ export function band(position: number, changes: Partial<Band> = {}): Band {
 
 export function measurement(bands: readonly Band[], changes: Partial<Measurement> = {}): Measurement {
   return {
-    ion: ion('Cr(III)'), geometry: 'octahedral', geometryName: 'octahedral', multiplicity: 4, phase: 'solution', temperature: 295,
+    ion: ion('Cr(III)'), geometry: 'octahedral', geometryName: 'octahedral', multiplicity: 4, phase: 'solution', medium: null, temperature: 295,
     technique: 'absorption', bands, absent: [{ low: 28600, high: 33300 }], scanned: [{ low: 9091, high: 33333 }],
     innocenceDoubtful: false, nuclearity: 1, ...changes,
   };

@@ -1,0 +1,158 @@
+import { symmetricU } from '../measurement/observation.ts';
+import type { FreeIon } from '../ions/types.ts';
+import type { Band, Measurement } from '../measurement/types.ts';
+import type { Range } from '../quantity/range.ts';
+import { betaPenalty } from './betaPenalty.ts';
+import { quadratic } from './covariance.ts';
+import { transitionsAt } from './evaluate.ts';
+import type { Assigned, Fit } from './fit.ts';
+import { transitionOf, transitionsOf } from './transitions.ts';
+import type { GroundCase, Transition } from './transitions.ts';
+
+/** What speaks against a reading, on the scale of chi2. */
+export type EvidenceCode =
+  | 'misfit' | 'parameters' | 'left over' | 'gap' | 'unseen' | 'below' | 'line skipped' | 'beta' | 'absorptivity' | 'width' | 'forbidden and broad';
+
+export interface Evidence {
+  readonly code: EvidenceCode;
+  /** At least 0; a higher score is a worse reading. */
+  readonly penalty: number;
+  /** What it concerns: a transition's label in letter form, or "" */
+  readonly label: string;
+  /** A number that goes with it: a position in cm-1, a beta, an absorptivity; null where none does. */
+  readonly value: number | null;
+}
+
+/** Score of a reading: chi2 + 2 x free parameters + evidence. */
+export const scoreOf = (evidence: readonly Evidence[]): number => evidence.reduce((sum, one) => sum + one.penalty, 0);
+
+export const leftOverPenalty = 9;
+const gapPenalty = 9;
+const unseenPenalty = 4;
+/** The same for transitions that move two electrons: weak, and often under charge transfer. */
+const twoElectronGapPenalty = 3;
+const twoElectronUnseenPenalty = 1;
+/** A transition below the lowest assigned band, outside what was scanned: the spin-allowed order is read from below. */
+const skippedBelowPenalty = 2;
+const skippedLinePenalty = 2;
+const classPenalty = 4;
+const widthPenalty = 4;
+const forbiddenBroadPenalty = 4;
+
+/**
+ * Molar absorption coefficients by class of transition, L mol-1 cm-1 (common practice, no source):
+ * spin-forbidden below about 1, spin-allowed octahedral 1 to 100 and to 300 for chelates and low symmetry,
+ * tetrahedral 50 to 1000, charge transfer above 1000.
+ */
+const absorptivityClasses = [
+  { name: 'spin-forbidden', low: 0, high: 1 },
+  { name: 'octahedral', low: 1, high: 300 },
+  { name: 'tetrahedral', low: 50, high: 1000 },
+  { name: 'charge transfer', low: 1000, high: Number.POSITIVE_INFINITY },
+] as const;
+
+/** Charge transfer by its strength. */
+export const isStrong = (band: Band): boolean => band.epsilon !== null && band.epsilon > 1000;
+
+/** Narrower than this a band is a line; half-height widths of spin-flip lines are 100 to 500, of others 1500 to 4500 cm-1. */
+const narrow = 600;
+const broad = 1000;
+
+export const looksNarrow = (band: Band): boolean => band.kind === 'line' || band.kind === 'zero-phonon' || band.kind === 'dip' || (band.width !== null && band.width < narrow);
+
+export const looksWeak = (band: Band): boolean => band.epsilon !== null && band.epsilon < 1;
+
+function classOf(ion: GroundCase, transition: Transition): number {
+  if (!transition.spinAllowed) return 0;
+  return ion.geometry === 'tetrahedral' ? 2 : 1;
+}
+
+function absorptivityEvidence(ion: GroundCase, transition: Transition, band: Band): Evidence[] {
+  const { epsilon } = band;
+  if (epsilon === null) return [];
+  const expected = classOf(ion, transition);
+  // Without a centre of inversion spin-forbidden bands borrow ten times more.
+  const high = expected === 0 && ion.geometry === 'tetrahedral' ? 10 : absorptivityClasses[expected]!.high;
+  if (epsilon >= absorptivityClasses[expected]!.low && epsilon <= high) return [];
+  const off = epsilon > high ? absorptivityClasses.findIndex((one, i) => i > expected && epsilon <= one.high) - expected : 1;
+  return [{ code: 'absorptivity', penalty: classPenalty * Math.max(1, off) ** 2, label: transition.label, value: epsilon }];
+}
+
+function widthEvidence(transition: Transition, band: Band): Evidence[] {
+  if (looksNarrow(band) && !transition.sameConfiguration && band.kind !== 'zero-phonon' && band.kind !== 'dip')
+    return [{ code: 'width', penalty: widthPenalty, label: transition.label, value: band.width }];
+  if (transition.sameConfiguration && !transition.spinAllowed && band.width !== null && band.width > broad)
+    return [{ code: 'width', penalty: widthPenalty, label: transition.label, value: band.width }];
+  // A broad spin-forbidden band without a recorded strength is possible, not likely, where spin-allowed bands exist.
+  if (!transition.spinAllowed && !transition.sameConfiguration && band.epsilon === null && !looksNarrow(band))
+    return [{ code: 'forbidden and broad', penalty: forbiddenBroadPenalty, label: transition.label, value: null }];
+  return [];
+}
+
+/** What a band's strength and width say against its being a transition. */
+export function bandEvidence(ion: GroundCase, label: string, band: Band): Evidence[] {
+  const transition = transitionOf(ion, label);
+  const quartetsOnly = transitionsOf(ion).every((one) => !one.spinAllowed);
+  const width = widthEvidence(transition, band).filter((one) => !(quartetsOnly && one.code === 'forbidden and broad'));
+  return [...absorptivityEvidence(ion, transition, band), ...width];
+}
+
+/** Bands that are only compared with the fit count by how far they lie from where it puts them. */
+function misfitOfCompared(assigned: readonly Assigned[], fit: Fit): number {
+  return assigned.reduce((sum, { observation }, k) => {
+    if (fit.used[k]) return sum;
+    const { energy, gradient } = fit.calculated[k]!;
+    const spread = quadratic([gradient.delta, gradient.racahB, gradient.racahC], fit.total);
+    return sum + (observation.position - energy) ** 2 / (symmetricU(observation) ** 2 + fit.floors[k]! ** 2 + spread);
+  }, 0);
+}
+
+const parametersOf = { field: 1, 'field, B assumed': 1, 'field, B': 2, 'field, B by a line': 2, 'field, B, C': 3 } as const;
+
+const within = (ranges: readonly Range[], position: number): boolean => ranges.some((range) => position >= range.low && position <= range.high);
+
+/** Transitions that the fit predicts where a band should have been seen. */
+function unseenEvidence(measurement: Measurement, ion: GroundCase, assigned: readonly Assigned[], fit: Fit): Evidence[] {
+  const { at, ground } = fit.solutions[0]!;
+  const positions = assigned.map((one) => one.observation.position);
+  const lowest = Math.min(...positions);
+  const highest = Math.max(...positions);
+  const all = transitionsOf(ion);
+  const noneAllowed = all.every((t) => !t.spinAllowed);
+  const expected = (t: Transition): boolean => t.spinAllowed || (noneAllowed && t.multiplicity === ion.multiplicity - 2);
+  const open = all.filter((t) => (expected(t) || t.sameConfiguration) && !assigned.some((one) => one.label === t.label));
+  const lines = assigned.filter((one) => !transitionOf(ion, one.label).spinAllowed).map((one) => one.observation.position);
+  const looked = [...measurement.scanned, ...measurement.absent];
+  const labels = open.map((t) => t.label);
+  let twoElectronUnseen = false;
+  return transitionsAt(ion, ground, labels, at).flatMap(({ energy, gradient }, i): Evidence[] => {
+    const label = labels[i]!;
+    // A spin-flip line below an assigned one is seldom missed: the lowest is the strongest.
+    if (!expected(open[i]!)) return lines.some((position) => position > energy) ? [{ code: 'line skipped', penalty: skippedLinePenalty, label, value: energy }] : [];
+    // The derivative by Delta counts the electrons promoted to e (Hellmann-Feynman).
+    const twoElectrons = Math.abs(gradient.delta) > 1.5;
+    if (energy > lowest && energy <= highest) return [{ code: 'gap', penalty: twoElectrons ? twoElectronGapPenalty : gapPenalty, label, value: energy }];
+    // Low-spin ions have a host of two-electron transitions in the ultraviolet: together they count once.
+    if (!within(looked, energy)) return energy < lowest ? [{ code: 'below', penalty: skippedBelowPenalty, label, value: energy }] : [];
+    if (twoElectrons && twoElectronUnseen) return [];
+    twoElectronUnseen ||= twoElectrons;
+    return [{ code: 'unseen', penalty: twoElectrons ? twoElectronUnseenPenalty : unseenPenalty, label, value: energy }];
+  });
+}
+
+/** Everything that speaks against a fitted reading; entries without a penalty are left out. */
+export function gatherEvidence(
+  measurement: Measurement, ion: GroundCase, assigned: readonly Assigned[], leftOver: number, fit: Fit, freeIon: FreeIon | null,
+): readonly Evidence[] {
+  const { at, chi2 } = fit.solutions[0]!;
+  const beta = fit.assumedBeta ? 0 : betaPenalty(at.racahB, freeIon);
+  const all: Evidence[] = [
+    { code: 'misfit', penalty: chi2 + misfitOfCompared(assigned, fit), label: '', value: null },
+    { code: 'parameters', penalty: 2 * parametersOf[fit.mode], label: '', value: null },
+    { code: 'left over', penalty: leftOverPenalty * leftOver, label: '', value: leftOver },
+    { code: 'beta', penalty: beta, label: '', value: freeIon && beta > 0 ? at.racahB / freeIon.racahB0 : null },
+    ...assigned.flatMap((one) => one.observation.bands.flatMap((index) => bandEvidence(ion, one.label, measurement.bands[index]!))),
+    ...unseenEvidence(measurement, ion, assigned, fit),
+  ];
+  return all.filter((one) => one.penalty > 0);
+}

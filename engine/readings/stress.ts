@@ -1,0 +1,67 @@
+import type { FreeIon } from '../ions/types.ts';
+import type { FieldParameters } from '../levels/levels.ts';
+import type { Policy } from '../policy/types.ts';
+import { symmetricU } from '../measurement/observation.ts';
+import { quadratic } from './covariance.ts';
+import { transitionsAt } from './evaluate.ts';
+import { fitAssignment, isFit } from './fit.ts';
+import type { Assigned, Fit } from './fit.ts';
+import type { GroundCase } from './transitions.ts';
+import type { RatioUsed } from './types.ts';
+
+/** Delta and B from two bands alone; null where no solution exists. */
+export interface PairAlone {
+  readonly labels: readonly [string, string];
+  readonly at: FieldParameters | null;
+}
+
+/** What the other bands say when one is left out. */
+export interface LeftOut {
+  readonly label: string;
+  /** null where the others fix too little. */
+  readonly at: FieldParameters | null;
+  /** Where the others put the band that was left out. */
+  readonly predicted: number | null;
+  /** (observed - predicted) / combined u. */
+  readonly z: number | null;
+}
+
+export interface Stress {
+  readonly pairs: readonly PairAlone[];
+  readonly leftOut: readonly LeftOut[];
+}
+
+/** A table of more pairs than this says nothing a reader could take in. */
+const pairsAtMost = 15;
+
+/**
+ * Each pair of bands alone, and each band left out, with C/B as in the fit.
+ *
+ * Where C was fitted it is held at the fitted C/B, so that a pair is two equations for two unknowns.
+ */
+export function stressOf(ion: GroundCase, assigned: readonly Assigned[], fit: Fit, policy: Policy, freeIon: FreeIon | null): Stress {
+  const used = assigned.filter((_, k) => fit.used[k]);
+  if (used.length < 2 || fit.mode === 'field' || fit.mode === 'field, B assumed') return { pairs: [], leftOut: [] };
+  const held: RatioUsed = { ...fit.ratio, u: 0 };
+  const heldPolicy: Policy = { ...policy, ceilings: { ...policy.ceilings, racahC: 0 } };
+  const solve = (members: readonly Assigned[]): Fit | null => {
+    const outcome = fitAssignment(ion, members, heldPolicy, held, freeIon);
+    return isFit(outcome) && outcome.mode !== 'field' && outcome.mode !== 'field, B assumed' && members.every((_, k) => outcome.used[k]) ? outcome : null;
+  };
+  const pairs: PairAlone[] = [];
+  if (used.length > 2)
+    for (let i = 0; i < used.length; i++)
+      for (let j = i + 1; j < used.length && pairs.length < pairsAtMost; j++)
+        pairs.push({ labels: [used[i]!.label, used[j]!.label], at: solve([used[i]!, used[j]!])?.solutions[0]!.at ?? null });
+  const leftOut = used.length < 3 ? [] : used.map((band, k) => leaveOut(ion, band, used.filter((_, i) => i !== k), solve, fit.floors[assigned.indexOf(band)]!));
+  return { pairs, leftOut };
+}
+
+function leaveOut(ion: GroundCase, band: Assigned, others: readonly Assigned[], solve: (members: readonly Assigned[]) => Fit | null, floor: number): LeftOut {
+  const fit = solve(others);
+  if (!fit) return { label: band.label, at: null, predicted: null, z: null };
+  const { at, ground } = fit.solutions[0]!;
+  const { energy, gradient } = transitionsAt(ion, ground, [band.label], at)[0]!;
+  const variance = quadratic([gradient.delta, gradient.racahB, gradient.racahC], fit.total) + floor ** 2 + symmetricU(band.observation) ** 2;
+  return { label: band.label, at, predicted: energy, z: (band.observation.position - energy) / Math.sqrt(variance) };
+}

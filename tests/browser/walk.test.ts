@@ -1,0 +1,93 @@
+import { existsSync, readFileSync, readdirSync, statSync } from 'node:fs';
+import { join } from 'node:path';
+import { gzipSync } from 'node:zlib';
+import { parseHTML } from 'linkedom';
+import type { Browser } from 'playwright-core';
+import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { PAGE_KINDS, type ServedSite, builtPages, openBrowser, servedSite, watchedPage } from './site.ts';
+
+const CSP = "default-src 'none'; script-src 'self'; style-src 'self'; img-src 'self' data:; font-src 'self'; connect-src 'self'; base-uri 'none'; form-action 'none'";
+
+let browser: Browser;
+beforeAll(async () => { browser = await openBrowser(); });
+afterAll(async () => { await browser?.close(); });
+
+describe.each(['/', '/bands/'])('the site under %s', (base) => {
+  let site: ServedSite;
+  beforeAll(async () => { site = await servedSite(base); });
+  afterAll(async () => { await site?.close(); });
+
+  test('no link and no anchor leads nowhere', () => {
+    const pages = new Map(builtPages(site).map(({ path, html }) => [path, parseHTML(html).document]));
+    const dead: string[] = [];
+    let followed = 0;
+    for (const [path, document] of pages) {
+      for (const element of document.querySelectorAll('[href], [src], [data-index]')) {
+        const target = element.getAttribute('href') ?? element.getAttribute('src') ?? element.getAttribute('data-index')!;
+        if (/^(https?|mailto|data):/.test(target)) continue;
+        followed += 1;
+        const { pathname, hash } = new URL(target, `http://x${base}${path}`);
+        const within = pathname.startsWith(base) ? decodeURIComponent(pathname.slice(base.length)) : null;
+        const file = within === null ? null : join(site.folder, within, within === '' || within.endsWith('/') ? 'index.html' : '');
+        if (file === null || !existsSync(file)) dead.push(`${path} -> ${target}`);
+        else if (hash !== '' && pages.get(within!)?.getElementById(decodeURIComponent(hash.slice(1))) == null) dead.push(`${path} -> ${target} (anchor)`);
+      }
+    }
+    expect(dead).toEqual([]);
+    expect(followed).toBeGreaterThan(300);
+  });
+
+  test('every page opens without a console line, an error or a request to another host', async () => {
+    const { page, trouble } = await watchedPage(browser, site);
+    for (const { path } of builtPages(site)) {
+      await page.goto(site.address + path);
+      expect(trouble, path).toEqual([]);
+    }
+    await page.context().close();
+  });
+
+  test('the strict policy stands first after the character set, and nothing is written inline', () => {
+    for (const { path, html } of builtPages(site)) {
+      const { document } = parseHTML(html);
+      const [charset, policy] = [...document.querySelectorAll('head > *')];
+      expect(charset!.getAttribute('charset'), path).toBe('utf-8');
+      expect(policy!.getAttribute('content'), path).toBe(CSP);
+      expect([...document.querySelectorAll('script')].filter((script) => !script.getAttribute('src')).length, path).toBe(0);
+      expect(document.querySelectorAll('style, [style]').length, path).toBe(0);
+      expect(html, path).not.toMatch(/ on[a-z]+="/);
+    }
+  });
+
+  test('a page of each kind that the other checks look at exists', () => {
+    expect(builtPages(site).map(({ path }) => path)).toEqual(expect.arrayContaining([...PAGE_KINDS]));
+  });
+
+  test('pages stay light', () => {
+    for (const { path, html } of builtPages(site)) expect(gzipSync(html).length, path).toBeLessThan(60_000);
+    const scripts = readdirSync(join(site.folder, '_astro')).filter((name) => name.endsWith('.js')).map((name) => join(site.folder, '_astro', name));
+    expect(scripts.length).toBeGreaterThan(0);
+    expect(scripts.reduce((sum, file) => sum + gzipSync(readFileSync(file)).length, 0)).toBeLessThan(40_000);
+  });
+
+  test('every page has one heading of the first order, and every id once', () => {
+    for (const { path, html } of builtPages(site)) {
+      const { document } = parseHTML(html);
+      expect(document.querySelectorAll('h1').length, path).toBe(1);
+      const ids = [...document.querySelectorAll('[id]')].map((element) => element.id);
+      expect(ids.filter((id, index) => ids.indexOf(id) !== index), path).toEqual([]);
+    }
+  });
+
+  test('figures are files that stand by themselves', () => {
+    const folder = join(site.folder, 'figures');
+    const names = readdirSync(folder);
+    expect(names.filter((name) => name.endsWith('.svg')).length).toBeGreaterThan(10);
+    for (const name of names.filter((one) => one.endsWith('.svg'))) {
+      const text = readFileSync(join(folder, name), 'utf8');
+      expect(text, name).toMatch(/^<\?xml version="1\.0" encoding="UTF-8"\?>\n<svg xmlns="http:\/\/www\.w3\.org\/2000\/svg" /);
+      expect(text, name).toContain('--ink: #1b1a18');
+      expect(text, name).toMatch(/<title id="[^"]+">[^<]+<\/title>/);
+    }
+    for (const name of names.filter((one) => one.endsWith('.csv'))) expect(statSync(join(folder, name)).size, name).toBeGreaterThan(50);
+  });
+});
