@@ -20,16 +20,21 @@ export type { Estimate, FloorClass, Policy } from './policy/types.ts';
 export type { Band, BandKind, BandRole, Measurement } from './measurement/types.ts';
 export type { Range } from './quantity/range.ts';
 // Cautions and words
+export { complexCautions } from './cautions/ofComplex.ts';
+export { evidenceWords } from './words/ranking.ts';
+export type { ComplexFacts, MeasurementFacts } from './cautions/ofComplex.ts';
 export type { Caution } from './cautions/types.ts';
 export type { ParameterName, Standing, Verdict } from './words/types.ts';
 // Readings: what comes out
 export { readMeasurement, readWithRivals } from './readings/read.ts';
-export type { Branch, Parameter, PredictedBand, RatioUsed, Reading, ReadingBand, ReadMeasurement } from './readings/types.ts';
-export type { Evidence, EvidenceCode } from './readings/evidence.ts';
-export type { DoubletOrder, GroundState } from './readings/groundState.ts';
-export type { Identifiability } from './readings/identifiability.ts';
-export type { HelpfulBand } from './readings/measureNext.ts';
-export type { LeftOut, PairAlone, Stress } from './readings/stress.ts';
+export type {
+  Branch, DoubletOrder, Evidence, EvidenceCode, GroundState, HelpfulBand, Identifiability, LeftOut, PairAlone, Parameter, PredictedBand, RatioUsed,
+  Reading, ReadingBand, ReadMeasurement, Stress,
+} from './readings/types.ts';
+export { auditQuoted, disagreesFrom } from './readings/audit.ts';
+export { fewestSpare, floorFactor } from './readings/kappa.ts';
+export type { AuditRow, Quoted } from './readings/audit.ts';
+export type { FloorFactor, ResidualRow } from './readings/kappa.ts';
 // Series: what may be compared
 export { aquaLigand, publishedFactor, publishedIonOf, publishedLigandOf } from './series/publishedMatch.ts';
 export { byIon, ionSubject, ligandSubject, roomTemperature, selectComparable, temperatureReach, usualSeries, whyUnlike } from './series/comparable.ts';

@@ -18,7 +18,7 @@ export interface CommandTable {
   /** One or two sentences: what the command does. */
   readonly summary: string;
   /** Values without a name, in their order. */
-  readonly values?: readonly { readonly name: string; readonly help: string; readonly optional?: boolean }[];
+  readonly values?: readonly { readonly name: string; readonly help: string; readonly optional?: boolean; /** Of the last one: it may be given several times. */ readonly many?: boolean }[];
   readonly options: readonly OptionRow[];
   /** Example lines, without "npm run NAME --". */
   readonly examples?: readonly string[];
@@ -54,7 +54,7 @@ export function parseCommandLine(table: CommandTable, typed: readonly string[]):
   if (parsed.values['help'] === true) return { help: helpText(table) };
   const needed = wanted.filter((value) => value.optional !== true);
   if (parsed.positionals.length < needed.length) return { wrong: `${needed[parsed.positionals.length]!.name} is missing: ${needed[parsed.positionals.length]!.help}` };
-  if (parsed.positionals.length > wanted.length) {
+  if (parsed.positionals.length > wanted.length && wanted.at(-1)?.many !== true) {
     return { wrong: wanted.length === 0 ? `"${parsed.positionals[0]}" is not understood: options start with two dashes` : `"${parsed.positionals[wanted.length]}" is one value too many` };
   }
   const text = (name: string): string | null => {
@@ -99,7 +99,7 @@ export function helpText(table: CommandTable): string {
     ...[...table.options, helpRow].map((row) => [row.value === undefined ? `--${row.name}` : `--${row.name} ${row.value}`, row.help] as const),
   ];
   const width = Math.max(...rows.map(([left]) => left.length));
-  const usage = ['npm run', table.name, '--', ...values.map((value) => (value.optional === true ? `[${value.name}]` : value.name)), '[options]'].join(' ');
+  const usage = ['npm run', table.name, '--', ...values.flatMap((value) => [value.optional === true ? `[${value.name}]` : value.name, ...(value.many === true ? [`[${value.name} ...]`] : [])]), '[options]'].join(' ');
   const examples = (table.examples ?? []).map((example) => `  npm run ${table.name} -- ${example}`);
   return [
     table.summary, '', `  ${usage}`, '',

@@ -14,6 +14,7 @@ export const defaultPolicy: Policy = {
   ceilings: { delta: 0.1, racahB: 0.15, racahC: 0.15 },
   differentialFloor: { delta: 50, racahB: 0.015 },
   freeIons: 'published',
+  cFitted: true,
   rivalMargin: 4,
   defaultUncertainties: { maximum: 80, line: 15 },
 };

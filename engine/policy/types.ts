@@ -14,6 +14,8 @@ export interface Policy {
   readonly name: string;
   /** C/B used where C is not fitted; `perIon` is keyed by ion name and wins over `general`. */
   readonly cOverB: { readonly general: Estimate; readonly perIon: Readonly<Record<string, Estimate>> };
+  /** Whether C is fitted where spin-flip bands determine it; false: C/B is assumed always. */
+  readonly cFitted: boolean;
   /** Model floor tau by class of transition, one standard uncertainty. */
   readonly floors: Readonly<Record<FloorClass, number>>;
   /** A parameter is published only where u(total)/value stays under its ceiling. */

@@ -8,20 +8,7 @@ import { transitionsAt } from './evaluate.ts';
 import type { Assigned, Fit } from './fit.ts';
 import { transitionOf, transitionsOf } from './transitions.ts';
 import type { GroundCase, Transition } from './transitions.ts';
-
-/** What speaks against a reading, on the scale of chi2. */
-export type EvidenceCode =
-  | 'misfit' | 'parameters' | 'left over' | 'gap' | 'unseen' | 'below' | 'line skipped' | 'beta' | 'absorptivity' | 'width' | 'forbidden and broad';
-
-export interface Evidence {
-  readonly code: EvidenceCode;
-  /** At least 0; a higher score is a worse reading. */
-  readonly penalty: number;
-  /** What it concerns: a transition's label in letter form, or "" */
-  readonly label: string;
-  /** A number that goes with it: a position in cm-1, a beta, an absorptivity; null where none does. */
-  readonly value: number | null;
-}
+import type { Evidence } from './types.ts';
 
 /** Score of a reading: chi2 + 2 x free parameters + evidence. */
 export const scoreOf = (evidence: readonly Evidence[]): number => evidence.reduce((sum, one) => sum + one.penalty, 0);

@@ -308,7 +308,7 @@ export function fitAssignment(ion: GroundCase, assigned: readonly Assigned[], po
   const all = assigned.map((_, k) => k);
   const allowed = all.filter((k) => transitionOf(ion, assigned[k]!.label).spinAllowed);
   const felt = feels(ion, ground, labelsOf(task, all), ratio.value);
-  if (allowed.length < all.length) {
+  if (policy.cFitted && allowed.length < all.length) {
     const three = fitAllThree(task, all);
     if (three === 'no solution' && all.every((k) => felt[k]!.racahB && !felt[k]!.delta))
       return { status: 'not determinable', reason: 'none of the assigned bands moves with Delta: they fix B and C at best in one combination' };

@@ -7,22 +7,7 @@ import { levelPlace } from './table.ts';
 import type { GroundCase } from './transitions.ts';
 import { solveBlock } from '../levels/solve.ts';
 import { fieldSign } from '../levels/levels.ts';
-
-/** What the fit says of the ground level. */
-export interface GroundState {
-  /** Delta/B at which the ground spin changes at this C/B; null where it never does. */
-  readonly crossing: number | null;
-  /** Field stabilisation of the ground level in units of Delta, negative; and in cm-1. */
-  readonly stabilisationInDelta: number;
-  readonly stabilisation: number;
-}
-
-/** E(4T2g) - E(2Eg) of octahedral d3, with its uncertainty; `decidable` only where C was fitted. */
-export interface DoubletOrder {
-  readonly gap: number;
-  readonly u: number;
-  readonly decidable: boolean;
-}
+import type { DoubletOrder, GroundState } from './types.ts';
 
 export function groundStateOf(ion: GroundCase, fit: Fit): GroundState {
   const { at, ground } = fit.solutions[0]!;

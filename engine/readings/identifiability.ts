@@ -2,19 +2,9 @@ import { symmetricU } from '../measurement/observation.ts';
 import { singularValues } from './covariance.ts';
 import type { Row } from './covariance.ts';
 import type { Assigned, Fit } from './fit.ts';
-import type { Parameter } from './types.ts';
+import type { Identifiability, Parameter } from './types.ts';
 import type { ParameterName } from '../words/types.ts';
 import { combinationSentence } from '../words/combination.ts';
-
-/** What the bands of a fit can tell of Delta, B and C. */
-export interface Identifiability {
-  /** Singular values of the weighted Jacobian, columns scaled by the parameters, descending. */
-  readonly singularValues: readonly number[];
-  /** How many parameters the bands fix, by the singular values. */
-  readonly rank: number;
-  /** The combination that is fixed where the single numbers are not, in words; null where it adds nothing. */
-  readonly combination: string | null;
-}
 
 const rankTolerance = 1e-7;
 

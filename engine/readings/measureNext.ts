@@ -9,18 +9,7 @@ import { transitionsAt } from './evaluate.ts';
 import type { Assigned, Fit } from './fit.ts';
 import { floorOf, transitionOf } from './transitions.ts';
 import type { GroundCase } from './transitions.ts';
-import type { Parameter, PredictedBand } from './types.ts';
-
-/** A band worth looking for, with what it would do. */
-export interface HelpfulBand {
-  /** Letter form. */
-  readonly label: string;
-  /** Expected range, two standard uncertainties either way, cm-1. */
-  readonly low: number;
-  readonly high: number;
-  readonly gains: readonly Gain[];
-  readonly sentence: string;
-}
+import type { HelpfulBand, Parameter, PredictedBand } from './types.ts';
 
 /** How well a further broad band, and a further line, would be read, cm-1. */
 const readBroad = 80;

@@ -11,7 +11,6 @@ import type { Verdict } from '../words/types.ts';
 import { verdictSentence } from '../words/verdict.ts';
 import { declaredCase } from './cases.ts';
 import { upperTail } from './chiSquare.ts';
-import type { Evidence } from './evidence.ts';
 import { spectralFacts } from './facts.ts';
 import { deltaOverB, isFit } from './fit.ts';
 import type { Fit } from './fit.ts';
@@ -27,7 +26,7 @@ import { contest } from './rivals.ts';
 import type { ScoredReading } from './search.ts';
 import { stressOf } from './stress.ts';
 import type { GroundCase } from './transitions.ts';
-import type { Branch, Parameter, Reading, ReadingBand, ReadMeasurement } from './types.ts';
+import type { Branch, Evidence, Parameter, Reading, ReadingBand, ReadMeasurement } from './types.ts';
 
 /** Spare bands that disagree with a probability below this make a reading strained. */
 const strainedBelow = 0.01;

@@ -5,12 +5,11 @@ import { boundFor } from './bound.ts';
 import { gatherItems } from './candidates.ts';
 import type { Freedom, Item, NotFitted } from './candidates.ts';
 import { bandEvidence, gatherEvidence, leftOverPenalty, scoreOf } from './evidence.ts';
-import type { Evidence } from './evidence.ts';
 import { fitAssignment, isFit } from './fit.ts';
 import type { Assigned, FitOutcome } from './fit.ts';
 import { floorOf, transitionOf } from './transitions.ts';
 import type { GroundCase } from './transitions.ts';
-import type { RatioUsed } from './types.ts';
+import type { Evidence, RatioUsed } from './types.ts';
 
 /** One way to assign the bands, with what the fit made of it. */
 export interface ScoredReading {

@@ -1,5 +1,4 @@
 import type { FreeIon } from '../ions/types.ts';
-import type { FieldParameters } from '../levels/levels.ts';
 import type { Policy } from '../policy/types.ts';
 import { symmetricU } from '../measurement/observation.ts';
 import { quadratic } from './covariance.ts';
@@ -7,29 +6,7 @@ import { transitionsAt } from './evaluate.ts';
 import { fitAssignment, isFit } from './fit.ts';
 import type { Assigned, Fit } from './fit.ts';
 import type { GroundCase } from './transitions.ts';
-import type { RatioUsed } from './types.ts';
-
-/** Delta and B from two bands alone; null where no solution exists. */
-export interface PairAlone {
-  readonly labels: readonly [string, string];
-  readonly at: FieldParameters | null;
-}
-
-/** What the other bands say when one is left out. */
-export interface LeftOut {
-  readonly label: string;
-  /** null where the others fix too little. */
-  readonly at: FieldParameters | null;
-  /** Where the others put the band that was left out. */
-  readonly predicted: number | null;
-  /** (observed - predicted) / combined u. */
-  readonly z: number | null;
-}
-
-export interface Stress {
-  readonly pairs: readonly PairAlone[];
-  readonly leftOut: readonly LeftOut[];
-}
+import type { LeftOut, PairAlone, RatioUsed, Stress } from './types.ts';
 
 /** A table of more pairs than this says nothing a reader could take in. */
 const pairsAtMost = 15;

@@ -1,10 +1,7 @@
 import type { Caution } from '../cautions/types.ts';
 import type { Geometry } from '../ions/types.ts';
-import type { Evidence } from './evidence.ts';
-import type { DoubletOrder, GroundState } from './groundState.ts';
-import type { Identifiability } from './identifiability.ts';
-import type { HelpfulBand } from './measureNext.ts';
-import type { Stress } from './stress.ts';
+import type { FieldParameters } from '../levels/levels.ts';
+import type { Gain } from '../words/measureNext.ts';
 import type { ParameterName, Standing, Verdict } from '../words/types.ts';
 
 /** A derived number. Where `standing` is "withheld" value and both u are null and `reason` says why. */
@@ -69,6 +66,79 @@ export interface RatioUsed {
   readonly value: number;
   readonly u: number;
   readonly origin: 'policy' | 'policy for this ion' | 'fitted';
+}
+
+/** What speaks against a reading, on the scale of chi2. */
+export type EvidenceCode =
+  | 'misfit' | 'parameters' | 'left over' | 'gap' | 'unseen' | 'below' | 'line skipped' | 'beta' | 'absorptivity' | 'width' | 'forbidden and broad';
+
+export interface Evidence {
+  readonly code: EvidenceCode;
+  /** At least 0; a higher score is a worse reading. */
+  readonly penalty: number;
+  /** What it concerns: a transition's label in letter form, or "" */
+  readonly label: string;
+  /** A number that goes with it: a position in cm-1, a beta, an absorptivity; null where none does. */
+  readonly value: number | null;
+}
+
+/** Delta and B from two bands alone; null where no solution exists. */
+export interface PairAlone {
+  readonly labels: readonly [string, string];
+  readonly at: FieldParameters | null;
+}
+
+/** What the other bands say when one is left out. */
+export interface LeftOut {
+  readonly label: string;
+  /** null where the others fix too little. */
+  readonly at: FieldParameters | null;
+  /** Where the others put the band that was left out. */
+  readonly predicted: number | null;
+  /** (observed - predicted) / combined u. */
+  readonly z: number | null;
+}
+
+export interface Stress {
+  readonly pairs: readonly PairAlone[];
+  readonly leftOut: readonly LeftOut[];
+}
+
+/** What the bands of a fit can tell of Delta, B and C. */
+export interface Identifiability {
+  /** Singular values of the weighted Jacobian, columns scaled by the parameters, descending. */
+  readonly singularValues: readonly number[];
+  /** How many parameters the bands fix, by the singular values. */
+  readonly rank: number;
+  /** The combination that is fixed where the single numbers are not, in words; null where it adds nothing. */
+  readonly combination: string | null;
+}
+
+/** What the fit says of the ground level. */
+export interface GroundState {
+  /** Delta/B at which the ground spin changes at this C/B; null where it never does. */
+  readonly crossing: number | null;
+  /** Field stabilisation of the ground level in units of Delta, negative; and in cm-1. */
+  readonly stabilisationInDelta: number;
+  readonly stabilisation: number;
+}
+
+/** E(4T2g) - E(2Eg) of octahedral d3, with its uncertainty; `decidable` only where C was fitted. */
+export interface DoubletOrder {
+  readonly gap: number;
+  readonly u: number;
+  readonly decidable: boolean;
+}
+
+/** A band worth looking for, with what it would do. */
+export interface HelpfulBand {
+  /** Letter form. */
+  readonly label: string;
+  /** Expected range, two standard uncertainties either way, cm-1. */
+  readonly low: number;
+  readonly high: number;
+  readonly gains: readonly Gain[];
+  readonly sentence: string;
 }
 
 /** One assignment of a measurement's bands with its fit, verdict and everything that may be said of it. */

@@ -33,6 +33,7 @@ CREATE TABLE policy (
   C_over_B              REAL NOT NULL,
   C_over_B_u            REAL NOT NULL,
   C_over_B_per_ion      TEXT NOT NULL CHECK (json_valid(C_over_B_per_ion)),   -- {"Cr(III)": {"value": 4.5, "u": 0.5}}
+  C_fitted              INTEGER NOT NULL CHECK (C_fitted IN (0, 1)),   -- 1: C is fitted where spin-flip bands determine it
   floor_general         REAL NOT NULL,
   floor_spin_flip       REAL NOT NULL,
   floor_two_electron    REAL NOT NULL,
@@ -241,6 +242,14 @@ CREATE TABLE reading (
   free_ion_set    TEXT NOT NULL,
   policy          TEXT NOT NULL REFERENCES policy (id),
   measure_next    TEXT,                              -- what would help most, in words
+  score           REAL,                              -- chi2 + 2 x free parameters + evidence; lower is better
+  ranking         TEXT,                              -- of a rival: why it ranks where it does
+  combination     TEXT,                              -- the combination that is fixed where single numbers are not
+  rank            INTEGER,                           -- how many parameters the bands fix
+  singular_values TEXT CHECK (json_valid(singular_values)),   -- of the weighted Jacobian, descending
+  spin_crossing   REAL,                              -- Delta/B at which the ground spin changes
+  remarks         TEXT NOT NULL CHECK (json_valid(remarks)),  -- sentences on ground level and order of levels
+  sentence        TEXT NOT NULL,                     -- one sentence for a thesis
   PRIMARY KEY (complex, measurement, number),
   FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
 ) STRICT, WITHOUT ROWID;
@@ -261,6 +270,7 @@ CREATE TABLE reading_band (
   used            INTEGER NOT NULL CHECK (used IN (0, 1)),   -- 0: only compared with a prediction
   calculated      REAL,
   residual        REAL,                              -- observed - calculated
+  leverage        REAL,                              -- how much of the fit hangs on it, 0 to 1
   gradient_Delta  REAL,                              -- d(transition energy)/d(parameter) at the fit
   gradient_B      REAL,
   gradient_C      REAL,
@@ -316,6 +326,8 @@ CREATE TABLE parameter (
   value       REAL,
   u           REAL,                                  -- from the readings alone
   u_total     REAL,                                  -- with the model floor and an assumed C/B
+  low         REAL,                                  -- limits of one standard uncertainty from the chi2 profile,
+  high        REAL,                                  --   where the curve is not parabolic
   standing    TEXT NOT NULL CHECK (standing IN ('measured', 'fitted', 'assumed', 'predicted', 'quoted', 'withheld')),
   reason      TEXT,
   PRIMARY KEY (complex, measurement, reading, name),
@@ -351,6 +363,102 @@ CREATE TABLE predicted_band (
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
 ) STRICT, WITHOUT ROWID;
 
+-- What speaks against a reading, on the scale of chi2. The sum is its score.
+CREATE TABLE evidence (
+  complex     TEXT NOT NULL,
+  measurement TEXT NOT NULL,
+  reading     INTEGER NOT NULL,
+  number      INTEGER NOT NULL,
+  code        TEXT NOT NULL,
+  label       TEXT,                                  -- the transition it concerns, letter form
+  penalty     REAL NOT NULL,
+  text        TEXT NOT NULL,
+  PRIMARY KEY (complex, measurement, reading, number),
+  FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
+) STRICT, WITHOUT ROWID;
+
+-- Bands worth looking for, most helpful first, one row for each number they would help.
+CREATE TABLE helpful_band (
+  complex     TEXT NOT NULL,
+  measurement TEXT NOT NULL,
+  reading     INTEGER NOT NULL,
+  number      INTEGER NOT NULL,
+  parameter   TEXT NOT NULL CHECK (parameter IN ('Delta', 'B', 'C')),
+  label       TEXT NOT NULL,
+  low         REAL NOT NULL,                         -- expected range, two standard uncertainties either way
+  high        REAL NOT NULL,
+  u_now       REAL,                                  -- NULL: not fixed at all
+  u_then      REAL NOT NULL,
+  sentence    TEXT NOT NULL,
+  PRIMARY KEY (complex, measurement, reading, number, parameter),
+  FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
+) STRICT, WITHOUT ROWID;
+
+-- Each pair of bands alone: Delta and B, or NULL where the pair has no solution.
+CREATE TABLE stress_pair (
+  complex     TEXT NOT NULL,
+  measurement TEXT NOT NULL,
+  reading     INTEGER NOT NULL,
+  first       TEXT NOT NULL,
+  second      TEXT NOT NULL,
+  Delta       REAL,
+  B           REAL,
+  PRIMARY KEY (complex, measurement, reading, first, second),
+  FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
+) STRICT, WITHOUT ROWID;
+
+-- Each band left out: what the others give, and where they put it.
+CREATE TABLE stress_left_out (
+  complex     TEXT NOT NULL,
+  measurement TEXT NOT NULL,
+  reading     INTEGER NOT NULL,
+  number      INTEGER NOT NULL,                      -- of the reading_band
+  label       TEXT NOT NULL,
+  Delta       REAL,
+  B           REAL,
+  C           REAL,
+  predicted   REAL,
+  z           REAL,                                  -- (observed - predicted) / combined u
+  PRIMARY KEY (complex, measurement, reading, number),
+  FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
+) STRICT, WITHOUT ROWID;
+
+-- Quoted numbers against the refitted ones.
+CREATE TABLE audit (
+  complex     TEXT NOT NULL,
+  measurement TEXT NOT NULL,
+  number      INTEGER NOT NULL,                      -- place of the quoted entry in the record
+  parameter   TEXT NOT NULL CHECK (parameter IN ('Delta', 'B', 'C', 'beta')),
+  quoted      REAL NOT NULL,
+  refitted    REAL,                                  -- NULL where withheld
+  u_total     REAL,
+  difference  REAL,                                  -- quoted - refitted
+  z           REAL,
+  cause       TEXT,                                  -- a likely cause found by trying
+  PRIMARY KEY (complex, measurement, number, parameter),
+  FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
+) STRICT, WITHOUT ROWID;
+
+-- The factor on an ion's model floors that its own records suggest. Shown beside the policy, never applied.
+CREATE TABLE floor_factor (
+  ion         TEXT NOT NULL REFERENCES ion (name),
+  geometry    TEXT NOT NULL CHECK (geometry IN ('octahedral', 'tetrahedral')),
+  kappa       REAL NOT NULL,
+  u           REAL NOT NULL,
+  spare_bands INTEGER NOT NULL,
+  PRIMARY KEY (ion, geometry)
+) STRICT, WITHOUT ROWID;
+
+-- What needs a person, most pressing first: the review page and command print this list.
+CREATE TABLE review (
+  number      INTEGER NOT NULL PRIMARY KEY,
+  kind        TEXT NOT NULL CHECK (kind IN ('refused', 'strained', 'better rival', 'near rival', 'quoted value', 'repeats disagree')),
+  complex     TEXT NOT NULL,
+  measurement TEXT NOT NULL,
+  text        TEXT NOT NULL,
+  FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
+) STRICT, WITHOUT ROWID;
+
 -- Coded warnings. A hazard belongs to the complex, a spectral caution to a reading.
 CREATE TABLE caution (
   complex      TEXT NOT NULL REFERENCES complex (id),
@@ -377,30 +485,92 @@ CREATE TABLE hazard_override (
   PRIMARY KEY (complex, code)
 ) STRICT, WITHOUT ROWID;
 
--- Factors of ions and ligands fitted to the whole collection. Empty where they were not computed.
+-- Fits of factors to the whole collection: Delta = g * average of f, beta = 1 - k * average of h, averages over donor atoms.
+-- Octahedral and tetrahedral complexes apart. A geometry without complexes has no row.
+CREATE TABLE factor_fit (
+  parameter        TEXT NOT NULL CHECK (parameter IN ('Delta', 'beta')),
+  geometry         TEXT NOT NULL CHECK (geometry IN ('octahedral', 'tetrahedral')),
+  complexes        INTEGER NOT NULL,
+  scatter          REAL NOT NULL,                    -- residual scatter s: of ln Delta, or of beta
+  scatter_standing TEXT NOT NULL CHECK (scatter_standing IN ('fitted', 'assumed')),
+  spare_complexes  INTEGER NOT NULL,                 -- beyond what the unknowns need, over all islands
+  PRIMARY KEY (parameter, geometry)
+) STRICT, WITHOUT ROWID;
+
+-- Parts of the collection in which complexes link ions and ligands. Nothing links one island to another.
+CREATE TABLE factor_island (
+  parameter       TEXT NOT NULL,
+  geometry        TEXT NOT NULL,
+  number          INTEGER NOT NULL,
+  gauge           TEXT NOT NULL REFERENCES ligand (id),   -- the ligand whose factor is set to 1
+  gauge_is_aqua   INTEGER NOT NULL CHECK (gauge_is_aqua IN (0, 1)),
+  complexes       INTEGER NOT NULL,
+  rank            INTEGER NOT NULL,                  -- independent combinations that the complexes fix
+  spare_complexes INTEGER NOT NULL,
+  PRIMARY KEY (parameter, geometry, number),
+  FOREIGN KEY (parameter, geometry) REFERENCES factor_fit (parameter, geometry)
+) STRICT, WITHOUT ROWID;
+
+-- Factors of ions (g in cm-1, k) and ligands (f, h). A factor that the complexes do not fix has no value and says so.
 CREATE TABLE factor (
   parameter TEXT NOT NULL CHECK (parameter IN ('Delta', 'beta')),
+  geometry  TEXT NOT NULL,
   kind      TEXT NOT NULL CHECK (kind IN ('ion', 'ligand')),
   name      TEXT NOT NULL,                           -- ligand id, or ion, geometry and spin: "Cr(III) octahedral quartet"
   value     REAL,
-  u         REAL,
+  u         REAL,                                    -- 0 for the ligand that is set to 1
   complexes INTEGER NOT NULL,                        -- how many complexes stand behind it
   island    INTEGER NOT NULL,                        -- factors of different islands cannot be compared
+  gauge     INTEGER NOT NULL CHECK (gauge IN (0, 1)),
+  tested    INTEGER NOT NULL CHECK (tested IN (0, 1)),    -- 0: every complex behind it is needed to find it
   reason    TEXT,                                    -- why there is no value, or no test
-  PRIMARY KEY (parameter, kind, name)
+  PRIMARY KEY (parameter, geometry, kind, name),
+  FOREIGN KEY (parameter, geometry, island) REFERENCES factor_island (parameter, geometry, number),
+  CHECK ((value IS NULL) = (u IS NULL)),
+  CHECK (value IS NOT NULL OR reason IS NOT NULL)
 ) STRICT, WITHOUT ROWID;
 
--- Where a measurement stands against predictions from the rest of the collection. Empty where not computed.
+-- The measurement that stands for each complex in a factor fit, and what the fit makes of it.
+CREATE TABLE factor_complex (
+  parameter   TEXT NOT NULL,
+  complex     TEXT NOT NULL,
+  measurement TEXT NOT NULL,
+  geometry    TEXT NOT NULL,
+  island      INTEGER NOT NULL,
+  fitted      REAL NOT NULL,
+  residual    REAL NOT NULL,                         -- ln(found/fitted) of Delta, found - fitted of beta
+  leverage    REAL NOT NULL CHECK (leverage BETWEEN 0 AND 1),   -- 1: it alone decides its fitted value
+  PRIMARY KEY (parameter, complex),
+  FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id),
+  FOREIGN KEY (parameter, geometry, island) REFERENCES factor_island (parameter, geometry, number)
+) STRICT, WITHOUT ROWID;
+
+-- Measurements of a fitted geometry that stand in no factor fit, and why.
+CREATE TABLE factor_left_out (
+  parameter   TEXT NOT NULL,
+  complex     TEXT NOT NULL,
+  measurement TEXT NOT NULL,
+  reason      TEXT NOT NULL,
+  PRIMARY KEY (parameter, complex, measurement),
+  FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
+) STRICT, WITHOUT ROWID;
+
+-- Where a measurement stands against predictions from the rest of the collection, its complex's own data taken out.
+-- A method that predicts nothing says why.
 CREATE TABLE placement (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
   parameter   TEXT NOT NULL CHECK (parameter IN ('Delta', 'B', 'beta')),
-  method      TEXT NOT NULL,                         -- "average environment", "factors"
-  predicted   REAL NOT NULL,
-  u           REAL NOT NULL,
-  z           REAL,                                  -- (found - predicted) / combined u
+  method      TEXT NOT NULL CHECK (method IN ('average environment', 'factors')),
+  predicted   REAL,
+  u           REAL,
+  z           REAL,                                  -- (found - predicted) / combined u, as a normal deviate; of Delta in its logarithm
+  reason      TEXT,                                  -- why nothing is predicted
   PRIMARY KEY (complex, measurement, parameter, method),
-  FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
+  FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id),
+  CHECK ((predicted IS NULL) = (u IS NULL)),
+  CHECK ((predicted IS NULL) = (reason IS NOT NULL)),
+  CHECK (predicted IS NOT NULL OR z IS NULL)
 ) STRICT, WITHOUT ROWID;
 
 -- Releases of the collection.

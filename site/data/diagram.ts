@@ -32,14 +32,19 @@ export const ionDiagrams = oncePerCollection((tree): readonly IonDiagram[] => {
   });
 });
 
+/** Letters beside more marks than this could not be told apart; the table then stands alone for them. */
+const MOST_KEYS = 45;
+
 function ionDiagram(tree: CollectionTree, ion: string, electrons: number, geometry: Geometry, measurements: readonly MeasurementNode[]): IonDiagram {
   const placed = measurements.map((measurement) => ({ measurement, place: placeOf(measurement) }))
     .filter((one): one is { measurement: MeasurementNode; place: Omit<DiagramMark, 'key'> } => one.place !== null)
     .sort((a, b) => a.place.x - b.place.x);
   const furthest = Math.max(0, ...placed.map(({ place }) => place.x));
   const reach = Math.min(80, Math.max(geometry === 'octahedral' ? 40 : 20, 5 * Math.ceil((1.1 * furthest) / 5)));
-  const marked = placed.filter(({ place }) => place.x <= reach).map(({ measurement, place }, index) => {
-    const key = letterKey(index);
+  const inReach = placed.filter(({ place }) => place.x <= reach);
+  const keyed = inReach.length <= MOST_KEYS;
+  const marked = inReach.map(({ measurement, place }, index) => {
+    const key = keyed ? letterKey(index) : '';
     return { key, measurement, mark: { ...place, key } };
   });
   return {
@@ -90,7 +95,7 @@ function diagramFigure(one: IonDiagram): PublishedFigure {
         : 'No complex of the collection has both Δ and B here.',
       ...(marked.some(({ measurement }) => measurement.chosen.parameters.C.standing === 'fitted') ? ['Where C is fitted, spin-flip bands lie off these curves by as much as that C/B differs.'] : []),
     ],
-    keys: marked.map(({ key, measurement: { complex, row } }) => ({ key, formula: complex.formula.parts, path: `${complexPath(complex.row.id)}#${row.id}`, measurement: row.id })),
+    keys: marked.filter(({ key }) => key !== '').map(({ key, measurement: { complex, row } }) => ({ key, formula: complex.formula.parts, path: `${complexPath(complex.row.id)}#${row.id}`, measurement: row.id })),
     source: 'Levels computed from the full configuration; bands from this collection, conditions as listed in its table.',
     table: markTable(one), files: figureFiles(id), csv: diagramCsv(one),
   };
@@ -131,11 +136,12 @@ function describe({ diagram, ceiling }: IonDiagram): string {
 }
 
 function markTable({ marked, electrons }: IonDiagram): Table {
+  const keyed = marked.some(({ key }) => key !== '');
   return {
     caption: 'Readings on the diagram',
-    columns: [column('Key'), rowColumn('Complex'), column('Measurement'), quantity('Δ/B', null), column('Transition'), quantity('ν̃', 'cm-1'), quantity('E/B', null), quantity('residual', 'cm-1', true)],
+    columns: [...(keyed ? [column('Key')] : []), rowColumn('Complex'), column('Measurement'), quantity('Δ/B', null), column('Transition'), quantity('ν̃', 'cm-1'), quantity('E/B', null), quantity('residual', 'cm-1', true)],
     rows: marked.flatMap(({ key, measurement, mark }) => measurement.chosen.transitions.map(({ row }, index): readonly Cell[] => [
-      key, { parts: measurement.complex.formula.parts, path: complexPath(measurement.complex.row.id) },
+      ...(keyed ? [key] : []), { parts: measurement.complex.formula.parts, path: complexPath(measurement.complex.row.id) },
       measurement.row.id, figures(mark.x, 4), { parts: termShown(row.label, electrons) }, energy(row.observed, null), figures(mark.bands[index]!.y, 4),
       row.residual === null ? { parts: words('none'), soft: true } : difference(row.residual),
     ])),

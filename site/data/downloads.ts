@@ -1,5 +1,5 @@
 import { resultColumns } from '../../scripts/export/columns.ts';
-import { type Table, column, rowColumn } from './table.ts';
+import { type Table, column, longColumn, rowColumn } from './table.ts';
 import type { CollectionTree } from './tree.ts';
 
 export interface DataPage {
@@ -23,7 +23,7 @@ export function dataPage(tree: CollectionTree): DataPage {
     ],
     dictionary: {
       caption: 'Columns of the results',
-      columns: [rowColumn('Column'), column('Unit (UCUM)'), column('Meaning')],
+      columns: [rowColumn('Column'), column('Unit (UCUM)'), longColumn('Meaning')],
       rows: resultColumns.map(({ name, unit, meaning }) => [name, unit ?? 'text', meaning]),
     },
     citation: `${meta('name') ?? 'The group'}, ${meta('title') ?? 'Ligand-field parameters'}, release ${meta('release') ?? 'not recorded'}, ${meta('url') ?? 'address not recorded'}. DOI: ${meta('doi') ?? 'not yet assigned'}.`,

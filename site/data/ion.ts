@@ -6,7 +6,7 @@ import type { PublishedFigure } from './figure.ts';
 import { ionPath } from './paths.ts';
 import { counted, energy, ratio } from './show.ts';
 import { type SeriesShown, ionSeries } from './seriesFigures.ts';
-import { type Cell, type Table, column, quantity, rowColumn, soft } from './table.ts';
+import { type Cell, type Table, column, longColumn, quantity, rowColumn, soft } from './table.ts';
 import type { CollectionTree } from './tree.ts';
 import { type Parts, configuration } from './typeset.ts';
 import { groupBy } from './group.ts';
@@ -40,7 +40,7 @@ function freeIonTable(tree: CollectionTree, name: string): Table | null {
   if (rows.length === 0) return null;
   return {
     caption: 'The free ion',
-    columns: [rowColumn('Set'), quantity('B₀', 'cm-1'), quantity('C₀', 'cm-1'), column('How obtained'), column('Source')],
+    columns: [rowColumn('Set'), quantity('B₀', 'cm-1'), quantity('C₀', 'cm-1'), column('How obtained'), longColumn('Source')],
     rows: rows.map((row): readonly Cell[] => [
       `${row.set_name}${row.set_name === tree.policy.free_ion_set ? ' (in use)' : ''}`, energy(row.B0, null), row.C0 === null ? soft('none in this set') : energy(row.C0, null), row.kind, row.source,
     ]),

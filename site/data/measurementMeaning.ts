@@ -12,6 +12,8 @@ export interface MeasurementMeaning {
   readonly assignment: string;
   readonly transitions: Table | null;
   readonly parameters: readonly ParameterShown[];
+  /** The one reason where every number is withheld for it; the table of numbers then says nothing more. */
+  readonly allWithheld: Parts | null;
   readonly scheme: FigureShown | null;
   readonly reason: Parts;
   readonly measureNext: Parts | null;
@@ -34,10 +36,16 @@ export function measurementMeaning(measurement: MeasurementNode, id: string): Me
     assignment: ASSIGNMENT[row.assignment] ?? row.assignment,
     transitions: transitionTable(measurement),
     parameters: (['Delta', 'B', 'C', 'beta'] as const).map((name) => parameterShown(chosen.parameters[name])),
-    scheme: scheme(measurement, id),
+    allWithheld: allWithheld(measurement), scheme: scheme(measurement, id),
     reason: sentenceShown(row.reason), measureNext: row.measure_next === null ? null : sentenceShown(row.measure_next),
     facts: facts(measurement), branches: branchTable(measurement), predicted: predictedTable(measurement),
   };
+}
+
+function allWithheld({ chosen }: MeasurementNode): Parts | null {
+  const reasons = new Set(Object.values(chosen.parameters).map(({ reason, value }) => value === null ? reason : null));
+  const [reason] = reasons;
+  return reasons.size === 1 && reason != null ? sentenceShown(`Delta, B, C and beta are withheld: ${reason}.`) : null;
 }
 
 function transitionTable({ chosen, complex }: MeasurementNode): Table | null {
@@ -85,7 +93,7 @@ function facts({ chosen }: MeasurementNode): MeasurementMeaning['facts'] {
   const slanted = (text: string): Parts => [{ text, style: 'italic' }];
   const correlation = chosen.correlations.find((one) => one.first === 'Delta' && one.second === 'B');
   return [
-    { name: words('Bands in the fit'), value: `${row.bands_used}, of these ${row.spare_bands === 0 ? 'none' : row.spare_bands} spare` },
+    { name: words('Bands in the fit'), value: row.bands_used === 0 ? 'none' : `${row.bands_used}, of these ${row.spare_bands === 0 ? 'none' : row.spare_bands} spare` },
     ...(row.rms_residual === null || row.spare_bands === 0 ? [] : [{ name: words('Root-mean-square residual'), value: `${ratio(row.rms_residual, 0)} cm⁻¹` }]),
     ...(row.chi2 === null || row.spare_bands === 0 ? [] : [{ name: words('χ²'), value: figures(row.chi2, 3) }]),
     ...(correlation === undefined ? [] : [{ name: words('Correlation of Δ with B'), value: ratio(correlation.value, 2) }]),

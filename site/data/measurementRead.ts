@@ -3,7 +3,7 @@ import type { FigureShown } from './figure.ts';
 import { conditions } from './conditions.ts';
 import { energy, figures, listed, nanometres } from './show.ts';
 import { stripRow, stripTitle } from './strip.ts';
-import { type Cell, type Table, column, quantity, rowColumn, soft, words } from './table.ts';
+import { type Cell, type Table, column, longColumn, quantity, rowColumn, soft, words } from './table.ts';
 import type { MeasurementNode } from './tree.ts';
 import { termShown } from './typeset.ts';
 
@@ -38,7 +38,7 @@ function bandTable(measurement: MeasurementNode): Table {
   const { bands, chosen, complex } = measurement;
   return {
     caption: 'Bands as read',
-    columns: [rowColumn('As typed'), quantity('ν̃', 'cm-1'), quantity('λ', 'nm'), quantity('width', 'cm-1', true), quantity('ε', 'L mol-1 cm-1'), column('Read as'), column('Assigned to')],
+    columns: [rowColumn('As typed'), quantity('ν̃', 'cm-1'), quantity('λ', 'nm'), quantity('width', 'cm-1', true), quantity('ε', 'L mol-1 cm-1'), column('Read as'), longColumn('Assigned to')],
     rows: bands.map((band): readonly Cell[] => {
       const transition = chosen.transitions.find((one) => one.bands.some((member) => member.number === band.number));
       const u = band.u_minus !== null && band.u_plus !== null ? Math.max(band.u_minus, band.u_plus) : null;

@@ -2,7 +2,7 @@ import { type BandKind, freeIonSets, hazardCodes } from '#engine';
 import { bandStrip } from '../charts/strip.ts';
 import { sentenceShown } from './typeset.ts';
 import { energy, ratio } from './show.ts';
-import { type Cell, type Table, column, quantity, rowColumn, soft } from './table.ts';
+import { type Cell, type Table, column, longColumn, quantity, rowColumn, soft } from './table.ts';
 import type { CollectionTree } from './tree.ts';
 
 export interface MethodsPage {
@@ -77,7 +77,7 @@ function cautionTable(tree: CollectionTree): Table {
   }
   return {
     caption: 'Spectral cautions met in this collection, each with one wording',
-    columns: [rowColumn('Code'), quantity('measurements', null, true), column('As worded once')],
+    columns: [rowColumn('Code'), quantity('measurements', null, true), longColumn('As worded once')],
     rows: [...met].sort(([a], [b]) => (a < b ? -1 : 1)).map(([code, { count, text }]) => [code, ratio(count, 0), { parts: sentenceShown(text) }]),
   };
 }

@@ -7,6 +7,8 @@ export interface Column {
   readonly head: Parts;
   /** Figures stand to the right. */
   readonly figure?: boolean;
+  /** Holds running text that must not be squeezed. */
+  readonly long?: boolean;
   /** Heads its row. */
   readonly rowHead?: boolean;
 }
@@ -20,6 +22,7 @@ export interface Table {
 export const words = (text: string): Parts => [{ text, style: 'plain' }];
 export const soft = (text: string): Cell => ({ parts: words(text), soft: true });
 export const column = (text: string): Column => ({ head: words(text) });
+export const longColumn = (text: string): Column => ({ head: words(text), long: true });
 export const rowColumn = (text: string): Column => ({ head: words(text), rowHead: true });
 
 const INVERSE_CM: Parts = [{ text: 'cm', style: 'plain' }, { text: '−1', style: 'super' }];

@@ -11,7 +11,7 @@ export type PolicyOverride = z.output<typeof overrideSchema>;
 const energyOr = (typed: Quantity | undefined, otherwise: number): number => (typed === undefined ? otherwise : toWavenumber(typed).position);
 const shareOr = (typed: Quantity | undefined, otherwise: number): number => (typed === undefined ? otherwise : typed.value / 100);
 
-type Common = Pick<PolicyFile, 'floors' | 'ceilings' | 'rival-margin' | 'default-uncertainties'>;
+type Common = Pick<PolicyFile, 'C' | 'floors' | 'ceilings' | 'rival-margin' | 'default-uncertainties'>;
 
 function withCommon(base: Policy, typed: Common): Policy {
   const { floors, ceilings } = typed;
@@ -28,6 +28,7 @@ function withCommon(base: Policy, typed: Common): Policy {
       racahB: shareOr(ceilings?.B, base.ceilings.racahB),
       racahC: shareOr(ceilings?.C, base.ceilings.racahC),
     },
+    cFitted: typed.C === undefined ? base.cFitted : typed.C === 'fitted where determinable',
     rivalMargin: typed['rival-margin'] ?? base.rivalMargin,
     defaultUncertainties: {
       maximum: energyOr(defaults?.maximum, base.defaultUncertainties.maximum),

@@ -59,6 +59,10 @@ const defaultUncertainties = () => z.strictObject({
   line: energy().optional().meta({ description: 'of a line', examples: ['15 cm-1'] }),
 }).meta({ description: 'taken where a reading is typed without one', examples: ['{ maximum: 80 cm-1, line: 15 cm-1 }'] });
 
+const fittedC = () => choice(['fitted where determinable', 'assumed']).meta({
+  description: 'whether spin-flip bands fit C where they determine it, or C/B is assumed always', examples: ['fitted where determinable'],
+});
+
 const rivalMargin = () => margin().meta({ description: 'a rival reading this close in score is named in the verdict', examples: ['4'] });
 
 export const policySchema = z.strictObject({
@@ -67,6 +71,7 @@ export const policySchema = z.strictObject({
     return { code: 'BAD_ID', found: typed, expected: 'a name of letters, digits and hyphens that starts with a letter', mend: 'write a name such as house-2026' };
   }).optional().meta({ description: 'first part of the policy id', examples: ['house-2026'] }),
   'C/B': ratios().optional(),
+  C: fittedC().optional(),
   floors: floors().optional(),
   ceilings: ceilings().optional(),
   'differential-floor': z.strictObject({
@@ -81,6 +86,7 @@ export const policySchema = z.strictObject({
 /** One value of the policy with the reason why another holds for one measurement. */
 export const overrideSchema = z.strictObject({
   'C/B': ratio().optional().meta({ description: 'C/B for this measurement', examples: ['4.0(3)'] }),
+  C: fittedC().optional(),
   floors: floors().optional(),
   ceilings: ceilings().optional(),
   'rival-margin': rivalMargin().optional(),

@@ -59,6 +59,7 @@ function policyRow(id: string, policy: Policy, inForce: boolean): Row {
     C_over_B: policy.cOverB.general.value,
     C_over_B_u: policy.cOverB.general.u,
     C_over_B_per_ion: JSON.stringify(Object.fromEntries(perIon.map(([ion, { value, u }]) => [ion, { value, u }]))),
+    C_fitted: flag(policy.cFitted),
     floor_general: policy.floors.general,
     floor_spin_flip: policy.floors.spinFlip,
     floor_two_electron: policy.floors.twoElectron,

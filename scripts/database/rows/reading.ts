@@ -1,12 +1,13 @@
 import { policyId } from '#engine';
-import type { Policy, Reading } from '#engine';
-import { flag } from './row.ts';
+import type { Caution, Policy, Reading } from '#engine';
+import { detailRows } from './readingDetail.ts';
+import { flag, list } from './row.ts';
 import type { Row, Tables } from './row.ts';
 
 const parameterOrder = ['Delta', 'B', 'C', 'beta'];
 
 /** Rows of one reading of a measurement. `number` 1 is the chosen reading. Spectral cautions are left to `cautionRows`. */
-export function readingRows(complex: string, measurement: string, number: number, reading: Reading, policy: Policy): Tables {
+export function readingRows(complex: string, measurement: string, number: number, reading: Reading, policy: Policy, electrons: number): Tables {
   const key = { complex, measurement, reading: number };
   return {
     reading: [{
@@ -15,12 +16,15 @@ export function readingRows(complex: string, measurement: string, number: number
       Delta_over_B: reading.deltaOverB, chi2: reading.chi2, bands_used: reading.bandsUsed, spare_bands: reading.spareBands,
       rms_residual: reading.rmsResidual, C_over_B: reading.ratio?.value ?? null, C_over_B_u: reading.ratio?.u ?? null,
       C_over_B_origin: reading.ratio?.origin ?? null, free_ion_set: policy.freeIons, policy: policyId(policy),
-      measure_next: reading.measureNext,
+      measure_next: reading.measureNext, score: reading.score, ranking: reading.ranking,
+      combination: reading.identifiability?.combination ?? null, rank: reading.identifiability?.rank ?? null,
+      singular_values: reading.identifiability ? list(reading.identifiability.singularValues) : null,
+      spin_crossing: reading.groundState?.crossing ?? null, remarks: list(reading.remarks), sentence: reading.sentence,
     }],
     reading_band: reading.bands.map((band, index) => ({
       ...key, number: index + 1, label: band.label, observed: band.observed, u_minus: band.uMinus, u_plus: band.uPlus,
       u_assumed: flag(band.uAssumed), floor: band.floor, used: flag(band.used), calculated: band.calculated,
-      residual: band.residual, gradient_Delta: band.gradient?.delta ?? null, gradient_B: band.gradient?.racahB ?? null,
+      residual: band.residual, leverage: band.leverage, gradient_Delta: band.gradient?.delta ?? null, gradient_B: band.gradient?.racahB ?? null,
       gradient_C: band.gradient?.racahC ?? null,
     })),
     reading_band_member: reading.bands.flatMap((band, index) =>
@@ -31,12 +35,14 @@ export function readingRows(complex: string, measurement: string, number: number
     })),
     parameter: reading.parameters.map((parameter) => ({
       ...key, name: parameter.name, value: parameter.value, u: parameter.u, u_total: parameter.uTotal,
+      low: parameter.limits?.low ?? null, high: parameter.limits?.high ?? null,
       standing: parameter.standing, reason: parameter.reason,
     })),
     correlation: reading.correlations.map((correlation) => correlationRow(key, correlation)),
     predicted_band: reading.predicted.map((band) => ({
       ...key, label: band.label, position: band.position, u: band.u, spin_allowed: flag(band.spinAllowed), looked: band.looked,
     })),
+    ...detailRows(key, reading, electrons),
   };
 }
 
@@ -47,8 +53,8 @@ function correlationRow(key: Row, { first, second, value }: Reading['correlation
 }
 
 /** Rows of the spectral cautions of one reading; `before` is how many caution rows the complex has already. */
-export function cautionRows(complex: string, measurement: string, number: number, reading: Reading, before: number): Row[] {
-  return reading.cautions.map((caution, index) => ({
+export function cautionRows(complex: string, measurement: string, number: number, cautions: readonly Caution[], before: number): Row[] {
+  return cautions.map((caution, index) => ({
     complex, number: before + index + 1, subject: 'spectral', measurement, reading: number,
     code: caution.code, found_in: null, text: caution.text,
   }));

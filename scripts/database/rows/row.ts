@@ -13,7 +13,7 @@ export function flag(value: boolean): 0 | 1 {
 }
 
 /** A list as the database stores it: a JSON array in the order typed. */
-export function list(values: readonly string[]): string {
+export function list(values: readonly (string | number)[]): string {
   return JSON.stringify(values);
 }
 
