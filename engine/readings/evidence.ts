@@ -20,23 +20,22 @@ const unseenPenalty = 4;
 const twoElectronGapPenalty = 3;
 const twoElectronUnseenPenalty = 1;
 /** A transition below the lowest assigned band, outside what was scanned: the spin-allowed order is read from below. */
-const skippedBelowPenalty = 2;
+const skippedBelowPenalty = 4;
 const skippedLinePenalty = 2;
 const classPenalty = 4;
 const widthPenalty = 4;
 const forbiddenBroadPenalty = 4;
 
 /**
- * Molar absorption coefficients by class of transition, L mol-1 cm-1 (common practice, no source):
- * spin-forbidden below about 1, spin-allowed octahedral 1 to 100 and to 300 for chelates and low symmetry,
- * tetrahedral 50 to 1000, charge transfer above 1000.
+ * Usual molar absorption coefficients of a d-d transition, L mol-1 cm-1 (common practice, no source): spin-allowed 1
+ * to 100 in an octahedron, 50 to 1000 in a tetrahedron; spin-forbidden to about 1, and to 10 without a centre of
+ * inversion.
  */
-const absorptivityClasses = [
-  { name: 'spin-forbidden', low: 0, high: 1 },
-  { name: 'octahedral', low: 1, high: 300 },
-  { name: 'tetrahedral', low: 50, high: 1000 },
-  { name: 'charge transfer', low: 1000, high: Number.POSITIVE_INFINITY },
-] as const;
+function usualAbsorptivity(ion: GroundCase, { spinAllowed }: Transition): { readonly low: number; readonly high: number } {
+  const centred = ion.geometry === 'octahedral';
+  if (!spinAllowed) return { low: 0, high: centred ? 1 : 10 };
+  return centred ? { low: 1, high: 100 } : { low: 50, high: 1000 };
+}
 
 /** Charge transfer by its strength. */
 export const isStrong = (band: Band): boolean => band.epsilon !== null && band.epsilon > 1000;
@@ -49,20 +48,13 @@ export const looksNarrow = (band: Band): boolean => band.kind === 'line' || band
 
 export const looksWeak = (band: Band): boolean => band.epsilon !== null && band.epsilon < 1;
 
-function classOf(ion: GroundCase, transition: Transition): number {
-  if (!transition.spinAllowed) return 0;
-  return ion.geometry === 'tetrahedral' ? 2 : 1;
-}
-
+/** Classes overlap in practice (chelates, low symmetry), so the penalty grows with the square of the decades off: one class is one decade. */
 function absorptivityEvidence(ion: GroundCase, transition: Transition, band: Band): Evidence[] {
   const { epsilon } = band;
-  if (epsilon === null) return [];
-  const expected = classOf(ion, transition);
-  // Without a centre of inversion spin-forbidden bands borrow ten times more.
-  const high = expected === 0 && ion.geometry === 'tetrahedral' ? 10 : absorptivityClasses[expected]!.high;
-  if (epsilon >= absorptivityClasses[expected]!.low && epsilon <= high) return [];
-  const off = epsilon > high ? absorptivityClasses.findIndex((one, i) => i > expected && epsilon <= one.high) - expected : 1;
-  return [{ code: 'absorptivity', penalty: classPenalty * Math.max(1, off) ** 2, label: transition.label, value: epsilon }];
+  if (epsilon === null || epsilon <= 0) return [];
+  const { low, high } = usualAbsorptivity(ion, transition);
+  const decades = epsilon > high ? Math.log10(epsilon / high) : epsilon < low ? Math.log10(low / epsilon) : 0;
+  return decades === 0 ? [] : [{ code: 'absorptivity', penalty: classPenalty * decades ** 2, label: transition.label, value: epsilon }];
 }
 
 function widthEvidence(transition: Transition, band: Band): Evidence[] {
@@ -94,7 +86,8 @@ function misfitOfCompared(assigned: readonly Assigned[], fit: Fit): number {
   }, 0);
 }
 
-const parametersOf = { field: 1, 'field, B assumed': 1, 'field, B': 2, 'field, B by a line': 2, 'field, B, C': 3 } as const;
+/** An assumed B is a choice as much as a fitted one. */
+const parametersOf = { field: 1, 'field, B assumed': 2, 'field, B': 2, 'field, B by a line': 2, 'field, B, C': 3 } as const;
 
 const within = (ranges: readonly Range[], position: number): boolean => ranges.some((range) => position >= range.low && position <= range.high);
 

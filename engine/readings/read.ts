@@ -4,6 +4,7 @@ import { groundLabel, shownLabel } from '../levels/labels.ts';
 import type { Measurement } from '../measurement/types.ts';
 import { policyId } from '../policy/policy.ts';
 import type { Policy } from '../policy/types.ts';
+import { wholeNumber } from '../words/numbers.ts';
 import { rankingSentence } from '../words/ranking.ts';
 import { doubletSentence, groundSentence, rivalSentence } from '../words/remarks.ts';
 import { thesisSentence } from '../words/thesis.ts';
@@ -45,11 +46,12 @@ interface Context {
 /** How the rivals stand to the chosen reading. */
 export interface Rivalry {
   readonly best: 'near' | 'better' | null;
-  /** The other geometry of the best near or better rival, or null. */
   readonly otherGeometry: boolean;
+  /** The best rival in words: "4T2g 17 400, a4T1g 24 600 (octahedral, quartet)". */
+  readonly words: string;
 }
 
-const noRivalry: Rivalry = { best: null, otherGeometry: false };
+const noRivalry: Rivalry = { best: null, otherGeometry: false, words: '' };
 
 /**
  * Reads one measurement: assigns its bands (as typed, or the best assignment where nothing is typed), fits
@@ -83,10 +85,22 @@ export function readMeasurement(measurement: Measurement, policy: Policy, freeIo
 
 function rivalry(chosen: ScoredReading, rivals: readonly ScoredReading[], policy: Policy): Rivalry {
   const [best] = rivals;
-  if (!best) return noRivalry;
+  // A reading that fixes too little is not beaten by one that fixes more; one that no parameters reproduce is.
+  const beatable = Number.isFinite(chosen.score) || (!isFit(chosen.outcome) && chosen.outcome.status === 'refused') || isFit(chosen.outcome);
+  if (!best || !beatable) return noRivalry;
   const difference = best.score - chosen.score;
   if (!(difference <= policy.rivalMargin)) return noRivalry;
-  return { best: difference < -policy.rivalMargin ? 'better' : 'near', otherGeometry: best.ion.geometry !== chosen.ion.geometry };
+  return { best: difference < -policy.rivalMargin ? 'better' : 'near', otherGeometry: best.ion.geometry !== chosen.ion.geometry, words: rivalWords(best, chosen) };
+}
+
+/** What a rival makes of the bands, and of what ion where that differs from the declared one. */
+function rivalWords(rival: ScoredReading, chosen: ScoredReading): string {
+  const bands = rival.assigned.map(({ label, observation }) => `${shownLabel(label, rival.ion.electrons)} ${wholeNumber(observation.position)}`).join(', ');
+  const other = [
+    ...(rival.ion.geometry === chosen.ion.geometry ? [] : [rival.ion.geometry]),
+    ...(rival.ion.multiplicity === chosen.ion.multiplicity ? [] : [`multiplicity ${rival.ion.multiplicity}`]),
+  ];
+  return `${bands}${other.length === 0 ? '' : ` (${other.join(', ')})`}`;
 }
 
 function inWords(evidence: readonly Evidence[], ion: GroundCase): { code: string; penalty: number; label: string; value: number | null }[] {

@@ -20,6 +20,12 @@ export interface Contest {
 const keyOf = ({ ion, assigned }: ScoredReading): string =>
   [ion.geometry, ion.multiplicity, ...assigned.map((one) => `${one.label}@${one.observation.bands.join('+')}`)].join(' ');
 
+/** Whether a reading says of some bands what the other says of them too, and nothing of the rest: that is no other reading. */
+function isPartOf(reading: ScoredReading, other: ScoredReading): boolean {
+  if (reading.ion.geometry !== other.ion.geometry || reading.ion.multiplicity !== other.ion.multiplicity) return false;
+  return reading.assigned.every(({ label, observation }) => other.assigned.some((one) => one.label === label && one.observation.bands.join() === observation.bands.join()));
+}
+
 /**
  * The typed reading, or the best one where no terms are typed, against every other way to read the bands: other
  * candidates, free assignment, the other geometry, the other spin state.
@@ -48,8 +54,9 @@ export function contest(measurement: Measurement, ion: GroundCase, policy: Polic
     return true;
   });
   distinct.sort((a, b) => a.score - b.score);
+  const notWithin = distinct.filter((reading, i) => !(chosen && isPartOf(reading, chosen)) && !distinct.slice(0, i).some((better) => isPartOf(reading, better)));
   const chosenScore = chosen && Number.isFinite(chosen.score) ? chosen.score : Number.POSITIVE_INFINITY;
-  const reference = Math.min(chosenScore, distinct[0]?.score ?? Number.POSITIVE_INFINITY);
+  const reference = Math.min(chosenScore, notWithin[0]?.score ?? Number.POSITIVE_INFINITY);
   const within = Math.max(reference, Number.isFinite(chosenScore) ? chosenScore : reference) + keepWithin;
-  return { chosen, rivals: distinct.filter((reading) => reading.score <= within).slice(0, rivalsAtMost) };
+  return { chosen, rivals: notWithin.filter((reading) => reading.score <= within).slice(0, rivalsAtMost) };
 }

@@ -29,7 +29,7 @@ export function stressOf(ion: GroundCase, assigned: readonly Assigned[], fit: Fi
   if (used.length > 2)
     for (let i = 0; i < used.length; i++)
       for (let j = i + 1; j < used.length && pairs.length < pairsAtMost; j++)
-        pairs.push({ labels: [used[i]!.label, used[j]!.label], at: solve([used[i]!, used[j]!])?.solutions[0]!.at ?? null });
+        pairs.push({ labels: [used[i]!.label, used[j]!.label], bands: [assigned.indexOf(used[i]!), assigned.indexOf(used[j]!)], at: solve([used[i]!, used[j]!])?.solutions[0]!.at ?? null });
   const leftOut = used.length < 3 ? [] : used.map((band, k) => leaveOut(ion, band, used.filter((_, i) => i !== k), solve, fit.floors[assigned.indexOf(band)]!));
   return { pairs, leftOut };
 }

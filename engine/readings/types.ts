@@ -85,6 +85,8 @@ export interface Evidence {
 /** Delta and B from two bands alone; null where no solution exists. */
 export interface PairAlone {
   readonly labels: readonly [string, string];
+  /** Their places among `Reading.bands`: one label may stand twice (the d5 pair). */
+  readonly bands: readonly [number, number];
   readonly at: FieldParameters | null;
 }
 

@@ -2,6 +2,7 @@
 
 import type { Geometry } from '../ions/types.ts';
 import { notLike } from '../words/series.ts';
+import type { Unlike, UnlikeKind } from '../words/series.ts';
 import { complexKey, ionWords, ligandSetKey, measurementId, phaseClass, spinName } from './identity.ts';
 import type { ComplexIdentity, PhaseClass, SeriesParameter, SeriesResult } from './types.ts';
 
@@ -33,6 +34,7 @@ export interface Frame {
 /** A measurement that was left out, and why. */
 export interface NotCompared {
   readonly result: SeriesResult;
+  readonly kind: UnlikeKind;
   readonly reason: string;
 }
 
@@ -50,7 +52,7 @@ export interface Comparable {
  * Why a result may not stand in a frame, or null where it may. This is the one place where likeness is decided; pages, exports and
  * commands all come here.
  */
-export function whyUnlike(result: SeriesResult, parameter: SeriesParameter, frame: Frame): string | null {
+export function whyUnlike(result: SeriesResult, parameter: SeriesParameter, frame: Frame): Unlike | null {
   const { complex, cautions } = result;
   const number = result.parameters[parameter];
   if (frame.ion !== null && complex.ion.name !== frame.ion) return notLike.ion(complex.ion.name);
@@ -67,7 +69,7 @@ export function whyUnlike(result: SeriesResult, parameter: SeriesParameter, fram
   return temperatureUnlike(result.temperature, frame.temperature);
 }
 
-function temperatureUnlike(temperature: number | null, { near, orNotRecorded }: TemperatureFrame): string | null {
+function temperatureUnlike(temperature: number | null, { near, orNotRecorded }: TemperatureFrame): Unlike | null {
   if (temperature === null) return near === null || orNotRecorded ? null : notLike.temperatureUnknown;
   if (near === null) return notLike.temperatureKnown(temperature);
   return Math.abs(temperature - near) <= temperatureReach ? null : notLike.temperature(temperature, near, temperatureReach);
@@ -78,12 +80,12 @@ function temperatureUnlike(temperature: number | null, { near, orNotRecorded }: 
  * the one with the smallest total uncertainty stands for it (where equal, the first by id).
  */
 export function selectComparable(candidates: readonly SeriesResult[], parameter: SeriesParameter, frame: Frame): Comparable {
-  const leftOut = new Map<SeriesResult, string>();
+  const leftOut = new Map<SeriesResult, Unlike>();
   const best = new Map<string, SeriesResult>();
   for (const result of candidates) {
-    const reason = whyUnlike(result, parameter, frame);
-    if (reason !== null) {
-      leftOut.set(result, reason);
+    const unlike = whyUnlike(result, parameter, frame);
+    if (unlike !== null) {
+      leftOut.set(result, unlike);
       continue;
     }
     const key = complexKey(result.complex);
@@ -96,7 +98,7 @@ export function selectComparable(candidates: readonly SeriesResult[], parameter:
   }
   const members = [...best.values()].sort((a, b) =>
     a.parameters[parameter].value! - b.parameters[parameter].value! || (measurementId(a) < measurementId(b) ? -1 : 1));
-  const inOrder = candidates.filter((result) => leftOut.has(result)).map((result) => ({ result, reason: leftOut.get(result)! }));
+  const inOrder = candidates.filter((result) => leftOut.has(result)).map((result) => ({ result, ...leftOut.get(result)! }));
   return { parameter, frame, members, leftOut: inOrder };
 }
 

@@ -1,5 +1,6 @@
 import type { Geometry } from '../ions/types.ts';
-import { factorLeftOut } from '../words/factors.ts';
+import { notLike } from '../words/series.ts';
+import type { Unlike } from '../words/series.ts';
 import { roomTemperature, selectComparable } from './comparable.ts';
 import type { Comparable, NotCompared } from './comparable.ts';
 import { measurementId } from './identity.ts';
@@ -15,9 +16,9 @@ export function factorRows(
 ): Pick<Comparable, 'members' | 'leftOut'> {
   const leftOut: NotCompared[] = [];
   const candidates = results.filter((result) => {
-    const reason = whyNot(result, parameter);
-    if (reason !== null) leftOut.push({ result, reason });
-    return reason === null;
+    const unlike = whyNot(result, parameter);
+    if (unlike !== null) leftOut.push({ result, ...unlike });
+    return unlike === null;
   });
   const chosen = selectComparable(candidates, parameter, {
     policy, ion: null, geometry, multiplicity: null, ligandSet: null, phase: null,
@@ -30,12 +31,9 @@ export function factorRows(
   };
 }
 
-function whyNot({ complex, cautions, parameters }: SeriesResult, parameter: SeriesParameter): string | null {
-  if (complex.geometry !== null && complex.multiplicity === null) return factorLeftOut.spinUnknown;
-  if (parameter === 'Delta' && cautions.includes('B_ASSUMED')) return factorLeftOut.fieldRestsOnB;
+function whyNot({ complex, cautions, parameters }: SeriesResult, parameter: SeriesParameter): Unlike | null {
+  if (complex.geometry !== null && complex.multiplicity === null) return notLike.spinUnknown;
+  if (parameter === 'Delta' && cautions.includes('B_ASSUMED')) return notLike.fieldRestsOnB;
   const { value, uTotal } = parameters[parameter];
-  // A logarithm needs a positive number. Delta is never anything else; a hand-made table might be.
-  if (parameter === 'Delta' && value !== null && !(value > 0)) return factorLeftOut.notPositive;
-  if (value !== null && uTotal === null) return factorLeftOut.noUncertainty;
-  return null;
+  return value !== null && uTotal === null ? notLike.noUncertainty : null;
 }

@@ -35,6 +35,8 @@ export function placingGround(collection: ComparedCollection, complex: ComplexId
   const parents = (one: FactorFit | null): Parents => parentsOf(one?.complexes.map(({ result }) => result) ?? []);
   return {
     complex, collection, earlier, others,
+    storedAs: collection.results.find((result) => complexKey(result.complex) === key)?.complex.id ?? null,
+    idTaken: others.some((result) => result.complex.id === complex.id),
     candidates: {
       ion: others.filter((one) => one.complex.ion.name === complex.ion.name),
       ligands: others.filter((one) => ligandSetKey(one.complex) === ligandSetKey(complex)),
@@ -44,11 +46,15 @@ export function placingGround(collection: ComparedCollection, complex: ComplexId
   };
 }
 
-/** Places one new measurement of the complex for which the ground was prepared. */
-export function placeResult(ground: PlacingGround, result: SeriesResult): Placement {
+/**
+ * Places one new measurement of the complex for which the ground was prepared.
+ *
+ * @param siblings other new measurements of the same complex, set beside it like earlier ones
+ */
+export function placeResult(ground: PlacingGround, result: SeriesResult, siblings: readonly SeriesResult[] = []): Placement {
   const { policy } = ground.collection;
   const floor = policy.differentialFloor;
-  const earlier = ground.earlier.map((one) => ({
+  const earlier = [...ground.earlier, ...siblings].map((one) => ({
     result: one, differences: { Delta: difference(result, one, 'Delta', floor), beta: difference(result, one, 'beta', floor) },
   }));
   const places = (['ion', 'ligands'] as const).flatMap((subject) => seriesParameters.map((parameter) => placeInSeries(result, subject, parameter, ground.candidates[subject], policy)));

@@ -1,4 +1,6 @@
 import type { Policy } from '../policy/types.ts';
+import { leftOutWords } from '../words/series.ts';
+import type { UnlikeKind } from '../words/series.ts';
 import { ionSubject, ligandSubject, roomTemperature, selectComparable } from './comparable.ts';
 import type { Comparable, Frame, Subject } from './comparable.ts';
 import { difference } from './difference.ts';
@@ -35,8 +37,8 @@ export interface PlaceInSeries {
   readonly belowCount: number;
   /** Members that it cannot be told from, nearest first. */
   readonly alike: readonly SeriesNeighbour[];
-  /** Candidates of the same subject that were not compared: how many for each reason, most first. */
-  readonly leftOut: readonly { readonly reason: string; readonly count: number }[];
+  /** Candidates of the same subject that were not compared: how many for each kind of reason, most first. */
+  readonly leftOut: readonly { readonly kind: UnlikeKind; readonly count: number; /** "6 in other phases" */ readonly words: string }[];
   /** true where the new result's own number is withheld. */
   readonly withheld: boolean;
 }
@@ -66,7 +68,7 @@ export function placeInSeries(
     subject, parameter, frame: comparable.frame, widened, members: comparable.members.length,
     above: above[0] ?? null, aboveCount: above.length, below: below[0] ?? null, belowCount: below.length,
     alike: neighbours.filter((one) => !one.difference.distinguishable).sort(nearestFirst),
-    leftOut: reasonCounts(comparable), withheld: result.parameters[parameter].value === null,
+    leftOut: leftOutCounts(comparable), withheld: result.parameters[parameter].value === null,
   };
 }
 
@@ -89,9 +91,9 @@ function widening(
   return { comparable: first!, widened: 'none' };
 }
 
-/** How many were left out for each reason, the most frequent first. */
-function reasonCounts({ leftOut }: Comparable): readonly { readonly reason: string; readonly count: number }[] {
-  const counts = new Map<string, number>();
-  for (const { reason } of leftOut) counts.set(reason, (counts.get(reason) ?? 0) + 1);
-  return [...counts].map(([reason, count]) => ({ reason, count })).sort((a, b) => b.count - a.count || (a.reason < b.reason ? -1 : 1));
+/** How many were left out for each kind of reason, the most frequent first. */
+function leftOutCounts({ leftOut }: Comparable): PlaceInSeries['leftOut'] {
+  const counts = new Map<UnlikeKind, number>();
+  for (const { kind } of leftOut) counts.set(kind, (counts.get(kind) ?? 0) + 1);
+  return [...counts].map(([kind, count]) => ({ kind, count, words: leftOutWords(kind, count) })).sort((a, b) => b.count - a.count || (a.kind < b.kind ? -1 : 1));
 }

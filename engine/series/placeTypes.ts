@@ -19,6 +19,10 @@ export interface ComparedCollection {
 export interface PlacingGround {
   readonly complex: ComplexIdentity;
   readonly collection: ComparedCollection;
+  /** Id under which the collection holds the complex; null where it is new. */
+  readonly storedAs: string | null;
+  /** true where the collection holds another complex under the new one's id. */
+  readonly idTaken: boolean;
   /** Measurements of the same complex. */
   readonly earlier: readonly SeriesResult[];
   /** All other measurements. */

@@ -29,7 +29,8 @@ export function placingCautions({ result, ground, earlier, places, predictions }
     !others.some((one) => one.complex.geometryName === complex.geometryName && one.complex.ligands.some((other) => other.ligand === ligand)));
   const island = fits?.Delta.islands.find(({ ions }) => ions.includes(ionKey(complex)));
   const disagreeing = earlier.filter(({ differences }) => [differences.Delta, differences.beta].some((one) => one?.distinguishable)).map((one) => measurementId(one.result));
-  add(ground.earlier.length > 0, 'ALREADY_THERE', () => text.alreadyThere(ground.earlier[0]!.complex.id));
+  add(ground.storedAs !== null, 'ALREADY_THERE', () => text.alreadyThere(ground.storedAs!));
+  add(ground.idTaken, 'ID_TAKEN', () => text.idTaken(complex.id));
   add(likeIon.length === 0, 'NO_OTHER_RECORD', () => text.noOtherRecord(ionWords(complex)));
   add(ofIon.some(({ members, withheld }) => members === 1 && !withheld), 'SERIES_OF_ONE', () => text.onlyOne(ionWords(complex)));
   add(unseen.length > 0, 'LIGAND_NEVER_SEEN', () => text.ligandsNeverSeen(unseen));

@@ -1,13 +1,5 @@
 import { listed } from './numbers.ts';
 
-/** Why a result takes no part in a factor fit. */
-export const factorLeftOut = {
-  spinUnknown: 'the spin state is not declared',
-  fieldRestsOnB: 'Delta rests on an assumed B',
-  notPositive: 'Delta is not above 0',
-  noUncertainty: 'no uncertainty stands with the value',
-} as const;
-
 /** What a factor's place in the fit leaves to say; null: a value that other complexes test. */
 export function factorReason(facts: {
   readonly gauge: boolean;

@@ -20,7 +20,8 @@ export const nearestReason = {
 
 /** What a person should know before reading a placement. */
 export const placingCautionText = {
-  alreadyThere: (id: string): string => `The collection holds the complex ${id} already. It is placed against all others; its own earlier measurements are listed apart.`,
+  alreadyThere: (id: string): string => `The collection holds this complex already, as ${id}. It is placed against all others; earlier measurements of it are listed apart.`,
+  idTaken: (id: string): string => `The collection holds another complex under the id ${id}: choose a new file name before you add this one.`,
   noOtherRecord: (ion: string): string => `No other record of ${ion} is in the collection: there is no series of it to stand in.`,
   onlyOne: (ion: string): string => `Only one other complex of ${ion} can be compared: above, below or alike is all that can be said.`,
   ligandsNeverSeen: (ligands: readonly string[]): string => `${listed(ligands)} ${ligands.length === 1 ? 'is' : 'are'} in no other complex of this geometry: nothing predicts what ${ligands.length === 1 ? 'it does' : 'they do'}.`,
@@ -29,7 +30,7 @@ export const placingCautionText = {
   temperatureMissing: (room: number): string => `Its temperature is not recorded: it is compared as if measured near ${room} K.`,
   widenedTemperature: 'Nothing with a recorded temperature near its own can be compared; results without a recorded temperature were let in.',
   widenedPhase: 'Nothing in its phase can be compared; results of other phases were let in.',
-  earlierDisagrees: (names: readonly string[]): string => `It disagrees with the earlier ${names.length === 1 ? 'measurement' : 'measurements'} ${listed(names)} of the same complex by more than two standard uncertainties.`,
+  earlierDisagrees: (names: readonly string[]): string => `It disagrees with the ${names.length === 1 ? 'measurement' : 'measurements'} ${listed(names)} of the same complex by more than two standard uncertainties.`,
   farFromPrediction: (parameter: string, method: string, z: string): string => `${parameter} lies ${z} standard uncertainties from what ${method === 'factors' ? 'the factors predict' : 'the average environment predicts'}: look at the assignment, or there is something new.`,
   scatterAssumed: 'The collection is too small to say how far complexes scatter about the rule of average environment: 3 % in Delta and 0.03 in beta were assumed.',
 } as const;

@@ -59,7 +59,7 @@ export function rankingSentence(rival: readonly EvidenceFacts[], chosen: readonl
       .slice(0, namedAtMost)
       .map(({ one }) => evidenceWords(one));
   };
-  if (difference === null) return 'Fits these bands, which the chosen reading does not.';
+  if (difference === null) return 'Gives numbers, which the chosen reading does not.';
   const worse = against(rival, chosen);
   const better = against(chosen, rival);
   const place =

@@ -79,6 +79,7 @@ function policyInForce([row]: Rows<PolicyRow>): Policy {
   const policy: Policy = {
     name: row.name,
     cOverB: { general: { value: row.C_over_B, u: row.C_over_B_u }, perIon: JSON.parse(row.C_over_B_per_ion) as Policy['cOverB']['perIon'] },
+    cFitted: row.C_fitted === 1,
     floors: { general: row.floor_general, spinFlip: row.floor_spin_flip, twoElectron: row.floor_two_electron },
     ceilings: { delta: row.ceiling_Delta, racahB: row.ceiling_B, racahC: row.ceiling_C },
     differentialFloor: { delta: row.differential_Delta, racahB: row.differential_B },
@@ -119,7 +120,7 @@ interface MeasurementRow {
   readonly policy: string; readonly verdict: SeriesResult['verdict'];
 }
 interface PolicyRow {
-  readonly id: string; readonly name: string; readonly C_over_B: number; readonly C_over_B_u: number; readonly C_over_B_per_ion: string;
+  readonly id: string; readonly name: string; readonly C_over_B: number; readonly C_over_B_u: number; readonly C_over_B_per_ion: string; readonly C_fitted: 0 | 1;
   readonly floor_general: number; readonly floor_spin_flip: number; readonly floor_two_electron: number;
   readonly ceiling_Delta: number; readonly ceiling_B: number; readonly ceiling_C: number;
   readonly differential_Delta: number; readonly differential_B: number; readonly free_ion_set: Policy['freeIons']; readonly rival_margin: number;

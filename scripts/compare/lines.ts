@@ -28,7 +28,7 @@ function measurementLines({ reading, placement }: PlacedMeasurement): string[] {
     measurementId(result),
     `  ${verdictText(reading)}`,
     ...aligned(reading.parameters.map(parameterCells)),
-    ...section('Earlier measurements of this complex', earlierLines(placement.earlier)),
+    ...section('Other measurements of this complex', earlierLines(placement.earlier)),
     ...section('Where it stands', placeLines(placement)),
     ...section('What the rest of the collection predicts', placement.predictions.length === 0 ? ['nothing: this geometry is not fitted'] : aligned(placement.predictions.map(predictionCells), '')),
     ...section('Nearest earlier complexes in (Delta/g, beta)', nearestLines(placement)),
@@ -74,8 +74,8 @@ function earlierLines(earlier: readonly EarlierMeasurement[]): string[] {
 function placeLines({ places, result }: Placement): string[] {
   return places.flatMap((place) => {
     const { sentence, conditions } = placeWords(place, result);
-    const out = place.leftOut.map(({ reason, count }) => `${count} ${reason}`);
-    return [sentence, ...(place.members === 0 && out.length === 0 ? [] : [`  (${conditions}${out.length === 0 ? '' : `; left out: ${out.join('; ')}`})`])];
+    const out = place.leftOut.map(({ words }) => words);
+    return [sentence, ...(place.members === 0 && out.length === 0 ? [] : [`  (${conditions}${out.length === 0 ? '' : `; left out: ${out.join(', ')}`})`])];
   });
 }
 

@@ -9,6 +9,7 @@ import { checkComplex } from '../content/checks/complex.ts';
 import type { KnownRecords } from '../content/checks/complex.ts';
 import { checkLigand } from '../content/checks/ligand.ts';
 import { readDraft } from '../content/draft.ts';
+import type { Draft } from '../content/draft.ts';
 import { largestFile, openContent } from '../content/files.ts';
 import type { OpenedFile } from '../content/files.ts';
 import { badId } from '../content/ids.ts';
@@ -97,10 +98,10 @@ function readLigand(opened: OpenedFile): { readonly record: LigandRecord | null;
   return { record: reporter.faults.length > 0 ? null : ligandRecord(opened, draft as unknown as z.output<typeof ligandSchema>), faults: reporter.faults };
 }
 
-function readRecord<S extends typeof complexSchema | typeof ligandSchema>(schema: S, { file, text }: OpenedFile) {
+function readRecord<S extends typeof complexSchema | typeof ligandSchema>(schema: S, { file, text }: OpenedFile): { readonly reporter: Reporter; readonly draft: Draft<S> | undefined } {
   const { root, faults } = readYaml(text);
   const reporter = createReporter(file, root);
   for (const { place, finding, path } of faults) reporter.atPlace(place, path ?? (root === null ? [] : pathAt(root, place)), finding);
   if (root === null && faults.length === 0) reporter.at([], { code: 'FILE_EMPTY', found: 'a file without any field', expected: 'a record', mend: 'type the record, or delete the file' });
-  return { reporter, draft: root === null ? undefined : readDraft(schema, root, reporter) };
+  return { reporter, draft: (root === null ? undefined : readDraft(schema, root, reporter)) as Draft<S> | undefined };
 }

@@ -23,10 +23,9 @@ export function placeRecord(record: ComplexRecord, collection: StoredCollection)
   }));
   const complex = { ...identityOf(record), multiplicity: record.multiplicity ?? readings[0]?.reading.multiplicity ?? null };
   const ground = placingGround(collection.compared, complex, record.measurements.map(({ id }) => measurementId({ complex, measurement: id })));
+  const results = readings.map(({ measurement, reading }) => seriesResult(complex, measurement.id, measurement.engine, policyId(measurement.policy), reading));
   return {
     record,
-    measurements: readings.map(({ measurement, reading }) => ({
-      measurement, reading, placement: placeResult(ground, seriesResult(complex, measurement.id, measurement.engine, policyId(measurement.policy), reading)),
-    })),
+    measurements: readings.map((one, i) => ({ ...one, placement: placeResult(ground, results[i]!, results.filter((other) => other !== results[i])) })),
   };
 }

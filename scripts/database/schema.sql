@@ -399,11 +399,13 @@ CREATE TABLE stress_pair (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
   reading     INTEGER NOT NULL,
+  first_number  INTEGER NOT NULL,                    -- of the reading_band
+  second_number INTEGER NOT NULL,
   first       TEXT NOT NULL,
   second      TEXT NOT NULL,
   Delta       REAL,
   B           REAL,
-  PRIMARY KEY (complex, measurement, reading, first, second),
+  PRIMARY KEY (complex, measurement, reading, first_number, second_number),
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
 ) STRICT, WITHOUT ROWID;
 

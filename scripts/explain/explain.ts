@@ -1,4 +1,4 @@
-import { freeIon, hazardCautions, readMeasurement } from '#engine';
+import { freeIon, hazardCautions, readWithRivals } from '#engine';
 import { nearNames } from '../content/nearest.ts';
 import { readCollection } from '../content/readCollection.ts';
 import type { Collection, ComplexRecord } from '../content/types.ts';
@@ -24,12 +24,10 @@ function storiesOf(collection: Collection, id: string): readonly Story[] {
   const wanted = complex?.measurements.filter((one) => id === complex.id || id === `${complex.id}/${one.id}`) ?? [];
   if (complex === undefined || wanted.length === 0) throw new UsageError(unknownId(collection, complex, id));
   const hazards = hazardCautions(hazardSubject(complex, collection.ligands));
-  return wanted.map((measurement) => ({
-    complex,
-    measurement,
-    hazards,
-    readings: [readMeasurement(measurement.engine, measurement.policy, freeIon(measurement.policy.freeIons, complex.ion))],
-  }));
+  return wanted.map((measurement) => {
+    const { chosen, rivals } = readWithRivals(measurement.engine, measurement.policy, freeIon(measurement.policy.freeIons, complex.ion));
+    return { complex, measurement, hazards, readings: [chosen, ...rivals] };
+  });
 }
 
 function unknownId(collection: Collection, complex: ComplexRecord | undefined, id: string): string {

@@ -1,4 +1,4 @@
-import { concise, conciseTwoSided, plain, policyId, shownLabel, significant, wavelengthShown } from '#engine';
+import { concise, conciseTwoSided, evidenceWords, plain, policyId, shownLabel, significant, wavelengthShown } from '#engine';
 import type { Band, HazardCaution, Parameter, Reading } from '#engine';
 import type { ComplexRecord, MeasurementRecord } from '../content/types.ts';
 import { spinWord } from '../database/rows/spin.ts';
@@ -13,7 +13,7 @@ export interface Story {
 
 /** One measurement's story in words: what it is, what was read, how it was fitted, how sure it is, what to watch. */
 export function storyLines({ complex, measurement, readings, hazards }: Story): string[] {
-  const [reading] = readings;
+  const [reading, ...rivals] = readings;
   if (reading === undefined) throw new Error(`no reading for ${complex.id}/${measurement.id}`);
   const electrons = complex.ion.electrons;
   return [
@@ -40,10 +40,15 @@ export function storyLines({ complex, measurement, readings, hazards }: Story): 
     '',
     verdictLine(reading),
     ...(reading.measureNext === null ? [] : [`To measure next: ${reading.measureNext}`]),
+    ...reading.remarks,
     ...predictions(reading, electrons),
+    ...evidence(reading, electrons),
+    ...rivalLines(reading, rivals, electrons),
     '',
     reading.cautions.length === 0 ? 'Cautions: none from the spectrum.' : 'Cautions',
     ...aligned(reading.cautions.map(({ code, text }) => [code, text])),
+    '',
+    `In one sentence: ${reading.sentence}`,
   ];
 }
 
@@ -97,16 +102,21 @@ function transitions(reading: Reading, electrons: number): string[] {
 
 function branches(reading: Reading): string[] {
   if (reading.branches.length === 0) return ['  No solution.'];
-  const fit = [`chi2 ${reading.chi2 === null ? '-' : significant(reading.chi2, 4)}, ${reading.bandsUsed} bands used, ${reading.spareBands} spare`];
+  const fit = [`chi2 ${reading.chi2 === null ? '-' : misfit(reading.chi2)}, ${reading.bandsUsed} bands used, ${reading.spareBands} spare`];
   if (reading.rmsResidual !== null) fit.push(`rms residual ${plain(reading.rmsResidual, 0)} cm-1`);
   if (reading.ratio !== null) fit.push(`C/B ${concise(reading.ratio.value, reading.ratio.u)} (${reading.ratio.origin})`);
   return [
     `  ${fit.join('; ')}`,
     ...aligned(reading.branches.map((branch, index) => [
       `solution ${index + 1}`, `Delta ${plain(branch.delta, 0)}`, `B ${plain(branch.racahB, 0)}`, `C ${plain(branch.racahC, 0)}`,
-      `chi2 ${significant(branch.chi2, 4)}`, branch.chosen ? 'chosen' : '',
+      `chi2 ${misfit(branch.chi2)}`, branch.chosen ? 'chosen' : '',
     ])),
   ];
+}
+
+// Where nothing is spare chi2 is zero but for rounding.
+function misfit(chi2: number): string {
+  return chi2 < 1e-6 ? '0' : significant(chi2, 4);
 }
 
 function parameterCells(parameter: Parameter): string[] {
@@ -127,6 +137,29 @@ function predictions(reading: Reading, electrons: number): string[] {
     'Bands not assigned, where the fit puts them',
     ...aligned(reading.predicted.map((band) => [
       shownLabel(band.label, electrons), `${concise(band.position, band.u)} cm-1`, band.spinAllowed ? 'spin-allowed' : 'spin-forbidden', looked[band.looked],
+    ])),
+  ];
+}
+
+function evidence(reading: Reading, electrons: number): string[] {
+  if (reading.evidence.length === 0) return [];
+  return [
+    `What speaks against this reading (score ${reading.score === null ? '-' : plain(reading.score, 1)}; lower is better)`,
+    ...aligned(reading.evidence.map(({ label, ...entry }) => [
+      plain(entry.penalty, 1).padStart(6), evidenceWords({ ...entry, label: label === '' ? '' : shownLabel(label, electrons) }),
+    ])),
+  ];
+}
+
+function rivalLines(chosen: Reading, rivals: readonly Reading[], electrons: number): string[] {
+  if (rivals.length === 0) return [];
+  return [
+    'Other readings of these bands',
+    ...aligned(rivals.map((rival) => [
+      rival.bands.map(({ label }) => shownLabel(label, electrons)).join(', ') + (rival.geometry === chosen.geometry ? '' : ` (${rival.geometry})`),
+      ...rival.parameters.slice(0, 2).map(({ name, value, uTotal }) => (value === null ? `${name} withheld` : `${name} ${concise(value, uTotal)}`)),
+      rival.verdict,
+      rival.ranking ?? '',
     ])),
   ];
 }

@@ -11,8 +11,8 @@ export function detailRows(key: Row, reading: Reading, electrons: number): Table
     })),
     helpful_band: reading.helpfulBands.flatMap(({ label, low, high, gains, sentence }, index) =>
       gains.map(({ parameter, uNow, uThen }) => ({ ...key, number: index + 1, parameter, label, low, high, u_now: uNow, u_then: uThen, sentence }))),
-    stress_pair: (reading.stress?.pairs ?? []).map(({ labels: [first, second], at }) => ({
-      ...key, first, second, Delta: at?.delta ?? null, B: at?.racahB ?? null,
+    stress_pair: (reading.stress?.pairs ?? []).map(({ labels: [first, second], bands: [one, other], at }) => ({
+      ...key, first_number: one + 1, second_number: other + 1, first, second, Delta: at?.delta ?? null, B: at?.racahB ?? null,
     })),
     stress_left_out: (reading.stress?.leftOut ?? []).map(({ label, at, predicted, z }, index) => ({
       ...key, number: index + 1, label, Delta: at?.delta ?? null, B: at?.racahB ?? null, C: at?.racahC ?? null, predicted, z,

@@ -70,22 +70,31 @@ export function collection(complexes: readonly ComplexRecord[]): Collection {
 export const handMadeReading: Reading = {
   verdict: 'untested', reason: 'No band is spare.', assignment: 'typed', geometry: 'octahedral', multiplicity: 4, ground: 'a4A2g',
   bands: [
-    { bands: [0], label: 'a4T2g', observed: 21550, uMinus: 60, uPlus: 60, uAssumed: false, floor: 150, used: true, calculated: 21550, residual: 0, gradient: { delta: 1, racahB: 0, racahC: 0 } },
-    { bands: [1, 2], label: 'a4T1g', observed: 28490, uMinus: 60, uPlus: 80, uAssumed: true, floor: 150, used: true, calculated: 28490.5, residual: -0.5, gradient: { delta: 1.2, racahB: 5.1, racahC: 0 } },
+    { bands: [0], label: 'a4T2g', observed: 21550, uMinus: 60, uPlus: 60, uAssumed: false, floor: 150, used: true, calculated: 21550, residual: 0, leverage: 1, gradient: { delta: 1, racahB: 0, racahC: 0 } },
+    { bands: [1, 2], label: 'a4T1g', observed: 28490, uMinus: 60, uPlus: 80, uAssumed: true, floor: 150, used: true, calculated: 28490.5, residual: -0.5, leverage: 1, gradient: { delta: 1.2, racahB: 5.1, racahC: 0 } },
   ],
   notFitted: [{ band: 3, reason: 'charge transfer' }],
   branches: [{ delta: 21550, racahB: 650.25, racahC: 2926, chi2: 0, chosen: true }, { delta: 21550, racahB: 1650, racahC: 7425, chi2: 0, chosen: false }],
   parameters: [
-    { name: 'Delta', value: 21550, u: 60, uTotal: 161.5, standing: 'fitted', reason: null },
-    { name: 'B', value: 650.25, u: 12, uTotal: 33, standing: 'fitted', reason: null },
-    { name: 'C', value: null, u: null, uTotal: null, standing: 'withheld', reason: 'C is assumed from C/B and never published.' },
-    { name: 'beta', value: 0.708, u: 0.013, uTotal: 0.036, standing: 'fitted', reason: null },
+    { name: 'Delta', value: 21550, u: 60, uTotal: 161.5, limits: null, standing: 'fitted', reason: null },
+    { name: 'B', value: 650.25, u: 12, uTotal: 33, limits: { low: 618, high: 685 }, standing: 'fitted', reason: null },
+    { name: 'C', value: null, u: null, uTotal: null, limits: null, standing: 'withheld', reason: 'C is assumed from C/B and never published.' },
+    { name: 'beta', value: 0.708, u: 0.013, uTotal: 0.036, limits: null, standing: 'fitted', reason: null },
   ],
   correlations: [{ first: 'B', second: 'Delta', value: -0.62 }],
   deltaOverB: 33.14, chi2: 0, bandsUsed: 2, spareBands: 0, rmsResidual: 0.35, ratio: { value: 4.5, u: 0.9, origin: 'policy' },
   predicted: [{ label: 'b4T1g', position: 44600, u: 700, spinAllowed: true, looked: 'outside' }],
   cautions: [{ code: 'NO_SPARE', text: 'No test is possible.' }],
   measureNext: 'nu3, expected near 44 600',
+  helpfulBands: [{ label: 'b4T1g', low: 43200, high: 46000, gains: [{ parameter: 'B', uNow: 33, uThen: 20 }], sentence: 'nu3, expected near 44 600' }],
+  score: 4, evidence: [{ code: 'parameters', penalty: 4, label: '', value: null }], ranking: null,
+  identifiability: { singularValues: [140, 12], rank: 2, combination: null },
+  stress: {
+    pairs: [{ labels: ['a4T2g', 'a4T1g'], at: { delta: 21550, racahB: 650.25, racahC: 2926 } }],
+    leftOut: [{ label: 'a4T1g', at: null, predicted: null, z: null }],
+  },
+  groundState: { crossing: null, stabilisationInDelta: -1.2, stabilisation: -25860 }, doubletOrder: null,
+  remarks: ['The ground level is stabilised by 1.2 Delta.'], sentence: 'Delta 21550(160) cm-1, B 650(33) cm-1; no test possible.',
 };
 
 /** Four bands that the hand-made reading speaks of. */
