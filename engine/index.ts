@@ -27,6 +27,8 @@ export type { Caution } from './cautions/types.ts';
 export type { ParameterName, Standing, Verdict } from './words/types.ts';
 // Readings: what comes out
 export { readMeasurement, readWithRivals } from './readings/read.ts';
+export { fitAssignment, isFit, ratioFor } from './readings/fit.ts';
+export type { Assigned } from './readings/fit.ts';
 export type {
   Branch, DoubletOrder, Evidence, EvidenceCode, GroundState, HelpfulBand, Identifiability, LeftOut, PairAlone, Parameter, PredictedBand, RatioUsed,
   Reading, ReadingBand, ReadMeasurement, Stress,

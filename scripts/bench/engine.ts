@@ -1,4 +1,5 @@
-import { freeIon, levels, readMeasurement } from '#engine';
+import { fitAssignment, freeIon, levels, ratioFor, readWithRivals, significant } from '#engine';
+import type { Assigned, Geometry, Reading } from '#engine';
 import type { Collection, MeasurementRecord } from '../content/types.ts';
 import { median, timed } from './stopwatch.ts';
 import type { Measured } from './stopwatch.ts';
@@ -18,19 +19,52 @@ export async function measureBlocks(): Promise<Measured[]> {
   return lines;
 }
 
-/** Complete readings a second on one core, once the level tables stand, and what the tables cost. */
+/** Complete fits and complete readings a second on one core, once the level tables stand, and what the first pass costs on top. */
 export async function measureReadings(collection: Collection): Promise<Measured[]> {
   const records = collection.complexes.flatMap(({ measurements }) => measurements);
   if (records.length === 0) return [];
-  const read = ({ engine, policy }: MeasurementRecord) => readMeasurement(engine, policy, freeIon(policy.freeIons, engine.ion));
-  const first = await timed(() => records.forEach(read));
-  // Enough passes for two seconds or so, so that the rate is not that of a cold compiler.
-  const passes: number[] = [];
-  while (passes.length < 3 || (passes.reduce((a, b) => a + b) < 2000 && passes.length < 50)) passes.push((await timed(() => records.forEach(read))).milliseconds);
-  const pass = median(passes);
-  const cases = new Set(records.map(({ engine }) => `${engine.ion.electrons} ${engine.geometry} ${engine.multiplicity}`)).size;
+  const first = await timed(() => records.map(read));
+  const tasks = records.flatMap((record, index) => taskOf(record, first.value[index]!.chosen));
+  const fits = await rate(tasks.length, () => tasks.forEach(fit));
+  const readings = await rate(records.length, () => records.forEach(read));
+  const kinds = new Set(tasks.map(({ ion }) => `${ion.electrons} ${ion.geometry} ${ion.multiplicity}`)).size;
+  const allThree = tasks.filter(({ fitted }) => fitted).length;
   return [
-    { name: 'readings', value: (1000 * records.length) / pass, unit: 'a second', over: `${records.length} measurements of ${cases} kinds of ion: assignment, all branches, covariance, predictions, cautions, words` },
-    { name: 'level tables', value: Math.max(0, first.milliseconds - pass) / cases, unit: 'ms each', over: `first pass less a later one, over ${cases} kinds of ion; the compiler's warming up is in it` },
+    { name: 'fits', value: fits, unit: 'a second', over: `${tasks.length} assignments of ${kinds} kinds of ion (${allThree} with C free): all branches and covariance, tables standing` },
+    { name: 'readings', value: readings, unit: 'a second', over: `${records.length} measurements: search for rivals, every fit, limits, predictions, words` },
+    {
+      name: 'first pass', value: first.milliseconds / (1000 * records.length / readings), unit: 'times',
+      over: `against a later one: what level tables and the compiler's warming up cost, ${significant(first.milliseconds - 1000 * records.length / readings, 3)} ms in all`,
+    },
   ];
+}
+
+interface Task {
+  readonly ion: { readonly electrons: number; readonly geometry: Geometry; readonly multiplicity: number };
+  readonly assigned: readonly Assigned[];
+  readonly record: MeasurementRecord;
+  /** C was fitted. */
+  readonly fitted: boolean;
+}
+
+const read = ({ engine, policy }: MeasurementRecord) => readWithRivals(engine, policy, freeIon(policy.freeIons, engine.ion));
+
+function fit({ ion, assigned, record: { engine, policy } }: Task): void {
+  fitAssignment(ion, assigned, policy, ratioFor(policy, engine.ion.name), freeIon(policy.freeIons, engine.ion));
+}
+
+// The chosen assignment of a measurement, to be fitted alone.
+function taskOf(record: MeasurementRecord, { geometry, multiplicity, bands, ratio }: Reading): Task[] {
+  if (geometry === null || multiplicity === null || bands.length === 0) return [];
+  const assigned = bands.map(({ label, observed, uMinus, uPlus, uAssumed, bands: members }) => ({
+    label, observation: { bands: members, position: observed, uMinus, uPlus, uAssumed },
+  }));
+  return [{ ion: { electrons: record.engine.ion.electrons, geometry, multiplicity }, assigned, record, fitted: ratio?.origin === 'fitted' }];
+}
+
+// Passes for two seconds or so, and the middle one of them, so that the rate is not that of a cold compiler.
+async function rate(count: number, work: () => void): Promise<number> {
+  const passes: number[] = [];
+  while (passes.length < 3 || (passes.reduce((a, b) => a + b) < 2000 && passes.length < 200)) passes.push((await timed(work)).milliseconds);
+  return (1000 * count) / median(passes);
 }

@@ -37,7 +37,8 @@ export function writeSampleDatabase(file: string, options: { readonly complexes?
   if (existsSync(file)) rmSync(file);
   const database = new Database(file);
   database.exec(readFileSync(resolve('scripts/database/schema.sql'), 'utf8'));
-  const put = (table: string, row: Readonly<Record<string, unknown>>): void => {
+  const put = (table: string, given: Readonly<Record<string, unknown>>): void => {
+    const row = { ...neutralValues(database, table), ...given };
     const keys = Object.keys(row);
     database.prepare(`INSERT INTO ${table} (${keys.join(', ')}) VALUES (${keys.map(() => '?').join(', ')})`).run(...Object.values(row));
   };
@@ -64,6 +65,14 @@ export function writeSampleDatabase(file: string, options: { readonly complexes?
   put('release', { id: '2026.1', doi: null, licence: 'CC-BY-4.0', policy: 'sample-0123abcd', complexes: SAMPLES.length, measurements: SAMPLES.length + 1 });
   database.close();
   return file;
+}
+
+/** 0 or empty text for columns that must hold something: what a test does not speak of need not be written in it. */
+function neutralValues(database: Database.Database, table: string): Readonly<Record<string, unknown>> {
+  const columns = database.prepare<[], { name: string; type: string; notnull: number; pk: number }>(`PRAGMA table_info(${table})`).all();
+  const { sql } = database.prepare<[string], { sql: string }>('SELECT sql FROM sqlite_schema WHERE name = ?').get(table)!;
+  return Object.fromEntries(columns.filter(({ notnull, pk }) => notnull === 1 && pk === 0)
+    .map(({ name, type }) => [name, type !== 'TEXT' ? 0 : sql.includes(`json_valid(${name})`) ? '[]' : '']));
 }
 
 function putComplex(put: (table: string, row: Readonly<Record<string, unknown>>) => void, sample: Sample, hostile: string | null): void {
