@@ -38,7 +38,8 @@ export function planePoints(members: readonly SeriesResult[]): readonly PlanePoi
 
 /**
  * Correlation of Delta with beta over a series. The null band refits every complex's bands, drawn anew at its own Delta and at the one
- * weighted mean beta; to first order that moves Delta and beta by their covariance, which is what is drawn here.
+ * weighted mean beta; to first order that moves Delta and beta by their covariance, which is what is drawn here. The Delta from which
+ * is drawn are first drawn together, so that with their errors anew they spread as the fitted ones do.
  *
  * @returns null below three points or where one of the two does not vary: there is no correlation to speak of
  */
@@ -48,12 +49,13 @@ export function planeCorrelation(members: readonly SeriesResult[], resampling: {
   if (points.length < 3 || r === null) return null;
   const weights = points.map(({ uBeta }) => 1 / uBeta ** 2);
   const mean = points.reduce((sum, { beta }, i) => sum + weights[i]! * beta, 0) / weights.reduce((a, b) => a + b);
+  const trueDeltas = withoutNoise(points);
   const random = seededRandom(resampling.seed);
   const drawn: number[] = [];
   for (let i = 0; i < resampling.draws; i++) {
-    const sample = points.map(({ delta, uDelta, uBeta, correlation }) => {
+    const sample = points.map(({ uDelta, uBeta, correlation }, place) => {
       const [a, b] = [random.normal(), random.normal()];
-      return [delta + uDelta * a, mean + uBeta * (correlation * a + Math.sqrt(Math.max(0, 1 - correlation ** 2)) * b)] as const;
+      return [trueDeltas[place]! + uDelta * a, mean + uBeta * (correlation * a + Math.sqrt(Math.max(0, 1 - correlation ** 2)) * b)] as const;
     });
     drawn.push(pearson(sample.map(([x]) => x), sample.map(([, y]) => y)) ?? 0);
   }
@@ -64,6 +66,15 @@ export function planeCorrelation(members: readonly SeriesResult[], resampling: {
     points, r, interval: enough ? fisherInterval(r, points.length) : null, leaveOneOut: enough ? leaveOneOutRange(points) : null,
     nullBand, withinNull: r >= nullBand.low && r <= nullBand.high,
   };
+}
+
+/** Every Delta moved towards their mean by so much as their uncertainties widen the spread. */
+function withoutNoise(points: readonly PlanePoint[]): readonly number[] {
+  const mean = points.reduce((sum, { delta }) => sum + delta, 0) / points.length;
+  const spread = points.reduce((sum, { delta }) => sum + (delta - mean) ** 2, 0);
+  const noise = points.reduce((sum, { uDelta }) => sum + uDelta ** 2, 0);
+  const share = Math.sqrt(Math.max(0, 1 - noise / spread));
+  return points.map(({ delta }) => mean + share * (delta - mean));
 }
 
 /** Pearson's r; null for fewer than two points or where a list does not vary. */

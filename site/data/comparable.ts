@@ -1,82 +1,98 @@
-import type { CollectionTree, ComplexNode, MeasurementNode, ReadingNode } from './tree.ts';
+import {
+  type ComplexIdentity, type Difference, type Geometry, type SeriesNumber, type SeriesParameter, type SeriesResult, type Subject,
+  conditionWords, difference, ionKey, ionSubject, ionWords, ligandSubject, parametersByName, temperatureReach, usedTransitions, usualSeries,
+} from '#engine';
 import { groupBy } from './group.ts';
+import { oncePerCollection } from './memo.ts';
+import type { ParameterRow } from './rows.ts';
+import type { CollectionTree, ComplexNode, MeasurementNode } from './tree.ts';
 
-/** Complexes of one ion, geometry and spin, or what was left out of them and why. */
+/** A measurement with its chosen reading as the engine compares it. */
+export interface Compared {
+  readonly node: MeasurementNode;
+  readonly result: SeriesResult;
+}
+
+/** Measurements that may stand in one series, what they share, and what was left out of it and why. */
 export interface Series {
   readonly members: readonly MeasurementNode[];
   readonly leftOut: readonly { readonly measurement: MeasurementNode; readonly reason: string }[];
-  /** What the members share, in words. */
   readonly conditions: string;
 }
 
-const ROOM = 295;
-const REACH = 50;
+/** Every measurement of the collection, ready to be compared. */
+const comparedResults = oncePerCollection((tree): ReadonlyMap<MeasurementNode, SeriesResult> =>
+  new Map(tree.complexes.flatMap((complex) => complex.measurements).map((node) => [node, seriesResultOf(node)])));
 
-/**
- * The measurements that may stand in one series: one number a complex, under the policy in force, in one phase class and
- * within 50 K of room temperature. The phase class with more complexes is taken (solution where equal). Of several
- * measurements of a complex the one with the smallest total uncertainty stands for it.
- * @param candidates measurements of like ion, geometry and spin
- */
-export function seriesOf(tree: CollectionTree, candidates: readonly MeasurementNode[], parameter: 'Delta' | 'beta'): Series {
-  const leftOut: { measurement: MeasurementNode; reason: string }[] = [];
-  const keep = (rest: readonly MeasurementNode[], holds: (m: MeasurementNode) => boolean, reason: (m: MeasurementNode) => string): readonly MeasurementNode[] =>
-    rest.filter((measurement) => {
-      const kept = holds(measurement);
-      if (!kept) leftOut.push({ measurement, reason: reason(measurement) });
-      return kept;
-    });
-  const value = (measurement: MeasurementNode) => measurement.chosen.parameters[parameter];
-  let rest = keep(candidates, (m) => value(m).value !== null, (m) => value(m).reason ?? 'withheld');
-  rest = keep(rest, (m) => m.row.policy === tree.policy.id, (m) => `fitted under another policy: ${m.row.policy_reason ?? m.row.policy}`);
-  rest = keep(rest, (m) => m.chosen.row.verdict !== 'refused', () => 'the reading is refused');
-  rest = keep(rest, (m) => !m.chosen.cautions.some((caution) => caution.code === 'JAHN_TELLER_ENVELOPE'), () => 'one envelope stands for a transition that a Jahn–Teller distortion splits');
-  const inSolution = new Set(rest.filter((m) => m.row.phase === 'solution').map((m) => m.complex.row.id));
-  const inSolid = new Set(rest.filter((m) => m.row.phase !== 'solution').map((m) => m.complex.row.id));
-  const solution = inSolution.size >= inSolid.size;
-  rest = keep(rest, (m) => (m.row.phase === 'solution') === solution, (m) => `other phase: ${m.row.phase}`);
-  rest = keep(rest, (m) => m.row.temperature_K !== null && Math.abs(m.row.temperature_K - ROOM) <= REACH,
-    (m) => m.row.temperature_K === null ? 'temperature not recorded' : 'more than 50 K from room temperature');
-  const best = new Map<string, MeasurementNode>();
-  for (const measurement of rest) {
-    const rival = best.get(measurement.complex.row.id);
-    if (rival === undefined || (value(measurement).u_total ?? Infinity) < (value(rival).u_total ?? Infinity)) best.set(measurement.complex.row.id, measurement);
-  }
-  rest = keep(rest, (m) => best.get(m.complex.row.id) === m, () => 'another measurement of the complex is better determined');
-  const members = [...rest].sort((a, b) => value(a).value! - value(b).value! || (a.complex.row.id < b.complex.row.id ? -1 : 1));
-  return { members, leftOut, conditions: `${solution ? 'solution' : 'solid'}, within 50 K of room temperature` };
+function seriesResultOf(node: MeasurementNode): SeriesResult {
+  const { row, chosen, complex } = node;
+  return {
+    complex: identity(complex), measurement: row.id, phase: row.phase as SeriesResult['phase'], temperature: row.temperature_K, policy: row.policy,
+    verdict: chosen.row.verdict as SeriesResult['verdict'],
+    parameters: parametersByName(Object.values(chosen.parameters).map(numberOf)),
+    correlation: chosen.correlations.find(({ first, second }) => first === 'Delta' && second === 'B')?.value ?? null,
+    transitions: usedTransitions(chosen.transitions.map(({ row: { label, used } }) => ({ label, used: used === 1 }))),
+    cautions: chosen.cautions.map(({ code }) => code),
+  };
 }
 
-/**
- * Standard uncertainty of a difference of two like results. The model's error is common to results from the same transitions
- * with the same standing of C, so it drops out there and the policy's differential floor stands in for what remains;
- * elsewhere total uncertainties are taken.
- */
-export function differenceU(tree: CollectionTree, a: ReadingNode, b: ReadingNode, parameter: 'Delta' | 'beta'): number | null {
-  const [first, second] = [a.parameters[parameter], b.parameters[parameter]];
-  if (first.value === null || second.value === null) return null;
-  const like = transitionsOf(a) === transitionsOf(b) && a.parameters.C.standing === b.parameters.C.standing;
-  if (like && first.u !== null && second.u !== null) {
-    const floor = parameter === 'Delta' ? tree.policy.differential_Delta : tree.policy.differential_B * (first.value + second.value) / 2;
-    return Math.hypot(first.u, second.u, floor);
-  }
-  return first.u_total === null || second.u_total === null ? null : Math.hypot(first.u_total, second.u_total);
+function numberOf({ name, value, u, u_total, standing, reason }: ParameterRow): SeriesNumber & { readonly name: ParameterRow['name'] } {
+  return { name, value, u, uTotal: u_total, standing: standing as SeriesNumber['standing'], reason };
 }
 
-function transitionsOf(reading: ReadingNode): string {
-  return reading.transitions.filter((transition) => transition.row.used === 1).map((transition) => transition.row.label).sort().join(' ');
+function identity({ row, ion, ligands, measurements }: ComplexNode): ComplexIdentity {
+  return {
+    id: row.id, formula: row.formula, geometry: row.fitted === 1 ? row.geometry as Geometry : null, geometryName: row.geometry, isomer: row.isomer,
+    // A complex has one spin state: where none was typed, that of its first measurement's reading.
+    multiplicity: row.multiplicity ?? measurements[0]?.chosen.row.multiplicity ?? null,
+    ion: { name: ion.name, metal: ion.metal, oxidation: ion.oxidation, electrons: ion.electrons, row: ion.shell as '3d' | '4d' | '5d' },
+    ligands: ligands.map(({ row: { ligand, count, bound } }) => ({ ligand, count, bound })),
+  };
 }
 
-/** Measurements of one ion, geometry and spin. */
-export interface Kind { readonly ion: string; readonly geometry: string; readonly spin: string | null; readonly measurements: readonly MeasurementNode[] }
+function series(tree: CollectionTree, nodes: readonly MeasurementNode[], parameter: SeriesParameter, subject: Subject): Series {
+  const known = comparedResults(tree);
+  const byResult = new Map(nodes.map((node) => [known.get(node)!, node]));
+  const { members, leftOut, frame } = usualSeries([...byResult.keys()], parameter, subject);
+  return {
+    members: members.map((result) => byResult.get(result)!),
+    leftOut: leftOut.map(({ result, reason }) => ({ measurement: byResult.get(result)!, reason })),
+    conditions: conditionWords(frame.phase, frame.temperature.near, temperatureReach, frame.temperature.orNotRecorded),
+  };
+}
 
-/** What complexes of one kind share, as a key. */
-export const kindKey = ({ row }: ComplexNode): string => `${row.ion}|${row.geometry}|${row.spin ?? ''}`;
+/** Measurements of one ion in one geometry and spin state. */
+export interface Kind {
+  /** As the addresses of figures use it, "cr-iii-octahedral-quartet". */
+  readonly key: string;
+  /** "Cr(III), octahedral, quartet" */
+  readonly words: string;
+  readonly ion: string;
+  readonly measurements: readonly MeasurementNode[];
+}
 
-export function kinds(measurements: readonly MeasurementNode[]): readonly Kind[] {
-  const groups = groupBy(measurements.filter((m) => m.complex.row.fitted === 1), ({ complex }) => kindKey(complex));
-  return [...groups.values()].map((members) => {
-    const { ion, geometry, spin } = members[0]!.complex.row;
-    return { ion, geometry, spin, measurements: members };
-  });
+/** Every ion of the collection in each fitted geometry and spin state. */
+export const kinds = oncePerCollection((tree): readonly Kind[] => {
+  const fitted = tree.complexes.filter(({ row }) => row.fitted === 1).flatMap((complex) => complex.measurements);
+  return [...groupBy(fitted, ({ complex }) => ionKey(identity(complex)))].map(([key, measurements]) => ({
+    key, words: ionWords(identity(measurements[0]!.complex)), ion: measurements[0]!.complex.ion.name, measurements,
+  }));
+});
+
+export const kindOf = (tree: CollectionTree, complex: ComplexNode): Kind | undefined => kinds(tree).find(({ key }) => key === ionKey(identity(complex)));
+
+/** The usual series by ligand set of one kind; the engine decides what is like. */
+export function seriesOfKind(tree: CollectionTree, { measurements }: Kind, parameter: SeriesParameter): Series {
+  return series(tree, measurements, parameter, ionSubject(identity(measurements[0]!.complex), tree.policy.id));
+}
+
+/** The usual series by metal of complexes that hold the same ligands in one geometry. */
+export function seriesByMetal(tree: CollectionTree, complexes: readonly ComplexNode[], parameter: SeriesParameter): Series {
+  return series(tree, complexes.flatMap((complex) => complex.measurements), parameter, ligandSubject(identity(complexes[0]!), tree.policy.id));
+}
+
+/** First less second, with the uncertainty that belongs to it; null where one is withheld. */
+export function differenceOf(tree: CollectionTree, first: MeasurementNode, second: MeasurementNode, parameter: SeriesParameter): Difference | null {
+  const known = comparedResults(tree);
+  return difference(known.get(first)!, known.get(second)!, parameter, { delta: tree.policy.differential_Delta, racahB: tree.policy.differential_B });
 }

@@ -44,6 +44,8 @@ export interface ComplexPage {
   readonly diagram: PlaceOnDiagram | null;
   readonly quotes: readonly Quote[];
   readonly record: { readonly file: string; readonly hash: string };
+  /** Each measurement's result as one would write it. */
+  readonly sentences: readonly Parts[];
   readonly citation: Parts;
   readonly report: { readonly text: string; readonly address: string | null };
 }
@@ -66,6 +68,7 @@ export function complexPage(tree: CollectionTree, complex: ComplexNode): Complex
     measurements: complex.measurements.map((measurement) => measurementShown(tree, measurement)),
     cautions: cautions(complex), neighbours: neighbours(tree, complex), diagram: placeOnDiagram(tree, complex), quotes: quotes(tree, complex),
     record: { file: row.file, hash: row.hash },
+    sentences: complex.measurements.filter(({ chosen }) => chosen.row.sentence !== '').map(({ chosen }) => sentenceShown(chosen.row.sentence)),
     citation: citation(tree, complex), report: report(tree, complex),
   };
 }

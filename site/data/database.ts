@@ -6,7 +6,7 @@ import type { Rows } from './rows.ts';
 
 const TABLES: readonly (keyof Rows)[] = [
   'meta', 'person', 'policy', 'ion', 'free_ion', 'source', 'ligand', 'complex', 'complex_ligand', 'measurement', 'observed_range',
-  'band', 'quoted', 'reading', 'reading_band', 'reading_band_member', 'not_fitted', 'branch', 'parameter', 'correlation',
+  'band', 'quoted', 'reading', 'reading_band', 'reading_band_member', 'not_fitted', 'branch', 'stress_left_out', 'parameter', 'correlation',
   'predicted_band', 'caution', 'hazard_override',
 ];
 

@@ -2,7 +2,7 @@ import { levels } from '#engine';
 import { levelScheme } from '../charts/levelScheme.ts';
 import type { FigureShown } from './figure.ts';
 import { type ParameterShown, difference, energy, energyTwoSided, figures, nanometres, parameterShown, ratio } from './show.ts';
-import { type Cell, type Table, column, quantity, rowColumn, soft, words } from './table.ts';
+import { type Cell, type Table, column, longColumn, quantity, rowColumn, soft, words } from './table.ts';
 import type { MeasurementNode } from './tree.ts';
 import { type Parts, sentenceShown, termShown } from './typeset.ts';
 
@@ -21,6 +21,12 @@ export interface MeasurementMeaning {
   readonly facts: readonly { readonly name: Parts; readonly value: string }[];
   readonly branches: Table | null;
   readonly predicted: Table | null;
+  /** Sentences on the ground level and the order of levels. */
+  readonly remarks: readonly Parts[];
+  readonly leftOut: Table | null;
+  readonly rivals: Table | null;
+  /** The result as one would write it. */
+  readonly sentence: Parts;
 }
 
 const ASSIGNMENT: Readonly<Record<string, string>> = {
@@ -39,6 +45,8 @@ export function measurementMeaning(measurement: MeasurementNode, id: string): Me
     allWithheld: allWithheld(measurement), scheme: scheme(measurement, id),
     reason: sentenceShown(row.reason), measureNext: row.measure_next === null ? null : sentenceShown(row.measure_next),
     facts: facts(measurement), branches: branchTable(measurement), predicted: predictedTable(measurement),
+    remarks: (JSON.parse(row.remarks) as string[]).map(sentenceShown), leftOut: leftOutTable(measurement), rivals: rivalTable(measurement),
+    sentence: sentenceShown(row.sentence),
   };
 }
 
@@ -126,3 +134,35 @@ function predictedTable({ chosen, complex }: MeasurementNode): Table | null {
     ]),
   };
 }
+
+function leftOutTable({ chosen, complex }: MeasurementNode): Table | null {
+  const rows = chosen.leftOut.filter((row) => row.Delta !== null || row.predicted !== null);
+  if (rows.length === 0) return null;
+  const none = soft('not fixed');
+  return {
+    caption: 'Each band left out: what the others give, and where they put it',
+    columns: [rowColumn('Without'), quantity('Δ', 'cm-1'), quantity('B', 'cm-1'), quantity('predicted', 'cm-1', true), quantity('z', null)],
+    rows: rows.map((row) => [
+      { parts: termShown(row.label, complex.ion.electrons) }, row.Delta === null ? none : ratio(row.Delta, 0), row.B === null ? none : ratio(row.B, 0),
+      row.predicted === null ? none : energy(row.predicted, null), row.z === null ? none : ratio(row.z, 1),
+    ]),
+  };
+}
+
+function rivalTable({ rivals, complex, chosen }: MeasurementNode): Table | null {
+  if (rivals.length === 0) return null;
+  return {
+    caption: 'Other readings of these bands',
+    columns: [rowColumn('Assignment'), quantity('Δ', 'cm-1'), quantity('B', 'cm-1'), longColumn('Where it ranks')],
+    rows: rivals.map(({ row, transitions, parameters }): readonly Cell[] => [
+      { parts: [
+        ...transitions.flatMap((transition, index) => [...(index > 0 ? words(', ') : []), ...termShown(transition.row.label, complex.ion.electrons), ...words(` ${energy(transition.row.observed, null)}`)]),
+        ...(row.geometry !== null && row.geometry !== chosen.row.geometry ? words(` (${row.geometry})`) : []),
+        ...(row.multiplicity !== null && row.multiplicity !== chosen.row.multiplicity ? words(` (multiplicity ${row.multiplicity})`) : []),
+      ] },
+      rounded(parameters.Delta.value), rounded(parameters.B.value), { parts: sentenceShown(row.ranking ?? 'not ranked') },
+    ]),
+  };
+}
+
+const rounded = (value: number | null): Cell => value === null ? soft('withheld') : ratio(Math.round(value / 10) * 10, 0);

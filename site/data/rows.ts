@@ -60,7 +60,9 @@ export interface ReadingRow extends OfMeasurement {
   readonly Delta_over_B: number | null; readonly chi2: number | null; readonly bands_used: number; readonly spare_bands: number; readonly rms_residual: number | null;
   readonly C_over_B: number | null; readonly C_over_B_u: number | null; readonly C_over_B_origin: string | null;
   readonly free_ion_set: string; readonly policy: string; readonly measure_next: string | null;
+  readonly score: number | null; readonly ranking: string | null; readonly remarks: string; readonly sentence: string;
 }
+export interface StressLeftOutRow extends OfReading { readonly number: number; readonly label: string; readonly Delta: number | null; readonly B: number | null; readonly predicted: number | null; readonly z: number | null }
 export interface ReadingBandRow extends OfReading {
   readonly number: number; readonly label: string; readonly observed: number; readonly u_minus: number; readonly u_plus: number;
   readonly u_assumed: Flag; readonly floor: number; readonly used: Flag; readonly calculated: number | null; readonly residual: number | null;
@@ -100,6 +102,7 @@ export interface Rows {
   readonly reading_band_member: readonly ReadingBandMemberRow[];
   readonly not_fitted: readonly NotFittedRow[];
   readonly branch: readonly BranchRow[];
+  readonly stress_left_out: readonly StressLeftOutRow[];
   readonly parameter: readonly ParameterRow[];
   readonly correlation: readonly CorrelationRow[];
   readonly predicted_band: readonly PredictedBandRow[];

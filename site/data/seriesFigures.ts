@@ -1,6 +1,7 @@
 import { newDocument } from '../charts/plot.ts';
 import { type SeriesPoint, seriesFigure } from '../charts/seriesFigure.ts';
-import { type Kind, type Series, kinds, seriesOf } from './comparable.ts';
+import { type SeriesParameter as Name, seriesParameters } from '#engine';
+import { type Series, kinds, seriesByMetal, seriesOfKind } from './comparable.ts';
 import { csvText } from '../../scripts/export/csv.ts';
 import { type PublishedFigure, figureFiles } from './figure.ts';
 import { compareIons } from './collection.ts';
@@ -11,8 +12,6 @@ import { type Cell, type Column, type Table, column, quantity, rowColumn, soft }
 import type { CollectionTree, MeasurementNode } from './tree.ts';
 import type { Parts } from './typeset.ts';
 import { groupBy } from './group.ts';
-
-type Name = 'Delta' | 'beta';
 
 const SYMBOL: Readonly<Record<Name, { readonly column: Column; readonly words: string }>> = {
   Delta: { column: quantity('Δ', 'cm-1'), words: 'Field splitting Δ' },
@@ -27,29 +26,22 @@ export interface SeriesShown {
 }
 
 /** Delta and beta by ligand set, for each geometry and spin of an ion that has two or more complexes to compare. */
-export const ionSeries = oncePerCollection((tree, ion): readonly SeriesShown[] => {
-  const own = tree.complexes.filter((complex) => complex.ion.name === ion).flatMap((complex) => complex.measurements);
-  return kinds(own).flatMap((kind) => (['Delta', 'beta'] as const).flatMap((name) => {
-    const series = seriesOf(tree, kind.measurements, name);
+export const ionSeries = oncePerCollection((tree, ion): readonly SeriesShown[] =>
+  kinds(tree).filter((kind) => kind.ion === ion).flatMap((kind) => seriesParameters.flatMap((name) => {
+    const series = seriesOfKind(tree, kind, name);
     if (series.members.length < 2) return [];
-    const where = kindWords(kind);
-    return [shownSeries(tree, series, name, `${ionSlug(ion)}-${kind.geometry}${kind.spin ? `-${kind.spin}` : ''}-${name.toLowerCase()}`,
-      `${SYMBOL[name].words} of ${where} by ligand set.`, (m) => m.complex.formula.parts)];
-  }));
-});
-
-export const kindWords = ({ ion, geometry, spin }: Kind): string => `${geometry} ${ion}${spin ? `, ${spin}` : ''}`;
+    return [shownSeries(tree, series, name, `${ionSlug(kind.key)}-${name.toLowerCase()}`, `${SYMBOL[name].words} of ${kind.words}, by ligand set.`, (m) => m.complex.formula.parts)];
+  })));
 
 /** Delta and beta by metal ion for complexes that hold one kind of ligand only, octahedral and tetrahedral apart. */
 export const ligandSeries = oncePerCollection((tree, ligand): readonly SeriesShown[] => {
   const alone = tree.complexes.filter((complex) => complex.row.fitted === 1 && complex.ligands.length === 1 && complex.ligands[0]!.row.ligand === ligand);
-  return [...groupBy(alone, (complex) => complex.row.geometry)].flatMap(([geometry, complexes]) => (['Delta', 'beta'] as const).flatMap((name) => {
-    const each = kinds(complexes.flatMap((complex) => complex.measurements)).map((kind) => seriesOf(tree, kind.measurements, name));
-    const members = each.flatMap((series) => series.members).sort((a, b) => compareIons(a.complex, b.complex));
+  return [...groupBy(alone, (complex) => complex.row.geometry)].flatMap(([geometry, complexes]) => seriesParameters.flatMap((name) => {
+    const series = seriesByMetal(tree, complexes, name);
+    const members = [...series.members].sort((a, b) => compareIons(a.complex, b.complex));
     if (members.length < 2) return [];
-    const series: Series = { members, leftOut: each.flatMap((one) => one.leftOut), conditions: [...new Set(each.filter((one) => one.members.length > 0).map((one) => one.conditions))].join('; ') };
     const text = tree.ligands.find((row) => row.id === ligand)!.name;
-    return [shownSeries(tree, series, name, `ligand-${ligand}-${geometry}-${name.toLowerCase()}`, `${SYMBOL[name].words} of ${geometry} complexes with ${text} alone, by metal ion.`,
+    return [shownSeries(tree, { ...series, members }, name, `ligand-${ligand}-${geometry}-${name.toLowerCase()}`, `${SYMBOL[name].words} of ${geometry} complexes with ${text} alone, by metal ion.`,
       (m) => [{ text: m.complex.ion.name, style: 'plain' }, ...(m.complex.row.spin ? [{ text: ` ${m.complex.row.spin}`, style: 'plain' as const }] : [])])];
   }));
 });

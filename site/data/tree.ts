@@ -10,6 +10,8 @@ export interface ReadingNode {
   /** Reason by band number. */
   readonly notFitted: ReadonlyMap<number, string>;
   readonly branches: readonly R.BranchRow[];
+  /** The fit with each band left out. */
+  readonly leftOut: readonly R.StressLeftOutRow[];
   readonly parameters: Readonly<Record<R.ParameterRow['name'], R.ParameterRow>>;
   readonly correlations: readonly R.CorrelationRow[];
   readonly predicted: readonly R.PredictedBandRow[];
@@ -113,6 +115,7 @@ function readingNodes(rows: Rows): (key: string) => readonly ReadingNode[] {
   const members = grouped(rows.reading_band_member, (row) => `${ofReading(row)}:${row.reading_band}`);
   const notFitted = grouped(rows.not_fitted, ofReading);
   const branches = grouped(rows.branch, ofReading);
+  const leftOut = grouped(rows.stress_left_out, ofReading);
   const parameters = grouped(rows.parameter, ofReading);
   const correlations = grouped(rows.correlation, ofReading);
   const predicted = grouped(rows.predicted_band, ofReading);
@@ -126,7 +129,7 @@ function readingNodes(rows: Rows): (key: string) => readonly ReadingNode[] {
         bands: members(`${key}:${transition.number}`).map((member) => found(bands, `${ofMeasurement(row)}#${member.band}`)),
       })),
       notFitted: new Map(notFitted(key).map(({ band, reason }) => [band, reason])),
-      branches: branches(key),
+      branches: branches(key), leftOut: leftOut(key),
       parameters: Object.fromEntries(parameters(key).map((parameter) => [parameter.name, parameter])) as ReadingNode['parameters'],
       correlations: correlations(key), cautions: cautions(key),
       predicted: [...predicted(key)].sort((a, b) => a.position - b.position),

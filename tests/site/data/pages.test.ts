@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
 import { collectionPage, collectionPages, orderedResults } from '../../../site/data/collection.ts';
-import { differenceU, kinds, seriesOf } from '../../../site/data/comparable.ts';
+import { differenceOf, kinds, seriesOfKind } from '../../../site/data/comparable.ts';
 import { complexPage } from '../../../site/data/complex.ts';
 import { letterKey, ionDiagrams } from '../../../site/data/diagram.ts';
 import { dataPage } from '../../../site/data/downloads.ts';
@@ -72,18 +72,20 @@ test('the complex is named from its ligands where the record gives no name', () 
 });
 
 test('a series keeps to one phase and says what it left out', () => {
-  const chromium = kinds(orderedResults(tree)).find(({ ion }) => ion === 'Cr(III)')!;
-  const series = seriesOf(tree, chromium.measurements, 'Delta');
+  const chromium = kinds(tree).find(({ ion }) => ion === 'Cr(III)')!;
+  const series = seriesOfKind(tree, chromium, 'Delta');
+  expect(chromium.words).toBe('Cr(III), octahedral, quartet');
+  expect(series.conditions).toBe('solution, within 50 K of 295 K');
   expect(series.members.map(({ complex: { row } }) => row.id)).toEqual(['cr-aq6', 'cr-cl2-en2', 'cr-am6', 'cr-en3']);
-  expect(series.leftOut.map(({ measurement, reason }) => `${measurement.row.id}: ${reason}`)).toEqual(['solid-77: other phase: crystal']);
+  expect(series.leftOut.map(({ measurement, reason }) => `${measurement.row.id}: ${reason}`)).toEqual(['solid-77: another phase: crystal']);
 });
 
 test('like results are compared by their readings and the differential floor, unlike ones by total uncertainties', () => {
-  const [water, ammine, ethylene] = ['cr-aq6', 'cr-am6', 'cr-en3'].map((id) => complex(id).measurements[0]!.chosen) as [never, never, never];
-  expect(differenceU(tree, water, ethylene, 'Delta')).toBeCloseTo(Math.hypot(58, 58, 50), 9);
-  const other = complex('cr-cl2-en2').measurements[0]!.chosen;
-  expect(differenceU(tree, water, other, 'Delta')).toBeCloseTo(Math.hypot(162, 162), 9);
-  expect(differenceU(tree, water, ammine, 'beta')).not.toBeNull();
+  const [water, ammine, ethylene, mixed] = ['cr-aq6', 'cr-am6', 'cr-en3', 'cr-cl2-en2'].map((id) => complex(id).measurements[0]!) as [never, never, never, never];
+  expect(differenceOf(tree, ethylene, water, 'Delta')).toMatchObject({ value: 4590, u: expect.closeTo(Math.hypot(58, 58, 50), 6), distinguishable: true });
+  expect(differenceOf(tree, mixed, water, 'Delta')!.u).toBeCloseTo(Math.hypot(162, 162), 6);
+  expect(differenceOf(tree, water, ammine, 'beta')).not.toBeNull();
+  expect(differenceOf(tree, water, complex('ti-aq6').measurements[0]!, 'beta')).toBeNull();
 });
 
 test('neighbours closer than two uncertainties of the difference are not distinguishable', () => {
