@@ -17,12 +17,15 @@ export type { FreeIon, FreeIonSetName, Geometry, Ion } from './ions/types.ts';
 export { defaultPolicy, policyId } from './policy/policy.ts';
 export type { Estimate, FloorClass, Policy } from './policy/types.ts';
 // Measurements: what goes in
+export { bandUncertainty } from './measurement/defaultUncertainty.ts';
 export type { Band, BandKind, BandRole, Measurement } from './measurement/types.ts';
 export type { Range } from './quantity/range.ts';
 // Cautions and words
+export { cautionMeanings } from './cautions/catalogue.ts';
 export { complexCautions } from './cautions/ofComplex.ts';
 export { evidenceWords } from './words/ranking.ts';
 export type { ComplexFacts, MeasurementFacts } from './cautions/ofComplex.ts';
+export type { CautionMeaning, CautionSubject } from './cautions/catalogue.ts';
 export type { Caution } from './cautions/types.ts';
 export type { ParameterName, Standing, Verdict } from './words/types.ts';
 // Readings: what comes out
@@ -35,6 +38,8 @@ export type {
 } from './readings/types.ts';
 export { auditQuoted, disagreesFrom } from './readings/audit.ts';
 export { fewestSpare, floorFactor } from './readings/kappa.ts';
+export { absorptivityLimits, evidenceWeights, usualAbsorptivities, usualBeta, widthLimits } from './readings/evidenceWeights.ts';
+export { equalWithin, strainedBelow } from './readings/verdictLimits.ts';
 export type { AuditRow, Quoted } from './readings/audit.ts';
 export type { FloorFactor, ResidualRow } from './readings/kappa.ts';
 // Series: what may be compared
@@ -43,7 +48,7 @@ export { byIon, ionSubject, ligandSubject, roomTemperature, selectComparable, te
 export { difference, differenceBasis, distinguishableAbove } from './series/difference.ts';
 export { complexKey, ionKey, ionWords, ligandSetKey, measurementId, onlyLigand, phaseClass, spinName } from './series/identity.ts';
 export { indistinguishableGroups } from './series/groups.ts';
-export { parametersByName, seriesResult, usedTransitions } from './series/summary.ts';
+export { comparisonCautions, parametersByName, seriesResult, usedTransitions } from './series/summary.ts';
 export { seriesParameters } from './series/types.ts';
 export type { BoundLigand, ComplexIdentity, PhaseClass, SeriesLigand, SeriesNumber, SeriesParameter, SeriesResult } from './series/types.ts';
 export type { Comparable, Frame, NotCompared, Subject } from './series/comparable.ts';
@@ -97,6 +102,13 @@ export type { Wavenumber } from './quantity/convert.ts';
 export type { Allowance } from './quantity/parse.ts';
 export type { ConciseParts, PrintForm } from './quantity/print.ts';
 export type { Coverage, ParsedQuantity, Quantity, QuantityCode, QuantityFault, Unit, Wanted } from './quantity/types.ts';
+// The text of a record
+export { bandFields, complexFields, measurementFields, quotedFields } from './record/order.ts';
+export { recordText } from './record/recordText.ts';
+export { quotedText, typedText } from './record/quote.ts';
+export { slug, suggestedId, suggestedMeasurementId } from './record/suggestedId.ts';
+export type { RecordTextOptions } from './record/recordText.ts';
+export type { Typed, TypedBand, TypedComplex, TypedLigandCount, TypedMeasurement, TypedOverride, TypedQuoted, TypedSource } from './record/types.ts';
 // Hazard cautions
 export { hazardCautions, hazardCodes, hazardFooter } from './cautions/hazards.ts';
 export type { HazardCaution, HazardSubject } from './cautions/hazards.ts';

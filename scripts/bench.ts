@@ -8,6 +8,7 @@ import { readArguments } from './arguments.ts';
 import type { CommandTable } from './arguments.ts';
 import { measurePages, measureRefit, prepareCollection } from './bench/collection.ts';
 import { measureBlocks, measureReadings } from './bench/engine.ts';
+import { measureSeries } from './bench/series.ts';
 import { measureStartUp } from './bench/startUp.ts';
 import type { Measured } from './bench/stopwatch.ts';
 import { exitCodes } from './exitCodes.ts';
@@ -40,6 +41,7 @@ await runCommand(table.name, async () => {
     const prepared = await prepareCollection(folder, Number(typed));
     add(prepared.lines);
     add(await measureReadings(prepared.collection));
+    add(await measureSeries());
     add(await measureRefit(folder));
     if (!given.has('without-pages')) add(await measurePages(folder, prepared.collection));
     add(await measureStartUp());

@@ -6,12 +6,15 @@ import type { CommandTable } from './arguments.ts';
 import { refit } from './database/refit.ts';
 import { exitCodes } from './exitCodes.ts';
 import { writeExports } from './export/writeExports.ts';
+import { writeRecords } from './export/writeRecords.ts';
+import { writeSiteFiles } from './export/writeSiteFiles.ts';
 import { cacheFile, places } from './places.ts';
 import { addressOf } from './publish/address.ts';
 import { buildPages, countPages } from './publish/pages.ts';
 import { swapFolder } from './publish/swapFolder.ts';
 import { counted } from './report/columns.ts';
 import { progressLine } from './report/progress.ts';
+import { writeTombstones } from './release/tombstones.ts';
 import { stoppedByFaults } from './report/stoppedByFaults.ts';
 import { duration, refitFacts, refitLines } from './report/summary.ts';
 import { runCommand } from './runCommand.ts';
@@ -45,6 +48,8 @@ await runCommand(table.name, async () => {
   await swapFolder(out, async (folder) => {
     await buildPages(database, addressOf(result.refit.collection.group.url), folder);
     writeExports(database, join(folder, 'data'));
+    writeRecords(database, content, folder);
+    writeSiteFiles(database, folder, writeTombstones(database, folder));
   });
   if (process.stderr.isTTY) process.stderr.write('\r\u001b[K');
 

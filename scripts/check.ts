@@ -3,10 +3,10 @@
 import { readArguments } from './arguments.ts';
 import type { CommandTable } from './arguments.ts';
 import { writeManual } from './content/manual/write.ts';
-import { readCollection } from './content/readCollection.ts';
 import type { Collection } from './content/types.ts';
 import { exitCodes } from './exitCodes.ts';
 import { places } from './places.ts';
+import { readContent } from './release/readContent.ts';
 import { faultReport, folderName } from './report/faults.ts';
 import { runCommand } from './runCommand.ts';
 
@@ -28,7 +28,7 @@ await runCommand(table.name, () => {
     process.stdout.write(`Renewed ${writeManual(directory).join(' and ')}.\n`);
     return exitCodes.good;
   }
-  const { collection, faults, filesRead } = readCollection(directory);
+  const { collection, faults, filesRead } = readContent(directory);
   const folder = folderName(directory);
   if (given.has('json')) process.stdout.write(`${JSON.stringify({ ok: collection !== null, content: folder, filesRead, faults }, null, 2)}\n`);
   else process.stdout.write(collection === null ? faultReport(faults, folder) : summary(collection, filesRead, folder));

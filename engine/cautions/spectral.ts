@@ -11,6 +11,8 @@ export interface SpectralFacts {
   readonly row: '3d' | '4d' | '5d';
   /** The ground level is orbitally degenerate in e (strong Jahn-Teller) and one band stands for the split transition. */
   readonly jahnTellerEnvelope: boolean;
+  /** A tetrahedral ion with a T2 ground level (d4, d9), whose one band is taken for that of an undistorted site. */
+  readonly tetrahedronDistorts: boolean;
   readonly twoElectronBandUsed: string | null;
   /** u(B, total)/B where B is published. */
   readonly relativeUB: number | null;
@@ -27,6 +29,10 @@ export interface SpectralFacts {
   readonly uBeta: number | null;
   readonly groundNearCrossing: boolean;
   readonly ratioAtEdge: boolean;
+  /** Ratios of spin-allowed bands that no Delta and B give, as printed: "4A2g/4T2g = 1.98 (2.00 to 2.25)". */
+  readonly ratiosOutside: readonly string[];
+  /** B is published of octahedral low-spin d4, d5 or d7. */
+  readonly sparseLowSpin: boolean;
   /** 3T1 and 1E of octahedral Ni(II) closer than this reading can tell, cm-1 apart; null where not octahedral d8. */
   readonly singletGap: number | null;
   readonly octahedralCobaltTwo: boolean;
@@ -67,13 +73,16 @@ export function spectralCautions(facts: SpectralFacts): readonly Caution[] {
   add(facts.groundNearCrossing, 'SPIN_NEAR_CROSSING', 'At these parameters the declared spin state is the ground state only within the range of an assumed value.');
   add(facts.equallyGoodBranch, 'SECOND_SOLUTION', 'Another pair of Delta and B fits these bands as well; both are listed.');
   add(facts.ratioAtEdge, 'BAND_RATIO_AT_EDGE', 'The ratio of the bands lies at the edge of what the model allows: B would fall to zero, so it is withheld.');
+  add(facts.ratiosOutside.length > 0, 'BAND_RATIO_OUTSIDE', `The ratio of these bands lies outside what the model allows at any Delta and B: ${facts.ratiosOutside.join('; ')}.`);
   add(facts.twoElectronBandUsed !== null, 'TWO_ELECTRON_BAND', `${facts.twoElectronBandUsed} is a two-electron band: a model with one B places it several hundred cm⁻¹ wrong, which its larger floor allows for.`);
   add(facts.relativeUB !== null && facts.relativeUB > 0.1, 'LOOSE_B', `B is loose: its uncertainty is ${perCent(facts.relativeUB ?? 0)} of its value.`);
+  add(facts.sparseLowSpin, 'SPARSE_LOW_SPIN', 'Several transitions of a low-spin d4, d5 or d7 ion lie under each band: B rests on which one each was taken for.');
   add(facts.coverageNotStated, 'COVERAGE_NOT_STATED', 'An uncertainty was typed as plain plus-minus; it is taken as one standard uncertainty.');
   add(facts.singletGap !== null && Math.abs(facts.singletGap) < singletReach, 'SINGLET_NEAR_TRIPLET', '1Eg lies within reach of 3T1g: spin–orbit coupling mixes them, and neither hump need be the spin-allowed band itself.');
   add(facts.octahedralCobaltTwo, 'COBALT_GROUND_TERM', 'The ground term of octahedral Co(II) is split by spin–orbit coupling: bands read from its lowest level lie several hundred cm⁻¹ high.');
   add(facts.row !== '3d', 'HEAVY_METAL', `Spin–orbit coupling of a ${facts.row} ion is not in this model.`);
   add(facts.jahnTellerEnvelope, 'JAHN_TELLER_ENVELOPE', 'One band stands for a transition that a Jahn–Teller distortion splits: Delta is apparent and kept out of series.');
+  add(facts.tetrahedronDistorts, 'TETRAHEDRON_DISTORTS', 'A tetrahedral d4 or d9 ion is seldom undistorted: its site is mostly flattened, and Delta is then not that of a tetrahedron.');
   add(facts.componentsMerged, 'COMPONENTS_AVERAGED', 'Components of one term enter as their barycentre weighted by degeneracy.');
   add(facts.componentWithoutDegeneracy, 'COMPONENT_ORDER_OPEN', 'The order of the components is not decided, so they have no barycentre and stay out of the fit.');
   add(facts.roughBandCarriesFit !== null, 'ROUGH_BAND_CARRIES_FIT', `More than half of the fit hangs on ${facts.roughBandCarriesFit}, which was read as a shoulder or envelope or was rounded.`);

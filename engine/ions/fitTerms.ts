@@ -1,4 +1,4 @@
-import { Matrix, QrDecomposition } from 'ml-matrix';
+import { inversePositive } from '../linear/solveSymmetric.ts';
 import { termEnergies } from './termFormulas.ts';
 import type { Term } from './terms.ts';
 
@@ -29,14 +29,16 @@ export function fitTerms(electrons: number, terms: readonly Term[]): TermFit {
   let [racahB, racahC, offset] = [900, 3600, 0];
   for (let step = 0; step < maximumSteps; step += 1) {
     const rows = compare(electrons, terms, racahB, racahC, offset);
-    const jacobian = new Matrix(rows.map(({ gradient }) => [gradient.racahB, gradient.racahC, 1]));
-    const decomposition = new QrDecomposition(jacobian);
-    if (!hasFullRank(decomposition)) throw new RangeError(`fitTerms: the ${terms.length} terms of d${electrons} do not fix B and C`);
-    const change = decomposition.solve(Matrix.columnVector(rows.map(({ residual }) => residual)));
-    racahB += change.get(0, 0);
-    racahC += change.get(1, 0);
-    offset += change.get(2, 0);
-    if (Math.abs(change.get(0, 0)) + Math.abs(change.get(1, 0)) < 1e-8) {
+    const slopes = rows.map(({ gradient }) => [gradient.racahB, gradient.racahC, 1]);
+    const normal = [0, 1, 2].map((i) => [0, 1, 2].map((j) => slopes.reduce((sum, row) => sum + row[i]! * row[j]!, 0)));
+    const inverse = inversePositive(normal);
+    if (!inverse || isSingular(normal, inverse)) throw new RangeError(`fitTerms: the ${terms.length} terms of d${electrons} do not fix B and C`);
+    const right = [0, 1, 2].map((i) => slopes.reduce((sum, row, k) => sum + row[i]! * rows[k]!.residual, 0));
+    const [changeB, changeC, changeOffset] = inverse.map((row) => row.reduce((sum, value, j) => sum + value * right[j]!, 0)) as [number, number, number];
+    racahB += changeB;
+    racahC += changeC;
+    offset += changeOffset;
+    if (Math.abs(changeB) + Math.abs(changeC) < 1e-8) {
       const residuals = compare(electrons, terms, racahB, racahC, offset).map(({ residual }) => residual);
       return { racahB, racahC, offset, residuals, rms: Math.sqrt(residuals.reduce((sum, r) => sum + r * r, 0) / residuals.length) };
     }
@@ -44,10 +46,9 @@ export function fitTerms(electrons: number, terms: readonly Term[]): TermFit {
   throw new RangeError(`fitTerms: no convergence in ${maximumSteps} steps for the ${terms.length} terms of d${electrons}`);
 }
 
-/** The coefficients are small numbers of like size, so a pivot below 1e-9 of the largest is a rounded zero. */
-function hasFullRank(decomposition: QrDecomposition): boolean {
-  const pivots = decomposition.upperTriangularMatrix.diagonal().map(Math.abs);
-  return Math.min(...pivots) > 1e-9 * Math.max(...pivots);
+/** A parameter that others can stand in for has a variance inflation (N_ii times its inverse's N_ii) beyond all rounding. */
+function isSingular(normal: readonly (readonly number[])[], inverse: readonly (readonly number[])[]): boolean {
+  return normal.some((row, i) => row[i]! * inverse[i]![i]! > 1e12);
 }
 
 function compare(electrons: number, terms: readonly Term[], racahB: number, racahC: number, offset: number) {

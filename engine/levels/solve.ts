@@ -1,4 +1,4 @@
-import { symmetricEigen } from '../linear/symmetricEigen.ts';
+import { eigenInPlace, symmetricEigen } from '../linear/symmetricEigen.ts';
 import type { Block } from '../shell/blocks.ts';
 
 /**
@@ -37,20 +37,14 @@ export function clusters(values: ArrayLike<number>, tolerance: number): [number,
   return found;
 }
 
-/** Eigenvectors of one block at one point, column k belonging to its k-th level. */
+/** One block at one point: energies ascending, eigenvector k in column k. */
 export interface Diagonal {
+  readonly energy: Float64Array;
   readonly vectors: Float64Array;
 }
 
-const single: Diagonal = { vectors: Float64Array.of(1) };
-
-/** Work space for the matrix of a block: nothing outlives the call that fills it. */
-const workspaces: Float64Array[] = [];
-
-function workspace(size: number): Float64Array {
-  workspaces[size] ??= new Float64Array(size * size);
-  return workspaces[size];
-}
+/** Work space by size of block. */
+const workspaces: Diagonal[] = [];
 
 /**
  * Diagonalises one block for H = sign * delta * field + racahB * B + racahC * C.
@@ -59,36 +53,33 @@ function workspace(size: number): Float64Array {
  * and derivatives are those of the limit Delta -> 0 from above.
  *
  * @param sign +1 octahedral, -1 tetrahedral
+ * @returns work space that holds until the next block of the same size is diagonalised
  */
 export function diagonalise(block: Block, sign: number, delta: number, racahB: number, racahC: number): Diagonal {
   const { size, field, racahB: matrixB, racahC: matrixC } = block;
-  if (size === 1) return single;
-  const total = workspace(size);
-  let scale = 0;
-  for (let i = 0; i < total.length; i++) {
-    const element = sign * delta * field[i]! + racahB * matrixB[i]! + racahC * matrixC[i]!;
-    total[i] = element;
-    const magnitude = Math.abs(element);
-    if (magnitude > scale) scale = magnitude;
-  }
-  const { values, vectors } = symmetricEigen(total, size);
+  const diagonal = (workspaces[size] ??= { energy: new Float64Array(size), vectors: new Float64Array(size * size) });
+  const { energy, vectors } = diagonal;
+  const signed = sign * delta;
+  for (let i = 0; i < vectors.length; i++) vectors[i] = signed * field[i]! + racahB * matrixB[i]! + racahC * matrixC[i]!;
+  eigenInPlace(vectors, energy, size);
+  const scale = Math.max(Math.abs(energy[0]!), Math.abs(energy[size - 1]!));
   for (let k = 1; k < size; k++)
-    if (values[k]! - values[k - 1]! <= 1e-10 * scale) {
-      for (const [first, last] of clusters(values, 1e-10 * scale)) if (last > first) alignWithField(block, sign, vectors, first, last);
+    if (energy[k]! - energy[k - 1]! <= 1e-10 * scale) {
+      for (const [first, last] of clusters(energy, 1e-10 * scale)) if (last > first) alignWithField(block, sign, vectors, first, last);
       break;
     }
-  return { vectors };
+  return diagonal;
 }
 
-/** Exact derivatives of the k-th level by Delta, B and C. */
+/** Exact derivatives of one level by Delta, B and C; may be used again for another level. */
 export interface LevelSlopes {
-  readonly field: number;
-  readonly racahB: number;
-  readonly racahC: number;
+  field: number;
+  racahB: number;
+  racahC: number;
 }
 
-/** dE/dp = <v|H_p|v> (Hellmann-Feynman) for one level of a diagonalised block. */
-export function levelSlopes(block: Block, sign: number, { vectors }: Diagonal, k: number): LevelSlopes {
+/** dE/dp = <v|H_p|v> (Hellmann-Feynman) for the k-th level of a diagonalised block, written into `into`. */
+export function levelSlopes(block: Block, sign: number, { vectors }: Diagonal, k: number, into: LevelSlopes): void {
   const { size, field, racahB: matrixB, racahC: matrixC } = block;
   let sumField = 0;
   let sumB = 0;
@@ -107,7 +98,69 @@ export function levelSlopes(block: Block, sign: number, { vectors }: Diagonal, k
     sumB += left * rowB;
     sumC += left * rowC;
   }
-  return { field: sign * sumField, racahB: sumB, racahC: sumC };
+  into.field = sign * sumField;
+  into.racahB = sumB;
+  into.racahC = sumC;
+}
+
+/** Exact second derivatives of one level. */
+export interface LevelBends {
+  fieldField: number;
+  fieldB: number;
+  fieldC: number;
+  bB: number;
+  bC: number;
+  cC: number;
+}
+
+/** H_B and H_C applied to one eigenvector; no block has more than ten levels. */
+const appliedB = new Float64Array(10);
+const appliedC = new Float64Array(10);
+
+function applyTo({ size, racahB, racahC }: Block, vectors: Float64Array, k: number): void {
+  for (let a = 0; a < size; a++) {
+    let rowB = 0;
+    let rowC = 0;
+    for (let b = 0; b < size; b++) {
+      const element = vectors[b * size + k]!;
+      rowB += racahB[a * size + b]! * element;
+      rowC += racahC[a * size + b]! * element;
+    }
+    appliedB[a] = rowB;
+    appliedC[a] = rowC;
+  }
+}
+
+/**
+ * d2E/dp dq = 2 sum over the other levels j of <v|H_p|j><j|H_q|v> / (E - E_j), second-order perturbation theory, for the k-th
+ * level of a diagonalised block, written into `into`.
+ */
+export function levelBends(block: Block, sign: number, { energy, vectors }: Diagonal, k: number, into: LevelBends): void {
+  const { size, field } = block;
+  into.fieldField = into.fieldB = into.fieldC = into.bB = into.bC = into.cC = 0;
+  applyTo(block, vectors, k);
+  for (let j = 0; j < size; j++) {
+    const gap = energy[k]! - energy[j]!;
+    // Levels of one block do not cross; where rounding makes two alike their mixing is nothing that could be told.
+    if (j === k || gap === 0) continue;
+    let byField = 0;
+    let byB = 0;
+    let byC = 0;
+    for (let a = 0; a < size; a++) {
+      const left = vectors[a * size + j]!;
+      byField += left * field[a * size + a]! * vectors[a * size + k]!;
+      byB += left * appliedB[a]!;
+      byC += left * appliedC[a]!;
+    }
+    byField *= sign;
+    const factor = 2 / gap;
+    into.fieldField += factor * byField * byField;
+    into.fieldB += factor * byField * byB;
+    into.fieldC += factor * byField * byC;
+    into.bB += factor * byB * byB;
+    into.bC += factor * byB * byC;
+    into.cC += factor * byC * byC;
+  }
 }
 
 /** Solves one block: all its levels with their derivatives. Arguments as for `diagonalise`. */
@@ -118,8 +171,9 @@ export function solveBlock(block: Block, sign: number, delta: number, racahB: nu
     racahB: new Float64Array(size), racahC: new Float64Array(size),
   };
   const diagonal = diagonalise(block, sign, delta, racahB, racahC);
+  const slopes: LevelSlopes = { field: 0, racahB: 0, racahC: 0 };
   for (let k = 0; k < size; k++) {
-    const slopes = levelSlopes(block, sign, diagonal, k);
+    levelSlopes(block, sign, diagonal, k, slopes);
     solution.field[k] = slopes.field;
     solution.racahB[k] = slopes.racahB;
     solution.racahC[k] = slopes.racahC;

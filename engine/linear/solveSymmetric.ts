@@ -35,3 +35,31 @@ export function inversePositive(matrix: readonly (readonly number[])[]): number[
 export function solvePositive(matrix: readonly (readonly number[])[], right: readonly number[]): number[] | null {
   return inversePositive(matrix)?.map((row) => row.reduce((sum, value, j) => sum + value * right[j]!, 0)) ?? null;
 }
+
+/** A symmetric 3 x 3 matrix by its six different elements: 11, 12, 13, 22, 23, 33. */
+export type SymmetricThree = [number, number, number, number, number, number];
+
+/**
+ * Solves M x = right for a symmetric positive definite 3 x 3 matrix, without allocation.
+ *
+ * @param lift is added to each diagonal element
+ * @param into the solution; not touched where there is none
+ * @returns false where the matrix, lifted, is not positive definite
+ */
+export function solveThree(matrix: SymmetricThree, lift: number, right: ArrayLike<number>, into: [number, number, number]): boolean {
+  const a = matrix[0] + lift;
+  if (!(a > 0)) return false;
+  const ba = matrix[1] / a;
+  const ca = matrix[2] / a;
+  const b = matrix[3] + lift - ba * matrix[1];
+  if (!(b > 0)) return false;
+  const cb = (matrix[4] - ca * matrix[1]) / b;
+  const c = matrix[5] + lift - ca * matrix[2] - cb * cb * b;
+  if (!(c > 0)) return false;
+  const second = right[1]! - ba * right[0]!;
+  const third = (right[2]! - ca * right[0]! - cb * second) / c;
+  into[2] = third;
+  into[1] = second / b - cb * third;
+  into[0] = right[0]! / a - ba * into[1] - ca * third;
+  return true;
+}

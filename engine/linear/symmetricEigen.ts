@@ -1,9 +1,12 @@
+import { reduceToTridiagonal } from './tridiagonal.ts';
+
 /**
- * Eigenvalues and eigenvectors of small symmetric matrices by cyclic Jacobi rotations
- * (G. H. Golub and C. F. Van Loan, Matrix Computations, section 8.5).
+ * Eigenvalues and eigenvectors of small symmetric matrices: Householder reduction to tridiagonal form, then QL
+ * steps with implicit shifts (J. H. Wilkinson and C. Reinsch, Linear Algebra, Handbook for Automatic Computation
+ * II, contributions II/2 and II/4).
  *
- * The engine solves millions of blocks of size 2 to 10. At that size the method is as fast as any, accurate
- * to the last bits also for small eigenvalues, and short; a general library costs more to call than to run.
+ * The engine solves millions of blocks of size 2 to 10. At that size this takes a third of the time of Jacobi's
+ * rotations; a general library costs more to call than to run.
  */
 export interface SymmetricEigen {
   /** Ascending. */
@@ -12,74 +15,139 @@ export interface SymmetricEigen {
   readonly vectors: Float64Array;
 }
 
-const sweepsAtMost = 40;
+const stepsAtMost = 60;
 
 /**
  * @param matrix symmetric, `size` x `size`, row-major; not changed
- * @throws RangeError where the rotations do not converge (a matrix with NaN, infinity, or elements above about 1e153, whose squares overflow)
+ * @throws RangeError where the steps do not converge (a matrix with NaN, infinity, or elements whose squares overflow)
  */
 export function symmetricEigen(matrix: Float64Array, size: number): SymmetricEigen {
-  const a = matrix.slice();
-  const v = new Float64Array(size * size);
-  for (let i = 0; i < size; i++) v[i * size + i] = 1;
-  for (let sweep = 0; ; sweep++) {
-    let off = 0;
-    let on = 0;
-    for (let i = 0; i < size; i++) {
-      on += a[i * size + i]! ** 2;
-      for (let j = i + 1; j < size; j++) off += a[i * size + j]! ** 2;
-    }
-    // Before the test of convergence, which an infinite diagonal would pass.
-    if (sweep === sweepsAtMost || !Number.isFinite(off + on)) throw new RangeError('matrix: the eigenvalues did not converge');
-    // Convergence is quadratic: eigenvalues are wrong by the square of what is left, vectors by less than rounding.
-    if (off <= 1e-30 * on) break;
-    for (let p = 0; p < size - 1; p++) for (let q = p + 1; q < size; q++) rotate(a, v, size, p, q);
-  }
-  return sorted(a, v, size);
+  const solution = { values: new Float64Array(size), vectors: matrix.slice() };
+  eigenInPlace(solution.vectors, solution.values, size);
+  return solution;
 }
 
-/** One rotation that makes element (p, q) zero. */
-function rotate(a: Float64Array, v: Float64Array, size: number, p: number, q: number): void {
-  const apq = a[p * size + q]!;
-  if (apq === 0) return;
-  const app = a[p * size + p]!;
-  const aqq = a[q * size + q]!;
-  const theta = (aqq - app) / (2 * apq);
-  const t = (theta >= 0 ? 1 : -1) / (Math.abs(theta) + Math.sqrt(theta * theta + 1));
+/** What lies beside the diagonal, by size of matrix; nothing in it outlives a call. */
+const besides: Float64Array[] = [];
+
+/**
+ * The same without allocation: the matrix is replaced by its eigenvectors.
+ *
+ * @param vectors the matrix when called, its eigenvectors on return
+ * @param values of length `size`; eigenvalues on return
+ */
+export function eigenInPlace(vectors: Float64Array, values: Float64Array, size: number): void {
+  if (size === 1) {
+    values[0] = requireFinite(vectors[0]!);
+    vectors[0] = 1;
+  } else if (size === 2) twoByTwo(vectors, values);
+  else {
+    const beside = (besides[size] ??= new Float64Array(size));
+    reduceToTridiagonal(vectors, values, beside, size);
+    diagonaliseTridiagonal(vectors, values, beside, size);
+    // A matrix with NaN looks diagonal to every comparison.
+    requireFinite(values.reduce((sum, value) => sum + value, 0));
+    sortAscending(vectors, values, size);
+  }
+}
+
+function requireFinite(value: number): number {
+  if (!Number.isFinite(value)) throw new RangeError('matrix: the eigenvalues did not converge');
+  return value;
+}
+
+/** One rotation makes a matrix of two rows diagonal. */
+function twoByTwo(vectors: Float64Array, values: Float64Array): void {
+  const a = vectors[0]!;
+  const b = vectors[1]!;
+  const d = vectors[3]!;
+  requireFinite(a * a + b * b + d * d);
+  let t = 0;
+  if (b !== 0) {
+    const theta = (d - a) / (2 * b);
+    t = (theta >= 0 ? 1 : -1) / (Math.abs(theta) + Math.sqrt(theta * theta + 1));
+  }
   const c = 1 / Math.sqrt(t * t + 1);
   const s = t * c;
-  a[p * size + p] = app - t * apq;
-  a[q * size + q] = aqq + t * apq;
-  a[p * size + q] = a[q * size + p] = 0;
-  for (let k = 0; k < size; k++) {
-    if (k !== p && k !== q) {
-      const akp = a[k * size + p]!;
-      const akq = a[k * size + q]!;
-      a[k * size + p] = a[p * size + k] = c * akp - s * akq;
-      a[k * size + q] = a[q * size + k] = s * akp + c * akq;
-    }
-    const vkp = v[k * size + p]!;
-    const vkq = v[k * size + q]!;
-    v[k * size + p] = c * vkp - s * vkq;
-    v[k * size + q] = s * vkp + c * vkq;
-  }
+  const first = a - t * b;
+  const second = d + t * b;
+  const inOrder = first <= second;
+  values[0] = inOrder ? first : second;
+  values[1] = inOrder ? second : first;
+  vectors[0] = inOrder ? c : s;
+  vectors[1] = inOrder ? s : c;
+  vectors[2] = inOrder ? -s : c;
+  vectors[3] = inOrder ? c : -s;
 }
 
-function sorted(a: Float64Array, v: Float64Array, size: number): SymmetricEigen {
-  for (let i = 0; i < size - 1; i++) {
-    let lowest = i;
-    for (let j = i + 1; j < size; j++) if (a[j * size + j]! < a[lowest * size + lowest]!) lowest = j;
-    if (lowest === i) continue;
-    const value = a[i * size + i]!;
-    a[i * size + i] = a[lowest * size + lowest]!;
-    a[lowest * size + lowest] = value;
-    for (let k = 0; k < size; k++) {
-      const element = v[k * size + i]!;
-      v[k * size + i] = v[k * size + lowest]!;
-      v[k * size + lowest] = element;
+/** QL steps until nothing is left beside the diagonal; the rotations are gathered in `vectors`. */
+function diagonaliseTridiagonal(vectors: Float64Array, values: Float64Array, beside: Float64Array, size: number): void {
+  for (let low = 0; low < size; low++)
+    for (let step = 0; ; step++) {
+      const high = endOfPiece(values, beside, size, low);
+      if (high === low) break;
+      if (!(step < stepsAtMost)) throw new RangeError('matrix: the eigenvalues did not converge');
+      stepOfQL(vectors, values, beside, size, low, high);
+    }
+}
+
+/** The first place from `low` on where nothing stands beside the diagonal: what comes before is a matrix of its own. */
+function endOfPiece(values: Float64Array, beside: Float64Array, size: number, low: number): number {
+  let high = low;
+  while (high < size - 1 && Math.abs(beside[high]!) > Number.EPSILON * (Math.abs(values[high]!) + Math.abs(values[high + 1]!))) high++;
+  return high;
+}
+
+/** One QL step with an implicit shift on the rows low..high. */
+function stepOfQL(vectors: Float64Array, values: Float64Array, beside: Float64Array, size: number, low: number, high: number): void {
+  let g = (values[low + 1]! - values[low]!) / (2 * beside[low]!);
+  let r = Math.sqrt(g * g + 1);
+  g = values[high]! - values[low]! + beside[low]! / (g + (g >= 0 ? r : -r));
+  let s = 1;
+  let c = 1;
+  let p = 0;
+  for (let i = high - 1; i >= low; i--) {
+    const f = s * beside[i]!;
+    const b = c * beside[i]!;
+    r = Math.sqrt(f * f + g * g);
+    beside[i + 1] = r;
+    if (r === 0) {
+      // The matrix falls apart here: the next step takes the pieces.
+      values[i + 1]! -= p;
+      beside[high] = 0;
+      return;
+    }
+    s = f / r;
+    c = g / r;
+    g = values[i + 1]! - p;
+    r = (values[i]! - g) * s + 2 * c * b;
+    p = s * r;
+    values[i + 1] = g + p;
+    g = c * r - b;
+    for (let k = i, end = size * size; k < end; k += size) {
+      const left = vectors[k]!;
+      const right = vectors[k + 1]!;
+      vectors[k + 1] = s * left + c * right;
+      vectors[k] = c * left - s * right;
     }
   }
-  const values = new Float64Array(size);
-  for (let i = 0; i < size; i++) values[i] = a[i * size + i]!;
-  return { values, vectors: v };
+  values[low]! -= p;
+  beside[low] = g;
+  beside[high] = 0;
+}
+
+function sortAscending(vectors: Float64Array, values: Float64Array, size: number): void {
+  for (let i = 0; i < size - 1; i++) {
+    let lowest = i;
+    for (let j = i + 1; j < size; j++) if (values[j]! < values[lowest]!) lowest = j;
+    if (lowest === i) continue;
+    const value = values[i]!;
+    values[i] = values[lowest]!;
+    values[lowest] = value;
+    for (let row = 0; row < size * size; row += size) {
+      const element = vectors[row + i]!;
+      vectors[row + i] = vectors[row + lowest]!;
+      vectors[row + lowest] = element;
+    }
+  }
 }

@@ -76,6 +76,19 @@ function badUncertainty(candidate: string | null, note: string, advice: string):
   return { code: 'BAD_UNCERTAINTY', candidate, note, advice };
 }
 
+/** One or two numbers in the brackets of an uncertainty, with the signs in front of them. */
+const signedSides = new RegExp(`\\( ?([+-]*) ?${number} ?(?:[/,;]? ?([+-]*) ?${number} ?)?\\)`);
+
+/** An uncertainty with signs that are not one plus and one minus. */
+function wrongSigns(text: string): Finding | null {
+  const [, first = '', second = ''] = signedSides.exec(text) ?? [];
+  if (first === '' && second === '') return null;
+  return {
+    code: 'UNCERTAINTY_SIGN', candidate: null, note: '',
+    advice: 'give the side towards higher values with plus and the other with minus, both as sizes: 21550(+60 -40) cm-1',
+  };
+}
+
 /** Says what is wrong with a text, in plain characters, that the grammar could not split. */
 export function diagnose(split: Split & { readonly ok: false }, text: string): Finding {
   if (split.at === 'number') return badNumber(text);
@@ -84,6 +97,8 @@ export function diagnose(split: Split & { readonly ok: false }, text: string): F
   const advice = 'write the standard uncertainty in brackets, in the last digits: 21550(60) cm-1 or 464.0(5) nm';
   const signed = /\( ?± ?([^()]*)\)/.exec(text);
   if (signed) return badUncertainty(text.replace(signed[0], `(${signed[1]?.trim()})`), 'digits only in the brackets', advice);
+  const signs = wrongSigns(text);
+  if (signs) return signs;
   if (split.at === 'brackets' && !split.body.includes(')')) return badUncertainty(null, '', 'close the brackets: 21550(60) cm-1');
   return badUncertainty(null, '', advice);
 }

@@ -33,7 +33,8 @@ function unitOffered(value: number, wanted: Wanted): { unit: Unit; note: string 
 
 function units(pieces: Pieces, text: string, wanted: Wanted): Outcome | Unit {
   const allowed = unitsFor(wanted);
-  const list = `use ${allowed.join(', ')}`;
+  const named = allowed.filter((unit) => unit !== '').join(', ');
+  const list = named.length < allowed.join(', ').length ? `write the number alone, or in ${named}` : `use ${named}`;
   const withUnit = (unit: Unit) => {
     if (pieces.unit !== '') return text.replace(pieces.unit, unit);
     const end = pieces.k === null ? text.length : text.search(/[ ,;]*\(? ?k ?=/i);

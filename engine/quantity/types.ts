@@ -34,7 +34,7 @@ export interface Quantity {
 /** The closed set of reasons for which a typed quantity is refused. The codes last. */
 export type QuantityCode =
   | 'EMPTY' | 'TOO_LONG' | 'NOT_A_NUMBER' | 'NOT_FINITE' | 'EXPONENT' | 'THOUSANDS_COMMA' | 'DECIMAL_COMMA'
-  | 'NEGATIVE' | 'ZERO' | 'NO_UNIT' | 'UNKNOWN_UNIT' | 'WRONG_UNIT' | 'BAD_UNCERTAINTY' | 'ZERO_UNCERTAINTY'
+  | 'NEGATIVE' | 'ZERO' | 'NO_UNIT' | 'UNKNOWN_UNIT' | 'WRONG_UNIT' | 'BAD_UNCERTAINTY' | 'ZERO_UNCERTAINTY' | 'UNCERTAINTY_SIGN'
   | 'BAD_COVERAGE' | 'NOT_A_COUNT' | 'BAD_RANGE';
 
 /** Why a typed quantity was refused, in the words of a fault report. */

@@ -5,6 +5,7 @@ import type { Range } from '../quantity/range.ts';
 import { betaPenalty } from './betaPenalty.ts';
 import { quadratic } from './covariance.ts';
 import { transitionsAt } from './evaluate.ts';
+import { absorptivityLimits, evidenceWeights, usualAbsorptivities, widthLimits } from './evidenceWeights.ts';
 import type { Assigned, Fit } from './fit.ts';
 import { transitionOf, transitionsOf } from './transitions.ts';
 import type { GroundCase, Transition } from './transitions.ts';
@@ -13,58 +14,30 @@ import type { Evidence } from './types.ts';
 /** Score of a reading: chi2 + 2 x free parameters + evidence. */
 export const scoreOf = (evidence: readonly Evidence[]): number => evidence.reduce((sum, one) => sum + one.penalty, 0);
 
-export const leftOverPenalty = 9;
-const gapPenalty = 9;
-const unseenPenalty = 4;
-/** The same for transitions that move two electrons: weak, and often under charge transfer. */
-const twoElectronGapPenalty = 3;
-const twoElectronUnseenPenalty = 1;
-/** A transition below the lowest assigned band, outside what was scanned: the spin-allowed order is read from below. */
-const skippedBelowPenalty = 4;
-const skippedLinePenalty = 2;
-const classPenalty = 4;
-const widthPenalty = 4;
-const forbiddenBroadPenalty = 4;
-
-/**
- * Usual molar absorption coefficients of a d-d transition, L mol-1 cm-1 (common practice, no source): spin-allowed 1
- * to 100 in an octahedron, 50 to 1000 in a tetrahedron; spin-forbidden to about 1, and to 10 without a centre of
- * inversion.
- */
-function usualAbsorptivity(ion: GroundCase, { spinAllowed }: Transition): { readonly low: number; readonly high: number } {
-  const centred = ion.geometry === 'octahedral';
-  if (!spinAllowed) return { low: 0, high: centred ? 1 : 10 };
-  return centred ? { low: 1, high: 100 } : { low: 50, high: 1000 };
-}
-
 /** Charge transfer by its strength. */
-export const isStrong = (band: Band): boolean => band.epsilon !== null && band.epsilon > 1000;
+export const isStrong = (band: Band): boolean => band.epsilon !== null && band.epsilon > absorptivityLimits.chargeTransfer;
 
-/** Narrower than this a band is a line; half-height widths of spin-flip lines are 100 to 500, of others 1500 to 4500 cm-1. */
-const narrow = 600;
-const broad = 1000;
+export const looksNarrow = (band: Band): boolean => band.kind === 'line' || band.kind === 'zero-phonon' || band.kind === 'dip' || (band.width !== null && band.width < widthLimits.line);
 
-export const looksNarrow = (band: Band): boolean => band.kind === 'line' || band.kind === 'zero-phonon' || band.kind === 'dip' || (band.width !== null && band.width < narrow);
-
-export const looksWeak = (band: Band): boolean => band.epsilon !== null && band.epsilon < 1;
+export const looksWeak = (band: Band): boolean => band.epsilon !== null && band.epsilon < absorptivityLimits.spinAllowed;
 
 /** Classes overlap in practice (chelates, low symmetry), so the penalty grows with the square of the decades off: one class is one decade. */
 function absorptivityEvidence(ion: GroundCase, transition: Transition, band: Band): Evidence[] {
   const { epsilon } = band;
   if (epsilon === null || epsilon <= 0) return [];
-  const { low, high } = usualAbsorptivity(ion, transition);
+  const { low, high } = usualAbsorptivities[ion.geometry][transition.spinAllowed ? 'spinAllowed' : 'spinForbidden'];
   const decades = epsilon > high ? Math.log10(epsilon / high) : epsilon < low ? Math.log10(low / epsilon) : 0;
-  return decades === 0 ? [] : [{ code: 'absorptivity', penalty: classPenalty * decades ** 2, label: transition.label, value: epsilon }];
+  return decades === 0 ? [] : [{ code: 'absorptivity', penalty: evidenceWeights.absorptivityDecade * decades ** 2, label: transition.label, value: epsilon }];
 }
 
 function widthEvidence(transition: Transition, band: Band): Evidence[] {
   if (looksNarrow(band) && !transition.sameConfiguration && band.kind !== 'zero-phonon' && band.kind !== 'dip')
-    return [{ code: 'width', penalty: widthPenalty, label: transition.label, value: band.width }];
-  if (transition.sameConfiguration && !transition.spinAllowed && band.width !== null && band.width > broad)
-    return [{ code: 'width', penalty: widthPenalty, label: transition.label, value: band.width }];
+    return [{ code: 'width', penalty: evidenceWeights.width, label: transition.label, value: band.width }];
+  if (transition.sameConfiguration && !transition.spinAllowed && band.width !== null && band.width > widthLimits.spinFlip)
+    return [{ code: 'width', penalty: evidenceWeights.width, label: transition.label, value: band.width }];
   // A broad spin-forbidden band without a recorded strength is possible, not likely, where spin-allowed bands exist.
   if (!transition.spinAllowed && !transition.sameConfiguration && band.epsilon === null && !looksNarrow(band))
-    return [{ code: 'forbidden and broad', penalty: forbiddenBroadPenalty, label: transition.label, value: null }];
+    return [{ code: 'forbidden and broad', penalty: evidenceWeights.forbiddenBroad, label: transition.label, value: null }];
   return [];
 }
 
@@ -108,15 +81,15 @@ function unseenEvidence(measurement: Measurement, ion: GroundCase, assigned: rea
   return transitionsAt(ion, ground, labels, at).flatMap(({ energy, gradient }, i): Evidence[] => {
     const label = labels[i]!;
     // A spin-flip line below an assigned one is seldom missed: the lowest is the strongest.
-    if (!expected(open[i]!)) return lines.some((position) => position > energy) ? [{ code: 'line skipped', penalty: skippedLinePenalty, label, value: energy }] : [];
+    if (!expected(open[i]!)) return lines.some((position) => position > energy) ? [{ code: 'line skipped', penalty: evidenceWeights.lineSkipped, label, value: energy }] : [];
     // The derivative by Delta counts the electrons promoted to e (Hellmann-Feynman).
     const twoElectrons = Math.abs(gradient.delta) > 1.5;
-    if (energy > lowest && energy <= highest) return [{ code: 'gap', penalty: twoElectrons ? twoElectronGapPenalty : gapPenalty, label, value: energy }];
+    if (energy > lowest && energy <= highest) return [{ code: 'gap', penalty: twoElectrons ? evidenceWeights.twoElectronGap : evidenceWeights.gap, label, value: energy }];
     // Low-spin ions have a host of two-electron transitions in the ultraviolet: together they count once.
-    if (!within(looked, energy)) return energy < lowest ? [{ code: 'below', penalty: skippedBelowPenalty, label, value: energy }] : [];
+    if (!within(looked, energy)) return energy < lowest ? [{ code: 'below', penalty: evidenceWeights.below, label, value: energy }] : [];
     if (twoElectrons && twoElectronUnseen) return [];
     twoElectronUnseen ||= twoElectrons;
-    return [{ code: 'unseen', penalty: twoElectrons ? twoElectronUnseenPenalty : unseenPenalty, label, value: energy }];
+    return [{ code: 'unseen', penalty: twoElectrons ? evidenceWeights.twoElectronUnseen : evidenceWeights.unseen, label, value: energy }];
   });
 }
 
@@ -128,8 +101,8 @@ export function gatherEvidence(
   const beta = fit.assumedBeta ? 0 : betaPenalty(at.racahB, freeIon);
   const all: Evidence[] = [
     { code: 'misfit', penalty: chi2 + misfitOfCompared(assigned, fit), label: '', value: null },
-    { code: 'parameters', penalty: 2 * parametersOf[fit.mode], label: '', value: null },
-    { code: 'left over', penalty: leftOverPenalty * leftOver, label: '', value: leftOver },
+    { code: 'parameters', penalty: evidenceWeights.parameter * parametersOf[fit.mode], label: '', value: null },
+    { code: 'left over', penalty: evidenceWeights.leftOver * leftOver, label: '', value: leftOver },
     { code: 'beta', penalty: beta, label: '', value: freeIon && beta > 0 ? at.racahB / freeIon.racahB0 : null },
     ...assigned.flatMap((one) => one.observation.bands.flatMap((index) => bandEvidence(ion, one.label, measurement.bands[index]!))),
     ...unseenEvidence(measurement, ion, assigned, fit),

@@ -1,3 +1,5 @@
+import { isOutside, ratioWindows } from '../cautions/ratioWindows.ts';
+import type { RatioWindow } from '../cautions/ratioWindows.ts';
 import type { SpectralFacts } from '../cautions/spectral.ts';
 import { shownLabel } from '../levels/labels.ts';
 import type { Measurement } from '../measurement/types.ts';
@@ -29,6 +31,11 @@ export interface ReadingParts {
 function isJahnTeller(ion: GroundCase): boolean {
   if (ion.geometry !== 'octahedral') return false;
   return (ion.electrons === 4 && ion.multiplicity === 5) || ion.electrons === 9;
+}
+
+/** Ions whose tetrahedral ground level is T2: a Jahn-Teller distortion flattens their site (common practice, no source). */
+function distortsTetrahedron(ion: GroundCase): boolean {
+  return ion.geometry === 'tetrahedral' && ((ion.electrons === 4 && ion.multiplicity === 5) || ion.electrons === 9);
 }
 
 /** 1Eg minus the nearest 3T1g of octahedral Ni(II) at the fit, cm-1. */
@@ -64,6 +71,26 @@ function dipBetween(measurement: Measurement, usedIndices: readonly number[]): b
     maxima.some((band) => band.position < dip.position && dip.position - band.position < dipReach) &&
     maxima.some((band) => band.position > dip.position && band.position - dip.position < dipReach));
 }
+
+function windowWords({ least, most }: RatioWindow): string {
+  const [low, high] = [least, most].map((limit) => limit?.toFixed(2));
+  return high === undefined ? `at least ${low}` : `${low} to ${high}`;
+}
+
+/** Ratios of fitted bands outside their windows, as printed. */
+function ratiosOutside(ion: GroundCase, fitted: readonly Assigned[]): string[] {
+  const positionOf = (label: string): number | undefined => fitted.find((one) => one.label === label)?.observation.position;
+  return ratioWindows(ion).flatMap((window) => {
+    const [upper, lower] = [positionOf(window.upper), positionOf(window.lower)];
+    if (upper === undefined || lower === undefined || !isOutside(window, upper / lower)) return [];
+    const names = [window.upper, window.lower].map((label) => shownLabel(label, ion.electrons)).join('/');
+    return [`${names} = ${(upper / lower).toFixed(2)} (${windowWords(window)})`];
+  });
+}
+
+/** Low-spin ions whose bands are rarely enough for B: octahedral d4, d5 and d7. */
+const isSparseLowSpin = ({ electrons, geometry, multiplicity }: GroundCase): boolean =>
+  geometry === 'octahedral' && [4, 5, 7].includes(electrons) && multiplicity < Math.min(electrons, 10 - electrons) + 1;
 
 /** Half of the last digit from which a position counts as rounded, cm-1. */
 const roundedFrom = 50;
@@ -120,6 +147,7 @@ export function spectralFacts({ measurement, ion, chosen, fit, parameters, groun
     octahedral: measurement.geometry === 'octahedral',
     row: measurement.ion.row,
     jahnTellerEnvelope: ion !== null && fit !== null && isJahnTeller(ion) && !merged && usedBands.every((band) => !splitKinds.has(band.kind)),
+    tetrahedronDistorts: ion !== null && fit !== null && distortsTetrahedron(ion),
     twoElectronBandUsed: twoElectron && ion ? shownLabel(twoElectron.label, ion.electrons) : null,
     relativeUB: racahB?.value != null && racahB.uTotal != null ? racahB.uTotal / racahB.value : null,
     coverageNotStated: measurement.bands.some((band) => band.coverageNotStated),
@@ -136,6 +164,8 @@ export function spectralFacts({ measurement, ion, chosen, fit, parameters, groun
     uBeta: beta?.uTotal ?? null,
     groundNearCrossing: ground === 'near',
     ratioAtEdge: fit?.mode === 'field' && (chosen?.assigned ?? []).filter((one) => ion && transitionOf(ion, one.label).spinAllowed).length > 1,
+    ratiosOutside: ion && fit ? ratiosOutside(ion, fittedBands) : [],
+    sparseLowSpin: ion !== null && racahB?.value != null && isSparseLowSpin(ion),
     singletGap: ion && fit ? singletGap(ion, fit) : null,
     octahedralCobaltTwo: measurement.ion.name === 'Co(II)' && measurement.geometry === 'octahedral' && ion?.multiplicity === 4 && fit !== null,
     notScanned: ion ? predicted.filter((band) => band.spinAllowed && band.looked === 'outside').map((band) => shownLabel(band.label, ion.electrons)) : [],

@@ -8,12 +8,14 @@ import type { Covariance, Row } from './covariance.ts';
 import { transitionsAt } from './evaluate.ts';
 import type { TransitionAt } from './evaluate.ts';
 import { betaPenalty } from './betaPenalty.ts';
+import { fieldsForPosition } from './fieldRoots.ts';
 import { minimaWithFreeRatio } from './freeRatio.ts';
 import type { Target } from './misfit.ts';
 import { symmetricU } from '../measurement/observation.ts';
 import type { Observation } from '../measurement/observation.ts';
 import { minimaOnCurve } from './scan.ts';
 import { levelTable, pointOnCurve } from './table.ts';
+import type { LevelTable } from './table.ts';
 import { floorOf, transitionOf } from './transitions.ts';
 import type { GroundCase } from './transitions.ts';
 import type { RatioUsed } from './types.ts';
@@ -94,13 +96,26 @@ export function targetOf(observation: Observation, floor: number): Target {
   };
 }
 
-/** Sensitivities at an ordinary field; enough to tell which parameters a band can feel at all. */
-function feels(ion: GroundCase, ground: string, labels: readonly string[], ratio: number): { delta: boolean; racahB: boolean }[] {
-  const at = pointOnCurve(Math.PI / 4, ratio);
-  return transitionsAt(ion, ground, labels, at).map(({ gradient }) => ({
-    delta: Math.abs(gradient.delta) > 1e-9,
-    racahB: Math.abs(gradient.racahB) > 1e-9 || Math.abs(gradient.racahC) > 1e-9,
-  }));
+/** Which parameters a transition can feel at all, by its sensitivities at an ordinary field. */
+interface Feels {
+  readonly delta: boolean;
+  readonly racahB: boolean;
+}
+
+const feltHeld = new WeakMap<LevelTable, Map<string, Feels>>();
+
+function feels(ion: GroundCase, ground: string, label: string, ratio: number): Feels {
+  const table = levelTable(ion, ratio);
+  let held = feltHeld.get(table);
+  if (!held) feltHeld.set(table, (held = new Map()));
+  const key = `${ground} ${label}`;
+  let found = held.get(key);
+  if (!found) {
+    const { gradient } = transitionsAt(ion, ground, [label], pointOnCurve(Math.PI / 4, ratio))[0]!;
+    found = { delta: Math.abs(gradient.delta) > 1e-9, racahB: Math.abs(gradient.racahB) > 1e-9 || Math.abs(gradient.racahC) > 1e-9 };
+    held.set(key, found);
+  }
+  return found;
 }
 
 /** Everything a fit needs, gathered once. */
@@ -242,16 +257,9 @@ function fitWithAssumedB(task: Task, member: number): FitOutcome {
   const racahB = usualBeta.value * freeIon.racahB0;
   const racahC = ratio.value * racahB;
   const { label, observation } = task.assigned[member]!;
-  const miss = (delta: number): number => transitionsAt(ion, task.ground, [label], { delta, racahB, racahC })[0]!.energy - observation.position;
-  const roots: number[] = [];
-  const step = racahB / 2;
-  // Delta/B up to 80 holds every complex known.
-  for (let low = 0, before = miss(0); low < 80 * racahB; low += step) {
-    const after = miss(low + step);
-    if (before < 0 !== after < 0) roots.push(bisect(miss, low, low + step));
-    before = after;
-  }
-  const inSpin = roots.filter((delta) => lowestLevel(ion.electrons, ion.geometry, delta, racahB, racahC).multiplicity === ion.multiplicity);
+  const roots = fieldsForPosition(ion, task.ground, label, observation.position, racahB, ratio.value);
+  // Where several fields put it there, the one with the declared spin is meant.
+  const inSpin = roots.length > 1 ? roots.filter((root) => lowestLevel(ion.electrons, ion.geometry, root, racahB, racahC).multiplicity === ion.multiplicity) : roots;
   const delta = inSpin[0] ?? roots[0];
   if (delta === undefined)
     return { status: 'refused', reason: `no Delta puts this transition at the band's position with beta near ${usualBeta.value}` };
@@ -277,18 +285,6 @@ function fitWithAssumedB(task: Task, member: number): FitOutcome {
   };
 }
 
-function bisect(f: (x: number) => number, low: number, high: number): number {
-  const below = f(low) < 0;
-  let a = low;
-  let b = high;
-  for (let i = 0; i < 100 && b - a > 1e-12 * b; i++) {
-    const middle = (a + b) / 2;
-    if (f(middle) < 0 === below) a = middle;
-    else b = middle;
-  }
-  return (a + b) / 2;
-}
-
 /**
  * Fits an assignment: as many of Delta, B and C as its bands can fix.
  *
@@ -307,7 +303,7 @@ export function fitAssignment(ion: GroundCase, assigned: readonly Assigned[], po
   const task: Task = { ion, ground, assigned, floors, policy, ratio, freeIon };
   const all = assigned.map((_, k) => k);
   const allowed = all.filter((k) => transitionOf(ion, assigned[k]!.label).spinAllowed);
-  const felt = feels(ion, ground, labelsOf(task, all), ratio.value);
+  const felt = assigned.map(({ label }) => feels(ion, ground, label, ratio.value));
   if (policy.cFitted && allowed.length < all.length) {
     const three = fitAllThree(task, all);
     if (three === 'no solution' && all.every((k) => felt[k]!.racahB && !felt[k]!.delta))

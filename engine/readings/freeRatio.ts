@@ -1,10 +1,11 @@
 import type { FieldParameters } from '../levels/levels.ts';
-import { solvePositive } from '../linear/solveSymmetric.ts';
-import { transitionsAt } from './evaluate.ts';
-import { weightAt } from './misfit.ts';
+import { descend } from './descent.ts';
+import { columnsOf } from './misfit.ts';
 import type { Target } from './misfit.ts';
-import { minimaOnCurve } from './scan.ts';
-import type { Minimum } from './scan.ts';
+import { evaluatorOf } from './evaluate.ts';
+import type { Evaluator } from './evaluate.ts';
+import { roughMinimaOnCurve } from './scan.ts';
+import type { RoughMinimum } from './scan.ts';
 import { levelTable, pointOnCurve } from './table.ts';
 import type { GroundCase } from './transitions.ts';
 
@@ -18,31 +19,39 @@ export interface FreeMinimum {
 /** C/B is looked for between these bounds; fitted values of real complexes lie between 3 and 6.5. */
 export const lowestRatio = 2;
 export const highestRatio = 9;
-const ratioStep = 1;
+const ratioStep = 0.5;
+
+/** What two minima of one valley may miss each other by, half way between the C/B at which they were found. */
+const near = 0.06;
+
+/** No ligand field: Delta/B at the ends of the curve, where a minimum is none; or C/B that far outside that no descent comes back. */
+function isLost(delta: number, racahB: number, racahC: number): boolean {
+  return delta < 1e-3 * racahB || delta > 1e6 * racahB || racahC < 0.25 * lowestRatio * racahB || racahC > 4 * highestRatio * racahB;
+}
+
+/** Where a descent starts. */
+interface Start extends FieldParameters {
+  readonly ground: string;
+}
 
 /**
  * All local minima of chi2 in Delta, B and C with C/B strictly inside 2 to 9, ascending in chi2.
  *
- * The curve is scanned at eight values of C/B; every minimum that no neighbour at the next C/B undercuts
- * starts a damped Gauss-Newton descent with exact derivatives.
+ * The curve is scanned at fifteen values of C/B. Its minima form valleys; wherever the floor of a valley turns from
+ * falling to rising between two of them, or ends while it falls, a descent starts that uses exact levels with their
+ * first and second derivatives.
  */
 export function minimaWithFreeRatio(ion: GroundCase, labels: readonly string[], targets: readonly Target[]): FreeMinimum[] {
-  const rows: { ratio: number; minima: Minimum[] }[] = [];
-  for (let ratio = lowestRatio; ratio <= highestRatio; ratio += ratioStep)
-    rows.push({ ratio, minima: minimaOnCurve(levelTable(ion, ratio), ion, labels, targets, 'grid') });
-  const near = 0.06;
-  const undercut = (minimum: Minimum, row: { minima: Minimum[] } | undefined): boolean =>
-    row?.minima.some((other) => Math.abs(other.t - minimum.t) < near && other.ground === minimum.ground && other.chi2 < minimum.chi2) ?? false;
+  const evaluators = new Map<string, Evaluator>();
   const found: FreeMinimum[] = [];
-  rows.forEach(({ ratio, minima }, i) => {
-    for (const minimum of minima) {
-      if (undercut(minimum, rows[i - 1]) || undercut(minimum, rows[i + 1])) continue;
-      const unit = pointOnCurve(minimum.t, ratio);
-      const start = { delta: unit.delta * minimum.rho, racahB: unit.racahB * minimum.rho, racahC: unit.racahC * minimum.rho };
-      const end = descend(ion, minimum.ground, labels, targets, start);
-      if (end && !found.some((other) => isSame(other, end))) found.push(end);
-    }
-  });
+  for (const { ground, ...start } of startsOf(ion, labels, targets)) {
+    let evaluator = evaluators.get(ground);
+    if (!evaluator) evaluators.set(ground, (evaluator = evaluatorOf(ion, ground, labels, true)));
+    const end = descend(evaluator, targets, start, isLost);
+    if (!end || !(end.at.racahC > lowestRatio * end.at.racahB && end.at.racahC < highestRatio * end.at.racahB)) continue;
+    const minimum = { ...end, ground };
+    if (!found.some((other) => isSame(other, minimum))) found.push(minimum);
+  }
   return found.sort((a, b) => a.chi2 - b.chi2);
 }
 
@@ -51,80 +60,70 @@ function isSame(a: FreeMinimum, b: FreeMinimum): boolean {
   return a.ground === b.ground && close(a.at.delta, b.at.delta) && close(a.at.racahB, b.at.racahB) && close(a.at.racahC, b.at.racahC);
 }
 
-/** chi2 with the normal equations of one Gauss-Newton step, parameters scaled by their own values. */
-interface Here {
-  readonly chi2: number;
-  readonly normal: number[][];
-  readonly right: number[];
+function startsOf(ion: GroundCase, labels: readonly string[], targets: readonly Target[]): Start[] {
+  const columns = columnsOf(targets);
+  const rows: RoughMinimum[][] = [];
+  for (let ratio = lowestRatio; ratio <= highestRatio; ratio += ratioStep) rows.push(roughMinimaOnCurve(levelTable(ion, ratio), ion, labels, columns));
+  return rows.flatMap((row, i) => row.flatMap((minimum) => startsFrom(minimum, lowestRatio + i * ratioStep, rows[i - 1], rows[i + 1])));
 }
 
-function linearise(ion: GroundCase, ground: string, labels: readonly string[], targets: readonly Target[], at: readonly [number, number, number]): Here {
-  const transitions = transitionsAt(ion, ground, labels, { delta: at[0], racahB: at[1], racahC: at[2] });
-  let chi2 = 0;
-  let dd = 0;
-  let db = 0;
-  let dc = 0;
-  let bb = 0;
-  let bc = 0;
-  let cc = 0;
-  let rd = 0;
-  let rb = 0;
-  let rc = 0;
-  for (let k = 0; k < transitions.length; k++) {
-    const { energy, gradient } = transitions[k]!;
-    const target = targets[k]!;
-    const weight = weightAt(target, energy);
-    const residual = target.observed - energy;
-    chi2 += weight * residual * residual;
-    const d = gradient.delta * at[0];
-    const b = gradient.racahB * at[1];
-    const c = gradient.racahC * at[2];
-    dd += weight * d * d;
-    db += weight * d * b;
-    dc += weight * d * c;
-    bb += weight * b * b;
-    bc += weight * b * c;
-    cc += weight * c * c;
-    rd += weight * d * residual;
-    rb += weight * b * residual;
-    rc += weight * c * residual;
+/**
+ * The starts that one minimum at one C/B calls for.
+ *
+ * @param lower, higher the minima at the next C/B on either side; undefined at the ends of the range, beyond which nothing is
+ *   looked for
+ */
+function startsFrom(minimum: RoughMinimum, ratio: number, lower: readonly RoughMinimum[] | undefined, higher: readonly RoughMinimum[] | undefined): Start[] {
+  const next = higher && sameValley(minimum, higher, ratioStep);
+  const starts: Start[] = [];
+  if (next) {
+    const part = turn(minimum, next);
+    if (part !== null) starts.push(between(minimum, next, part, ratio));
   }
-  return { chi2, normal: [[dd, db, dc], [db, bb, bc], [dc, bc, cc]], right: [rd, rb, rc] };
+  // Where the valley ends while it falls, there is a minimum on the way.
+  const ends = minimum.byRatio < 0 ? higher && !next : lower && !sameValley(minimum, lower, -ratioStep);
+  if (ends) starts.push(placeOf(minimum, ratio));
+  return starts;
 }
 
-/** A relative step below this moves nothing that could be measured; a fit with large residuals creeps to it slowly. */
-const smallestStep = 1e-12;
+/**
+ * Where between two minima of a valley its floor turns from falling to rising, as a fraction of the way; null where it does
+ * not. The floor is taken as the cubic that has both heights and both slopes.
+ */
+function turn(from: RoughMinimum, to: RoughMinimum): number | null {
+  const first = from.byRatio * ratioStep;
+  const last = to.byRatio * ratioStep;
+  const rise = to.chi2 - from.chi2;
+  const square = 3 * (first + last - 2 * rise);
+  const linear = 2 * (3 * rise - 2 * first - last);
+  // The root of square s^2 + linear s + first at which it rises.
+  const root = Math.sqrt(linear * linear - 4 * square * first);
+  const part = linear > 0 ? (-2 * first) / (linear + root) : (root - linear) / (2 * square);
+  if (part > 0 && part < 1) return part;
+  return first < 0 && last > 0 ? first / (first - last) : null;
+}
 
-/** Levenberg's damped Gauss-Newton from one start; null where it leaves the allowed region. */
-function descend(ion: GroundCase, ground: string, labels: readonly string[], targets: readonly Target[], start: FieldParameters): FreeMinimum | null {
-  let at: readonly [number, number, number] = [start.delta, start.racahB, start.racahC];
-  let here = linearise(ion, ground, labels, targets, at);
-  let damping = 1e-8;
-  for (let step = 0, refused = 0; step < 100 && refused < 10; step++) {
-    const { normal, right } = here;
-    const size = Math.max(normal[0]![0]!, normal[1]![1]!, normal[2]![2]!);
-    const damped = normal.map((row, i) => row.map((value, j) => (i === j ? value + damping * size : value)));
-    const move = solvePositive(damped, right);
-    if (!move) return null;
-    const next: readonly [number, number, number] = [at[0] * (1 + move[0]!), at[1] * (1 + move[1]!), at[2] * (1 + move[2]!)];
-    const length = Math.max(Math.abs(move[0]!), Math.abs(move[1]!), Math.abs(move[2]!));
-    if (next[0] > 0 && next[1] > 0 && next[2] > 0) {
-      const there = linearise(ion, ground, labels, targets, next);
-      if (there.chi2 <= here.chi2) {
-        at = next;
-        here = there;
-        refused = 0;
-        damping = Math.max(1e-15, damping / 10);
-        if (length < smallestStep) break;
-        continue;
-      }
-      // At the bottom rounding alone decides which of two points is lower.
-      if (length < 1e-9) break;
-    }
-    damping = Math.max(damping, 1e-12) * 10;
-    refused++;
+/** The minimum in which a valley goes on at the next C/B: both drifts lead to one place half way. */
+function sameValley(minimum: RoughMinimum, row: readonly RoughMinimum[], step: number): RoughMinimum | null {
+  let best: RoughMinimum | null = null;
+  let least = near;
+  for (const other of row) {
+    const apart = Math.abs(other.t - minimum.t - (step / 2) * (other.drift + minimum.drift));
+    if (other.ground !== minimum.ground || !(apart < least)) continue;
+    least = apart;
+    best = other;
   }
-  const [delta, racahB, racahC] = at;
-  if (!(racahC > lowestRatio * racahB && racahC < highestRatio * racahB)) return null;
-  return { at: { delta, racahB, racahC }, chi2: here.chi2, ground };
+  return best;
+}
+
+function placeOf({ t, rho, ground }: { readonly t: number; readonly rho: number; readonly ground: string }, ratio: number): Start {
+  const unit = pointOnCurve(t, ratio);
+  return { delta: rho * unit.delta, racahB: rho * unit.racahB, racahC: rho * unit.racahC, ground };
+}
+
+/** The place at a fraction of the way between two minima of one valley; t on the cubic that has both drifts. */
+function between(from: RoughMinimum, to: RoughMinimum, part: number, ratio: number): Start {
+  const way = to.t - from.t;
+  const bend = part * (1 - part) * ((1 - part) * (from.drift * ratioStep - way) - part * (to.drift * ratioStep - way));
+  return placeOf({ t: from.t + part * way + bend, rho: from.rho + part * (to.rho - from.rho), ground: from.ground }, ratio + part * ratioStep);
 }

@@ -62,8 +62,31 @@ function bestSymmetric(targets: readonly Target[], energies: ArrayLike<number>):
   return { rho, chi2: misfitAt(targets, energies, rho) };
 }
 
-/** Best rho for asymmetric weights: between two breakpoints chi2 is one parabola, so the minimum is closed form there. */
+/** Steps in which the pieces are nearly always sorted out; a pair of pieces that send each other back and forth is left to the search. */
+const stepsAtMost = 12;
+
+/** Best rho for asymmetric weights, by steps from piece to piece: each to the minimum of the parabola that holds at the last rho. */
 function bestAsymmetric(targets: readonly Target[], energies: ArrayLike<number>): Scaled {
+  let rho = 0;
+  for (let step = 0; step < stepsAtMost; step++) {
+    let squares = 0;
+    let products = 0;
+    for (let k = 0; k < targets.length; k++) {
+      const { observed, weightBelow, weightAbove } = targets[k]!;
+      const energy = energies[k]!;
+      const weighted = energy * (rho * energy < observed ? weightBelow : weightAbove);
+      squares += weighted * energy;
+      products += weighted * observed;
+    }
+    const next = squares > 0 ? products / squares : 0;
+    if (Math.abs(next - rho) <= Number.EPSILON * Math.abs(next)) return { rho: next, chi2: misfitAt(targets, energies, next) };
+    rho = next;
+  }
+  return bestByPieces(targets, energies);
+}
+
+/** Best rho for asymmetric weights: between two breakpoints chi2 is one parabola, so the minimum is closed form there. */
+function bestByPieces(targets: readonly Target[], energies: ArrayLike<number>): Scaled {
   const breaks: number[] = [];
   for (let k = 0; k < targets.length; k++) if (energies[k]! !== 0) breaks.push(targets[k]!.observed / energies[k]!);
   if (breaks.length === 0) return { rho: 0, chi2: misfitAt(targets, energies, 0) };
@@ -103,4 +126,50 @@ export function misfitSlope(
     sum += weightAt(target, calculated) * (target.observed - calculated) * slopes[k]!;
   }
   return -2 * rho * sum;
+}
+
+/** Targets in columns, for the inner loops. */
+export interface Columns {
+  readonly targets: readonly Target[];
+  readonly observed: Float64Array;
+  /** Weights where they are alike on both sides; null where some differ. */
+  readonly weights: Float64Array | null;
+}
+
+export function columnsOf(targets: readonly Target[]): Columns {
+  return {
+    targets, observed: Float64Array.from(targets, (target) => target.observed),
+    weights: isSymmetric(targets) ? Float64Array.from(targets, (target) => target.weightBelow) : null,
+  };
+}
+
+/** d chi2/dt at the best scale, and that scale; written anew for every point of a curve. */
+export interface CurvePoint {
+  rho: number;
+  slope: number;
+}
+
+/** The best scale at one point of the curve, and d chi2/dt there; `misfitSlope` in one pass where weights are symmetric. */
+export function pointOfCurve({ targets, observed, weights }: Columns, energies: Float64Array, slopes: Float64Array, into: CurvePoint): void {
+  if (!weights) {
+    into.rho = bestAsymmetric(targets, energies).rho;
+    into.slope = misfitSlope(targets, energies, slopes, into.rho);
+    return;
+  }
+  let squares = 0;
+  let products = 0;
+  let squaresSlope = 0;
+  let productsSlope = 0;
+  for (let k = 0; k < observed.length; k++) {
+    const energy = energies[k]!;
+    const weighted = weights[k]! * energy;
+    const weightedSlope = weights[k]! * slopes[k]!;
+    squares += weighted * energy;
+    products += weighted * observed[k]!;
+    squaresSlope += weightedSlope * energy;
+    productsSlope += weightedSlope * observed[k]!;
+  }
+  const rho = squares > 0 ? products / squares : 0;
+  into.rho = rho;
+  into.slope = -2 * rho * (productsSlope - rho * squaresSlope);
 }

@@ -28,12 +28,7 @@ import type { ScoredReading } from './search.ts';
 import { stressOf } from './stress.ts';
 import type { GroundCase } from './transitions.ts';
 import type { Branch, Evidence, Parameter, Reading, ReadingBand, ReadMeasurement } from './types.ts';
-
-/** Spare bands that disagree with a probability below this make a reading strained. */
-const strainedBelow = 0.01;
-
-/** Two solutions whose chi2 differ by less fit equally well. */
-const equalWithin = 1;
+import { equalWithin, strainedBelow } from './verdictLimits.ts';
 
 /** What a reading is written from. */
 interface Context {
@@ -90,7 +85,8 @@ function rivalry(chosen: ScoredReading, rivals: readonly ScoredReading[], policy
   if (!best || !beatable) return noRivalry;
   const difference = best.score - chosen.score;
   if (!(difference <= policy.rivalMargin)) return noRivalry;
-  return { best: difference < -policy.rivalMargin ? 'better' : 'near', otherGeometry: best.ion.geometry !== chosen.ion.geometry, words: rivalWords(best, chosen) };
+  const otherGeometry = rivals.some((rival) => rival.score - chosen.score <= policy.rivalMargin && rival.ion.geometry !== chosen.ion.geometry);
+  return { best: difference < -policy.rivalMargin ? 'better' : 'near', otherGeometry, words: rivalWords(best, chosen) };
 }
 
 /** What a rival makes of the bands, and of what ion where that differs from the declared one. */

@@ -1,8 +1,10 @@
 import { groundLabel, levelNames } from '../levels/labels.ts';
-import { bestScale, isSymmetric, misfitSlope } from './misfit.ts';
-import type { Target } from './misfit.ts';
-import { gridPoints, gridStep, levelPlace } from './table.ts';
-import type { LevelTable } from './table.ts';
+import { evaluatorOf } from './evaluate.ts';
+import type { Evaluator } from './evaluate.ts';
+import { bestScale, columnsOf, misfitSlope, pointOfCurve } from './misfit.ts';
+import type { Columns, CurvePoint, Target } from './misfit.ts';
+import { gridPoints, gridStep, levelPlace, pointOnCurve, slopeAt } from './table.ts';
+import type { GridLevel, LevelTable } from './table.ts';
 import type { GroundCase } from './transitions.ts';
 
 /** A local minimum of chi2 along the curve, at one C/B. */
@@ -25,7 +27,8 @@ const segmentsHeld = new WeakMap<LevelTable, Map<number, readonly Segment[]>>();
 
 /**
  * Where along the curve which level is lowest of the declared multiplicity. For most ions one level is
- * lowest everywhere; the doublets of d3 and d7 and the singlets of d4 change.
+ * lowest everywhere; the doublets of d3 and d7 and the singlets of d4 change. The outermost quarter of a degree at each end
+ * is left out: Delta/B below 0.09 and above 4500 is no ligand field, and at the ends themselves rounding decides.
  */
 function groundSegments(table: LevelTable, multiplicity: number): readonly Segment[] {
   let byMultiplicity = segmentsHeld.get(table);
@@ -43,30 +46,30 @@ function groundSegments(table: LevelTable, multiplicity: number): readonly Segme
   const strongest = groundLabel(electrons, geometry, multiplicity);
   const at = (i: number): number => {
     let best = Math.max(0, lowest.indexOf(strongest ?? ''));
-    // At the ends of the curve levels coincide; a difference of rounding is no crossing.
+    // Where levels coincide a difference of rounding is no crossing.
     for (let k = 0; k < levels.length; k++) if (levels[k]!.energy[i]! < levels[best]!.energy[i]! - 1e-9) best = k;
     return best;
   };
   const found: Segment[] = [];
-  let first = 0;
+  let first = 1;
   let current = at(1);
-  for (let i = 2; i < gridPoints; i++) {
-    const next = i === gridPoints - 1 ? current : at(i);
+  for (let i = 2; i < gridPoints - 1; i++) {
+    const next = at(i);
     if (next === current) continue;
     // Both neighbours cover the cell in which the crossing lies, so no minimum falls between them.
     found.push({ ground: lowest[current]!, first, last: i });
     first = i - 1;
     current = next;
   }
-  found.push({ ground: lowest[current]!, first, last: gridPoints - 1 });
+  found.push({ ground: lowest[current]!, first, last: gridPoints - 2 });
   byMultiplicity.set(multiplicity, found);
   return found;
 }
 
-/** Grid points passed over in a coarse scan: half a degree. */
+/** Grid points passed over where only rough minima are wanted: half a degree. */
 const coarseStride = 2;
 
-/** Cubic Hermite interpolation in one grid cell: value and derivative at fraction s. */
+/** Cubic Hermite interpolation in one grid cell: value and derivative by t at fraction s. */
 function interpolate(energy: Float64Array, slope: Float64Array, i: number, s: number, out: [number, number]): void {
   const y0 = energy[i]!;
   const y1 = energy[i + 1]!;
@@ -78,72 +81,146 @@ function interpolate(energy: Float64Array, slope: Float64Array, i: number, s: nu
   out[1] = (m0 + s * (2 * c + s * 3 * d)) / gridStep;
 }
 
-/** Work space of one scan: transition energies and slopes at one t. */
-interface Point {
+/** Targets against the transitions of one segment, with the work space of a scan. */
+interface Curve {
+  readonly transitions: readonly GridLevel[];
+  readonly columns: Columns;
+  /** Transition energies and slopes at the last point asked for, and what came of them. */
   readonly energies: Float64Array;
   readonly slopes: Float64Array;
+  readonly point: CurvePoint;
+}
+
+function curveOf(table: LevelTable, ground: string, labels: readonly string[], columns: Columns): Curve {
+  return {
+    transitions: labels.map((label) => table.transition(ground, label)), columns,
+    energies: new Float64Array(labels.length), slopes: new Float64Array(labels.length), point: { rho: 0, slope: 0 },
+  };
+}
+
+/** d chi2/dt at a grid point; NaN where no positive scale is best. */
+function slopeOnGrid({ transitions, columns, energies, slopes, point }: Curve, i: number): number {
+  for (let k = 0; k < transitions.length; k++) {
+    const { energy, slope } = transitions[k]!;
+    energies[k] = energy[i]!;
+    slopes[k] = slope[i]!;
+  }
+  pointOfCurve(columns, energies, slopes, point);
+  return point.rho > 0 ? point.slope : Number.NaN;
+}
+
+/** d chi2/dt at fraction s of the cell above grid point i. */
+function slopeInCell({ transitions, columns, energies, slopes, point }: Curve, i: number, s: number): number {
+  const out: [number, number] = [0, 0];
+  for (let k = 0; k < transitions.length; k++) {
+    const { energy, slope } = transitions[k]!;
+    interpolate(energy, slope, i, s, out);
+    energies[k] = out[0];
+    slopes[k] = out[1];
+  }
+  pointOfCurve(columns, energies, slopes, point);
+  return point.slope;
+}
+
+/**
+ * Cells of the grid in which d chi2/dt turns from falling to rising, as [grid index, slope at its lower end, at its upper].
+ * With a stride the turns are looked for that far apart.
+ */
+function turningCells(curve: Curve, { first, last }: Segment, stride: number): [number, number, number][] {
+  const found: [number, number, number][] = [];
+  let before = slopeOnGrid(curve, first);
+  for (let i = first; i < last; i += stride) {
+    const next = Math.min(i + stride, last);
+    const after = slopeOnGrid(curve, next);
+    if (before <= 0 && after > 0 && !(before === 0 && i === first)) found.push(next === i + 1 ? [i, before, after] : halfOf(curve, i, before, after));
+    before = after;
+  }
+  return found;
+}
+
+/** The one of two neighbouring cells in which the slope turns. */
+function halfOf(curve: Curve, i: number, before: number, after: number): [number, number, number] {
+  const middle = slopeOnGrid(curve, i + 1);
+  return middle > 0 ? [i, before, middle] : [i + 1, middle, after];
 }
 
 /**
  * All local minima of chi2 inside 0 < t < 90 degrees for transitions from the ground level, at the table's
- * C/B, ascending in chi2. Minima at an end of the curve are not solutions and are left out, as is every
- * point where the best scale is not positive.
- *
- * @param precision `exact`: to machine precision; `grid`: the better end of the bracketing cell, for starts
+ * C/B, to machine precision, ascending in chi2. Minima at an end of the curve are not solutions and are left out,
+ * as is every point where the best scale is not positive.
  *
  * On the grid the sign of the exact d chi2/dt brackets each minimum; inside the cell it is found on the
  * Hermite interpolant and then corrected by Newton steps on exact levels.
  */
-export function minimaOnCurve(
-  table: LevelTable, ion: GroundCase, labels: readonly string[], targets: readonly Target[], precision: 'exact' | 'grid' = 'exact',
-): Minimum[] {
-  const symmetric = isSymmetric(targets);
-  const upper = labels.map((label) => table.grid(label));
-  const count = labels.length;
-  const point: Point = { energies: new Float64Array(count), slopes: new Float64Array(count) };
+export function minimaOnCurve(table: LevelTable, ion: GroundCase, labels: readonly string[], targets: readonly Target[]): Minimum[] {
+  const columns = columnsOf(targets);
   const found: Minimum[] = [];
   for (const segment of groundSegments(table, ion.multiplicity)) {
-    const lower = table.grid(segment.ground);
-    const slopeOnGrid = (i: number): number => {
-      for (let k = 0; k < count; k++) {
-        point.energies[k] = upper[k]!.energy[i]! - lower.energy[i]!;
-        point.slopes[k] = upper[k]!.slope[i]! - lower.slope[i]!;
-      }
-      const { rho } = bestScale(targets, point.energies, symmetric);
-      return rho > 0 ? misfitSlope(targets, point.energies, point.slopes, rho) : Number.NaN;
-    };
-    const out: [number, number] = [0, 0];
-    const slopeInCell = (i: number, s: number): number => {
-      for (let k = 0; k < count; k++) {
-        interpolate(upper[k]!.energy, upper[k]!.slope, i, s, out);
-        const [energy, slope] = out;
-        interpolate(lower.energy, lower.slope, i, s, out);
-        point.energies[k] = energy - out[0];
-        point.slopes[k] = slope - out[1];
-      }
-      const { rho } = bestScale(targets, point.energies, symmetric);
-      return misfitSlope(targets, point.energies, point.slopes, rho);
-    };
-    const stride = precision === 'grid' ? coarseStride : 1;
-    let before = slopeOnGrid(segment.first);
-    for (let i = segment.first; i < segment.last; i += stride) {
-      const next = Math.min(i + stride, segment.last);
-      const after = slopeOnGrid(next);
-      const bracketed = before <= 0 && after > 0 && !(before === 0 && i === segment.first);
-      if (bracketed && precision === 'grid') {
-        const nearer = -before < after ? i : next;
-        slopeOnGrid(nearer);
-        found.push({ t: nearer * gridStep, ...bestScale(targets, point.energies, symmetric), ground: segment.ground });
-      } else if (bracketed) {
-        const s = rootOfRising((fraction) => slopeInCell(i, fraction), before, after);
-        const exact = correct(table, segment.ground, labels, targets, symmetric, (i + s) * gridStep);
-        if (exact && isLowest(table, ion, segment.ground, exact.t)) found.push(exact);
-      }
-      before = after;
+    const curve = curveOf(table, segment.ground, labels, columns);
+    const cells = turningCells(curve, segment, 1);
+    if (cells.length === 0) continue;
+    const evaluator = evaluatorOf(table.ion, segment.ground, labels);
+    for (const [i, before, after] of cells) {
+      const s = rootOfRising((fraction) => slopeInCell(curve, i, fraction), before, after);
+      const exact = correct(table, evaluator, segment.ground, targets, columns.weights !== null, (i + s) * gridStep, curvatureInCell(curve, i, s));
+      if (exact && isLowest(table, ion, segment.ground, exact.t)) found.push(exact);
     }
   }
   return found.sort((a, b) => a.chi2 - b.chi2);
 }
+
+/** A local minimum along the curve as the interpolated table has it, good to about 1e-6 in t. */
+export interface RoughMinimum extends Minimum {
+  /** d chi2 / d(C/B) with t and rho left to follow. */
+  readonly byRatio: number;
+  /** d t / d(C/B): how the minimum moves along the curve. */
+  readonly drift: number;
+}
+
+/** As `minimaOnCurve`, from the table alone: starts for a search over C/B. In no order. */
+export function roughMinimaOnCurve(table: LevelTable, ion: GroundCase, labels: readonly string[], columns: Columns): RoughMinimum[] {
+  const found: RoughMinimum[] = [];
+  for (const segment of groundSegments(table, ion.multiplicity)) {
+    const curve = curveOf(table, segment.ground, labels, columns);
+    for (const [i, before, after] of turningCells(curve, segment, coarseStride)) {
+      const s = rootOfRising((fraction) => slopeInCell(curve, i, fraction), before, after);
+      found.push(roughMinimum(curve, segment.ground, i, s));
+    }
+  }
+  return found;
+}
+
+function roughMinimum(curve: Curve, ground: string, i: number, s: number): RoughMinimum {
+  const { transitions, columns, energies, slopes, point } = curve;
+  const curvature = curvatureInCell(curve, i, s);
+  const atMinimum = slopeInCell(curve, i, s);
+  const { rho } = point;
+  const { chi2 } = bestScale(columns.targets, energies, columns.weights !== null);
+  // At a minimum in t and rho the derivative is the one at constant t and rho.
+  const rates = Float64Array.from(transitions, ({ byRatio }) => byRatio[i]! + s * (byRatio[i + 1]! - byRatio[i]!));
+  const byRatio = misfitSlope(columns.targets, energies, rates, rho);
+  for (let k = 0; k < transitions.length; k++) {
+    const { byRatio: rate } = transitions[k]!;
+    energies[k]! += smallRatio * rates[k]!;
+    slopes[k]! += (smallRatio * (rate[i + 1]! - rate[i]!)) / gridStep;
+  }
+  pointOfCurve(columns, energies, slopes, point);
+  const drift = curvature > 0 ? (atMinimum - point.slope) / (smallRatio * curvature) : 0;
+  return { t: (i + s) * gridStep, rho, chi2, ground, byRatio, drift };
+}
+
+/** Change of C/B over which the drift of a minimum is taken. */
+const smallRatio = 1e-3;
+
+/** d2 chi2/dt2 of the interpolant. */
+const curvatureInCell = (curve: Curve, i: number, s: number): number =>
+  (slopeInCell(curve, i, s + nearby) - slopeInCell(curve, i, s - nearby)) / (2 * nearby * gridStep);
+
+/** Fraction of a cell over which the curvature is taken. */
+const nearby = 1e-3;
+
+/** Fraction of a cell to which the interpolant is solved: it is no truer than this. */
+const fractionTolerance = 1e-7;
 
 /** Root in (0, 1) of a function that is not positive at 0 and positive at 1 (regula falsi, Illinois variant). */
 function rootOfRising(f: (s: number) => number, atZero: number, atOne: number): number {
@@ -155,15 +232,15 @@ function rootOfRising(f: (s: number) => number, atZero: number, atOne: number): 
   for (let step = 0; step < 60; step++) {
     const s = (low * fHigh - high * fLow) / (fHigh - fLow);
     const value = f(s);
-    if (value === 0 || high - low < 1e-13) return s;
+    if (value === 0 || high - low < fractionTolerance) return s;
     if (value > 0) {
-      if (high - s < 1e-13) return s;
+      if (high - s < fractionTolerance) return s;
       high = s;
       fHigh = value;
       if (side === 1) fLow /= 2;
       side = 1;
     } else {
-      if (s - low < 1e-13) return s;
+      if (s - low < fractionTolerance) return s;
       low = s;
       fLow = value;
       if (side === -1) fHigh /= 2;
@@ -173,49 +250,41 @@ function rootOfRising(f: (s: number) => number, atZero: number, atOne: number): 
   return (low + high) / 2;
 }
 
-/** chi2 and its slope from exact levels at t. */
-function exactAt(
-  table: LevelTable, ground: string, labels: readonly string[], targets: readonly Target[], symmetric: boolean, t: number,
-): { rho: number; chi2: number; slope: number; curvature: number } {
-  const [lower, ...upper] = table.exact([ground, ...labels], t);
-  const energies = upper.map((level) => level.energy - lower!.energy);
-  const slopes = upper.map((level) => level.slope - lower!.slope);
-  const { rho, chi2 } = bestScale(targets, energies, symmetric);
-  return { rho, chi2, slope: misfitSlope(targets, energies, slopes, rho), curvature: gaussNewtonCurvature(targets, energies, slopes, rho) };
+/** Exact chi2 with its scale and its slope at t. */
+interface ExactPoint extends CurvePoint {
+  readonly chi2: number;
 }
 
-/** Second derivative of chi2 by t with rho eliminated, residual terms left out. */
-function gaussNewtonCurvature(targets: readonly Target[], energies: readonly number[], slopes: readonly number[], rho: number): number {
-  let tt = 0;
-  let tr = 0;
-  let rr = 0;
-  for (let k = 0; k < targets.length; k++) {
-    const weight = targets[k]!.observed > rho * energies[k]! ? targets[k]!.weightBelow : targets[k]!.weightAbove;
-    tt += weight * (rho * slopes[k]!) ** 2;
-    tr += weight * rho * slopes[k]! * energies[k]!;
-    rr += weight * energies[k]! ** 2;
-  }
-  return 2 * (tt - (tr * tr) / rr);
+function exactAt(table: LevelTable, evaluator: Evaluator, targets: readonly Target[], symmetric: boolean, t: number): ExactPoint {
+  const { delta, racahB, racahC } = pointOnCurve(t, table.ratio);
+  evaluator.evaluate(delta, racahB, racahC);
+  const { rho, chi2 } = bestScale(targets, evaluator.energy, symmetric);
+  const slopes = Float64Array.from(targets, (_, k) => slopeAt(t, table.ratio, evaluator.delta[k]!, evaluator.racahB[k]!, evaluator.racahC[k]!));
+  return { rho, chi2, slope: misfitSlope(targets, evaluator.energy, slopes, rho) };
 }
 
-/** Exact refinement from an interpolated minimum: Newton with a secant slope after the first step. */
+/** A step shorter than this changes nothing but rounding after it: the curvature is known to a thousandth. */
+const lastStep = 1e-13;
+
+/** Exact refinement from an interpolated minimum: Newton steps, with the curvature of the interpolant and then of the secant. */
 function correct(
-  table: LevelTable, ground: string, labels: readonly string[], targets: readonly Target[], symmetric: boolean, start: number,
+  table: LevelTable, evaluator: Evaluator, ground: string, targets: readonly Target[], symmetric: boolean, start: number, interpolated: number,
 ): Minimum | null {
   let t = start;
-  let here = exactAt(table, ground, labels, targets, symmetric, t);
-  let curvature = here.curvature;
+  let here = exactAt(table, evaluator, targets, symmetric, t);
+  let curvature = interpolated;
   for (let step = 0; step < 8; step++) {
     if (!(here.rho > 0)) return null;
     const move = curvature > 0 ? -here.slope / curvature : 0;
     // The interpolant is good to 1e-9 of the scale, so a step is tiny; a long one means a flat, undetermined curve.
     if (Math.abs(move) > gridStep || Math.abs(move) < 1e-14) break;
-    const next = exactAt(table, ground, labels, targets, symmetric, t + move);
+    const next = exactAt(table, evaluator, targets, symmetric, t + move);
     if (Math.abs(next.slope) >= Math.abs(here.slope)) break;
     const secant = (next.slope - here.slope) / move;
     if (secant > 0) curvature = secant;
     t += move;
     here = next;
+    if (Math.abs(move) < lastStep) break;
   }
   return here.rho > 0 ? { t, rho: here.rho, chi2: here.chi2, ground } : null;
 }

@@ -4,7 +4,8 @@ import type { Policy } from '../policy/types.ts';
 import { boundFor } from './bound.ts';
 import { gatherItems } from './candidates.ts';
 import type { Freedom, Item, NotFitted } from './candidates.ts';
-import { bandEvidence, gatherEvidence, leftOverPenalty, scoreOf } from './evidence.ts';
+import { bandEvidence, gatherEvidence, scoreOf } from './evidence.ts';
+import { evidenceWeights } from './evidenceWeights.ts';
 import { fitAssignment, isFit } from './fit.ts';
 import type { Assigned, FitOutcome } from './fit.ts';
 import { floorOf, transitionOf } from './transitions.ts';
@@ -139,7 +140,7 @@ export function searchReadings(task: SearchTask, freedom: Freedom, known = Numbe
         return { label: label as string | null, sums: grown as Float64Array | null, cost: paid, least: paid + bound.least(grown) };
       });
     if (item.leaveOut) {
-      const paid = cost + (item.leaveOut.counts ? leftOverPenalty : 0);
+      const paid = cost + (item.leaveOut.counts ? evidenceWeights.leftOver : 0);
       next.push({ label: null, sums, cost: paid, least: paid + bound.least(sums) });
     }
     return next.sort((a, b) => a.least - b.least);

@@ -3,7 +3,7 @@ import type { Gradient } from '../levels/levels.ts';
 import { degeneratePair } from '../levels/labels.ts';
 import { fieldSign, levelLabel } from '../levels/levels.ts';
 import { diagonalise, levelSlopes, solveBlock } from '../levels/solve.ts';
-import type { Diagonal } from '../levels/solve.ts';
+import type { LevelSlopes } from '../levels/solve.ts';
 import { shellBlocks } from '../shell/blocks.ts';
 import type { Block } from '../shell/blocks.ts';
 
@@ -28,10 +28,11 @@ export interface FieldCase {
   readonly geometry: Geometry;
 }
 
-/** A level on the grid: absolute energy and its derivative by t, for rho = 1. */
+/** A level or a transition on the grid: energy and its derivatives by t and by C/B, for rho = 1. */
 export interface GridLevel {
   readonly energy: Float64Array;
   readonly slope: Float64Array;
+  readonly byRatio: Float64Array;
 }
 
 /** A level at one t: absolute energy, derivative by t, and exact derivatives by Delta, B and C. */
@@ -45,8 +46,10 @@ export interface LevelTable {
   readonly ion: FieldCase;
   /** C/B. */
   readonly ratio: number;
-  /** A level by its letter form on the grid; computed with its block on first use. */
+  /** A level by its letter form on the grid, absolute; computed with its block on first use. */
   grid(label: string): GridLevel;
+  /** The transition between two levels on the grid. */
+  transition(ground: string, label: string): GridLevel;
   /** The named levels at angle t, in the order asked for. */
   exact(labels: readonly string[], t: number): ExactLevel[];
 }
@@ -89,17 +92,26 @@ export function pointOnCurve(t: number, ratio: number): { delta: number; racahB:
   return { delta: angleScale * Math.sin(t), racahB, racahC: ratio * racahB };
 }
 
-function slopeAt(t: number, ratio: number, field: number, racahB: number, racahC: number): number {
+/** d energy / dt on the curve, from the derivatives by Delta, B and C. */
+export function slopeAt(t: number, ratio: number, field: number, racahB: number, racahC: number): number {
   return field * angleScale * Math.cos(t) - (racahB + ratio * racahC) * Math.sin(t);
+}
+
+const emptyLevel = (): GridLevel => ({ energy: new Float64Array(gridPoints), slope: new Float64Array(gridPoints), byRatio: new Float64Array(gridPoints) });
+
+function difference(upper: GridLevel, lower: GridLevel): GridLevel {
+  const minus = (a: Float64Array, b: Float64Array): Float64Array => a.map((value, i) => value - b[i]!);
+  return { energy: minus(upper.energy, lower.energy), slope: minus(upper.slope, lower.slope), byRatio: minus(upper.byRatio, lower.byRatio) };
 }
 
 function makeTable(ion: FieldCase, ratio: number): LevelTable {
   const sign = fieldSign(ion.geometry);
   const solved = new Map<Block, GridLevel[]>();
   const known = new Map<string, GridLevel>();
+  const transitions = new Map<string, Map<string, GridLevel>>();
 
   function solveOnGrid(block: Block): GridLevel[] {
-    const levels = Array.from({ length: block.size }, () => ({ energy: new Float64Array(gridPoints), slope: new Float64Array(gridPoints) }));
+    const levels = Array.from({ length: block.size }, emptyLevel);
     for (let i = 0; i < gridPoints; i++) {
       const t = i * gridStep;
       const { delta, racahB, racahC } = pointOnCurve(t, ratio);
@@ -107,39 +119,44 @@ function makeTable(ion: FieldCase, ratio: number): LevelTable {
       for (let k = 0; k < block.size; k++) {
         levels[k]!.energy[i] = solution.energy[k]!;
         levels[k]!.slope[i] = slopeAt(t, ratio, solution.field[k]!, solution.racahB[k]!, solution.racahC[k]!);
+        levels[k]!.byRatio[i] = solution.racahC[k]! * racahB;
       }
     }
     return levels;
   }
 
+  function grid(label: string): GridLevel {
+    let level = known.get(label);
+    if (!level) {
+      const { block, index } = levelPlace(ion, label);
+      let levels = solved.get(block);
+      if (!levels) {
+        levels = solveOnGrid(block);
+        solved.set(block, levels);
+      }
+      level = levels[index]!;
+      known.set(label, level);
+    }
+    return level;
+  }
+
   return {
     ion,
     ratio,
-    grid(label) {
-      let level = known.get(label);
-      if (!level) {
-        const { block, index } = levelPlace(ion, label);
-        let levels = solved.get(block);
-        if (!levels) {
-          levels = solveOnGrid(block);
-          solved.set(block, levels);
-        }
-        level = levels[index]!;
-        known.set(label, level);
-      }
-      return level;
+    grid,
+    transition(ground, label) {
+      let fromGround = transitions.get(ground);
+      if (!fromGround) transitions.set(ground, (fromGround = new Map()));
+      let found = fromGround.get(label);
+      if (!found) fromGround.set(label, (found = difference(grid(label), grid(ground))));
+      return found;
     },
     exact(labels, t) {
       const { delta, racahB, racahC } = pointOnCurve(t, ratio);
-      const solved = new Map<Block, Diagonal>();
+      const slopes: LevelSlopes = { field: 0, racahB: 0, racahC: 0 };
       return labels.map((label) => {
         const { block, index } = levelPlace(ion, label);
-        let diagonal = solved.get(block);
-        if (!diagonal) {
-          diagonal = diagonalise(block, sign, delta, racahB, racahC);
-          solved.set(block, diagonal);
-        }
-        const slopes = levelSlopes(block, sign, diagonal, index);
+        levelSlopes(block, sign, diagonalise(block, sign, delta, racahB, racahC), index, slopes);
         return {
           energy: delta * slopes.field + racahB * slopes.racahB + racahC * slopes.racahC,
           slope: slopeAt(t, ratio, slopes.field, slopes.racahB, slopes.racahC),

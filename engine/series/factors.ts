@@ -12,6 +12,7 @@ import type { Identifiable } from './identifiable.ts';
 import { donorAtoms } from './identity.ts';
 import { islandsOf } from './islands.ts';
 import { fullLeverage, scatterWithout } from './leaveOneOut.ts';
+import { isLoose } from './looseness.ts';
 import { normalEquations, solveIsland } from './normalEquations.ts';
 import { fitWithScatter } from './scatter.ts';
 import type { ScatterFit, WeighedIsland } from './scatter.ts';
@@ -122,6 +123,7 @@ function complexInFit(island: Island, number: number, row: number, fit: ScatterF
   if (1 - leverage < fullLeverage) return { ...common, leftOut: null };
   const rest = scatterWithout(fit, (weight * residual ** 2) / (1 - leverage));
   const u = Math.sqrt((rest.factor * variance) / (1 - leverage) + rest.scatter ** 2);
+  if (isLoose(parameter, 'prediction', u)) return { ...common, leftOut: null };
   const deleted = residual / (1 - leverage);
   const predicted = fromModelScale(parameter, island.data.found[row]! - deleted, u);
   const z = normalOfStudent(zOf(deleted, Math.hypot(u, island.u[row]!)), rest.degrees);
@@ -146,12 +148,14 @@ function factorsOf(
     const isGauge = kind === 'ligand' && name === island.gauge;
     const place = island.names.findIndex((one) => one.kind === kind && one.name === name);
     const fixed = isGauge || isFixed(island.names.map((_, j) => (j === place ? 1 : 0)), rank);
+    const u = isGauge || !fixed ? 0 : Math.sqrt(rank.covariance[place]![place]!);
+    const loose = isLoose(parameter, kind, u);
     const combinations = fixed ? null : fixedCombinations(behind, parameter);
-    const reason = factorReason({ gauge: isGauge, gaugeIsAqua: island.gauge === aqua, complexes: behind.length, tested, combinations });
+    const reason = factorReason({ gauge: isGauge, gaugeIsAqua: island.gauge === aqua, complexes: behind.length, tested, combinations, loose });
     const common = { kind, name, complexes: behind.length, island: number + 1, gauge: isGauge, tested, reason };
     if (isGauge) return { ...common, value: 1, u: 0 };
-    if (!fixed) return { ...common, value: null, u: null };
-    return { ...common, ...fromModelScale(parameter, unknowns[place]!, Math.sqrt(rank.covariance[place]![place]!)) };
+    if (!fixed || loose) return { ...common, value: null, u: null };
+    return { ...common, ...fromModelScale(parameter, unknowns[place]!, u) };
   });
 }
 

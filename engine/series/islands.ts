@@ -18,9 +18,9 @@ export function islandsOf(sets: readonly (readonly string[])[]): readonly number
   for (const set of sets)
     for (const name of set) {
       if (!parent.has(name)) parent.set(name, name);
-      const [a, b] = [root(set[0]!), root(name)];
       // The lower name becomes the root, so that the result does not hang on the order.
-      if (a !== b) parent.set(a < b ? b : a, a < b ? a : b);
+      const [low, high] = [root(set[0]!), root(name)].sort() as [string, string];
+      if (low !== high) parent.set(high, low);
     }
   const roots = sets.map((set) => root(set[0]!));
   const sizes = new Map<string, number>();

@@ -48,42 +48,51 @@ function chiSquare({ parameter, compositions, found }: IslandData, weights: Floa
 }
 
 const stepsAtMost = 200;
+/** Residuals this nearly at right angles to every column of the Jacobian: a stationary point. */
+const rightAngle = 1e-11;
+/** A step that betters chi2 by less than this share of it. */
+const noGain = 1e-13;
 
 /**
- * Least squares by Gauss-Newton steps with Marquardt's damping (J. Soc. Indust. Appl. Math. 11, 431 (1963)), which vanishes as the steps
- * succeed. Damping also keeps the equations solvable where the data leave a direction open: that direction is then not moved along.
- *
- * @throws Error where the steps do not converge
+ * Least squares by Gauss-Newton steps with Marquardt's damping (J. Soc. Indust. Appl. Math. 11, 431 (1963)), steered by the ratio of the
+ * gain found to the gain foreseen (K. Madsen, H. B. Nielsen and O. Tingleff, Methods for Non-Linear Least Squares Problems (2004), section 3.2).
+ * Damping also keeps the equations solvable where the data leave a direction open: that direction is then hardly moved along.
+ * Where chi2 falls for ever towards a factor without bound, the steps end after a fixed number; such a factor is then as uncertain as
+ * chi2 is flat, and is withheld for it.
  */
 export function solveIsland(data: IslandData, weights: Float64Array, start: Float64Array): { readonly unknowns: Float64Array; readonly chi2: number } {
   const { size } = data;
   let unknowns = start;
   let equations = normalEquations(data, weights, unknowns);
   let damping = 1e-3;
+  let raise = 2;
   for (let step = 0; step < stepsAtMost; step++) {
-    const move = dampedStep(equations, size, damping);
+    const scale = diagonalScale(equations.matrix, size);
+    const { right, chi2 } = equations;
+    if (right.every((value, j) => Math.abs(value * scale[j]!) <= rightAngle * Math.sqrt(chi2))) break;
+    const move = dampedStep(equations, scale, damping);
+    if (move.every((value, j) => Math.abs(value) <= 1e-14 * (1 + Math.abs(unknowns[j]!)))) break;
     const next = unknowns.map((value, j) => value + move[j]!);
-    const chi2 = chiSquare(data, weights, next);
-    const small = move.every((value, j) => Math.abs(value) <= 1e-12 * (1 + Math.abs(unknowns[j]!)));
-    if (chi2 <= equations.chi2) {
-      const gain = equations.chi2 - chi2;
+    const foreseen = move.reduce((sum, value, j) => sum + value * (right[j]! + (damping * value) / scale[j]! ** 2), 0);
+    const gain = chi2 - chiSquare(data, weights, next);
+    if (gain > 0) {
       unknowns = next;
-      if (small || gain <= 1e-15 * chi2) {
-        if (small || damping <= 1e-9) return { unknowns, chi2 };
-      }
       equations = normalEquations(data, weights, unknowns);
-      damping = Math.max(damping / 10, 1e-12);
+      damping = Math.max(1e-14, damping * Math.max(1 / 3, 1 - (2 * (gain / foreseen) - 1) ** 3));
+      raise = 2;
+      if (gain <= noGain * chi2) break;
     } else {
-      // Rounding alone separates the two: no better point can be told.
-      if (small || chi2 - equations.chi2 <= 1e-12 * equations.chi2) return { unknowns, chi2: equations.chi2 };
-      damping = Math.max(damping * 10, 1e-9);
+      damping *= raise;
+      raise *= 2;
+      // Damped this much the steps have no length left.
+      if (damping > 1e12) break;
     }
   }
-  throw new Error('the factors did not converge');
+  return { unknowns, chi2: equations.chi2 };
 }
 
-function dampedStep({ matrix, right }: NormalEquations, size: number, damping: number): Float64Array {
-  const scale = diagonalScale(matrix, size);
+function dampedStep({ matrix, right }: NormalEquations, scale: Float64Array, damping: number): Float64Array {
+  const size = scale.length;
   const damped = scaledMatrix(matrix, scale);
   for (let i = 0; i < size; i++) damped.set(i, i, damped.get(i, i) + damping);
   const target = Matrix.columnVector(right.map((value, i) => value * scale[i]!));

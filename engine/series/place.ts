@@ -14,7 +14,6 @@ import type { ComparedCollection, Placement, PlacingGround } from './placeTypes.
 import { placingCautions } from './placingCautions.ts';
 import { predictFromFactors } from './predictFromFactors.ts';
 import type { Predicted } from './predictFromFactors.ts';
-import { aquaLigand } from './publishedMatch.ts';
 import { seriesParameters } from './types.ts';
 import type { ComplexIdentity, MeasurementId, SeriesParameter, SeriesResult } from './types.ts';
 
@@ -25,12 +24,11 @@ import type { ComplexIdentity, MeasurementId, SeriesParameter, SeriesResult } fr
  */
 export function placingGround(collection: ComparedCollection, complex: ComplexIdentity, own: readonly MeasurementId[]): PlacingGround {
   const key = complexKey(complex);
-  const results = collection.results.filter((result) => !own.includes(measurementId(result)));
+  const results = collection.results.filter((result) => !(own.includes(measurementId(result)) && complexKey(result.complex) === key));
   const earlier = results.filter((result) => complexKey(result.complex) === key);
   const others = results.filter((result) => complexKey(result.complex) !== key);
   const { geometry } = complex;
-  const aqua = aquaLigand(collection.ligands);
-  const fit = (parameter: SeriesParameter): FactorFit | null => (geometry === null ? null : fitFactors(others, { parameter, geometry, policy: collection.policy.id, aqua }));
+  const fit = (parameter: SeriesParameter): FactorFit | null => (geometry === null ? null : fitFactors(others, { parameter, geometry, policy: collection.policy.id, aqua: collection.aqua }));
   const [delta, beta] = [fit('Delta'), fit('beta')];
   const parents = (one: FactorFit | null): Parents => parentsOf(one?.complexes.map(({ result }) => result) ?? []);
   return {

@@ -5,12 +5,13 @@ import type { FactorFit } from './factorTypes.ts';
 import type { PlacedPrediction } from './memberPlacement.ts';
 import type { NearestComplexes } from './nearest.ts';
 import type { PlaceInSeries } from './placeInSeries.ts';
-import type { ComplexIdentity, SeriesLigand, SeriesParameter, SeriesResult } from './types.ts';
+import type { ComplexIdentity, SeriesParameter, SeriesResult } from './types.ts';
 
 /** The collection as a comparison needs it: plain data, the same in the command and in the page. */
 export interface ComparedCollection {
   readonly policy: { readonly id: string; readonly differentialFloor: Policy['differentialFloor'] };
-  readonly ligands: readonly SeriesLigand[];
+  /** Id of the ligand that is water, as `aquaLigand` finds it; null where the collection has none. */
+  readonly aqua: string | null;
   /** One for each measurement. */
   readonly results: readonly SeriesResult[];
 }

@@ -3,6 +3,7 @@ import { compositionOfComplex, factorModel, fromModelScale } from './factorModel
 import type { FactorFit, FactorPrediction } from './factorTypes.ts';
 import { isFixed } from './identifiable.ts';
 import { ionWords } from './identity.ts';
+import { isLoose } from './looseness.ts';
 import { effectiveDegrees } from './student.ts';
 import type { ComplexIdentity } from './types.ts';
 
@@ -35,6 +36,7 @@ export function predictFromFactors(fit: FactorFit, complex: ComplexIdentity): Pr
   if (!isFixed(all, { open, scale })) return { reason: noFactorPrediction.open };
   let variance = fit.scatter.value ** 2;
   for (const a of places) for (const b of places) variance += all[a]! * all[b]! * covariance[a]![b]!;
+  if (isLoose(fit.parameter, 'prediction', Math.sqrt(variance))) return { reason: noFactorPrediction.loose };
   const scaled = fromModelScale(fit.parameter, value, Math.sqrt(variance));
   const { standing, share, spare } = fit.scatter;
   return { predicted: scaled.value, u: scaled.u, degrees: standing === 'fitted' ? effectiveDegrees(share, spare) : null };

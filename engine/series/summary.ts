@@ -17,8 +17,16 @@ export function seriesResult(
     parameters: parametersByName(reading.parameters),
     correlation: reading.correlations.find(({ first, second }) => [first, second].includes('Delta') && [first, second].includes('B'))?.value ?? null,
     transitions: usedTransitions(reading.bands),
-    cautions: reading.cautions.map(({ code }) => code),
+    cautions: comparisonCautions(reading.cautions.map(({ code }) => code)),
   };
+}
+
+/** Codes of cautions that decide whether a result may be compared. Others are for people to read. */
+const deciding: readonly string[] = ['B_ASSUMED', 'JAHN_TELLER_ENVELOPE', 'MORE_THAN_ONE_METAL'];
+
+/** Of some caution codes those that a comparison asks for, in alphabetical order. */
+export function comparisonCautions(codes: readonly string[]): readonly string[] {
+  return deciding.filter((code) => codes.includes(code));
 }
 
 /** Labels of the transitions that entered a fit, in alphabetical order. */

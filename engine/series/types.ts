@@ -52,7 +52,7 @@ export interface SeriesResult {
   readonly correlation: number | null;
   /** Labels of the transitions in the fit, in alphabetical order. */
   readonly transitions: readonly string[];
-  /** Codes of the reading's cautions. */
+  /** Codes of the reading's cautions that decide whether it may be compared; see `comparisonCautions`. */
   readonly cautions: readonly string[];
 }
 

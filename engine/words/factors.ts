@@ -8,9 +8,12 @@ export function factorReason(facts: {
   readonly tested: boolean;
   /** Combinations that are fixed where the factor itself is not; null where it is. */
   readonly combinations: readonly string[] | null;
+  /** true: fixed, but with an uncertainty that leaves nothing to say. */
+  readonly loose: boolean;
 }): string | null {
   if (facts.gauge) return facts.gaugeIsAqua ? 'set to 1: the others are counted from water' : 'set to 1: water is not in this island, and this ligand is in most of its complexes';
   if (facts.combinations !== null) return facts.combinations.length === 0 ? 'not fixed by these complexes' : `not fixed alone: only ${listed(facts.combinations)} ${facts.combinations.length === 1 ? 'is' : 'are'} fixed`;
+  if (facts.loose) return 'these complexes hardly fix it: its uncertainty would be as large as itself';
   if (facts.complexes === 1) return 'from one complex: no test';
   return facts.tested ? null : 'no spare complex: no test';
 }
@@ -30,6 +33,7 @@ export const noFactorPrediction = {
   ligandUnknown: (ligands: readonly string[]): string => `no factor of ${listed(ligands)}: no complex with ${ligands.length === 1 ? 'it' : 'them'} is in the fit`,
   islands: 'its ion and ligands stand in different islands of the collection, whose factors cannot be multiplied',
   open: 'the complexes of the collection do not fix this product of factors',
+  loose: 'the complexes of the collection hardly fix this product of factors',
   geometry: (geometry: string): string => `factors are fitted to octahedral and tetrahedral complexes, not to ${geometry} ones`,
 } as const;
 

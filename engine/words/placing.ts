@@ -21,7 +21,7 @@ export const nearestReason = {
 /** What a person should know before reading a placement. */
 export const placingCautionText = {
   alreadyThere: (id: string): string => `The collection holds this complex already, as ${id}. It is placed against all others; earlier measurements of it are listed apart.`,
-  idTaken: (id: string): string => `The collection holds another complex under the id ${id}: choose a new file name before you add this one.`,
+  idTaken: (id: string): string => `The collection holds a complex with another ion, geometry, spin, isomer or ligands under the id ${id}. Choose a new file name before you add this one; if this is that record, corrected, its old version is among those compared.`,
   noOtherRecord: (ion: string): string => `No other record of ${ion} is in the collection: there is no series of it to stand in.`,
   onlyOne: (ion: string): string => `Only one other complex of ${ion} can be compared: above, below or alike is all that can be said.`,
   ligandsNeverSeen: (ligands: readonly string[]): string => `${listed(ligands)} ${ligands.length === 1 ? 'is' : 'are'} in no other complex of this geometry: nothing predicts what ${ligands.length === 1 ? 'it does' : 'they do'}.`,

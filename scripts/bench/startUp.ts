@@ -4,7 +4,7 @@ import { projectFolder } from '../publish/pages.ts';
 import { median, timed } from './stopwatch.ts';
 import type { Measured } from './stopwatch.ts';
 
-const commands = ['check', 'refit', 'build', 'dev', 'preview', 'predict', 'test', 'bench'];
+const commands = ['check', 'refit', 'build', 'dev', 'preview', 'predict', 'compare', 'test', 'bench'];
 
 /** How long each command takes to say its help: the middle of three. */
 export async function measureStartUp(): Promise<Measured[]> {

@@ -1,6 +1,6 @@
 import { existsSync } from 'node:fs';
 import Database from 'better-sqlite3';
-import { parametersByName, policyId, usedTransitions } from '#engine';
+import { aquaLigand, comparisonCautions, parametersByName, policyId, usedTransitions } from '#engine';
 import type { ComparedCollection, ComplexIdentity, Ion, Policy, SeriesNumber, SeriesResult } from '#engine';
 import type { LigandRecord } from '../content/types.ts';
 import { engineHash } from '../database/fingerprint.ts';
@@ -39,7 +39,7 @@ function storedCollection(database: Database.Database): StoredCollection {
   const results = seriesResults(all);
   const engine = all<{ value: string }>("SELECT value FROM meta WHERE key = 'engine'")[0]?.value;
   return {
-    compared: { policy: { id: policyId(policy), differentialFloor: policy.differentialFloor }, ligands, results },
+    compared: { policy: { id: policyId(policy), differentialFloor: policy.differentialFloor }, aqua: aquaLigand(ligands), results },
     policy, ligands, sources: all<{ id: string }>('SELECT id FROM source').map(({ id }) => id),
     complexes: new Set(results.map(({ complex }) => complex.id)).size, otherEngine: engine !== engineHash(),
   };
@@ -69,7 +69,7 @@ function seriesResults(all: <T>(sql: string) => Rows<T>): readonly SeriesResult[
       parameters: parametersByName((numbers.get(id) ?? []).map(({ name, value, u, u_total, standing, reason }) => ({ name, value, u, uTotal: u_total, standing, reason }))),
       correlation: correlations.get(id) ?? null,
       transitions: usedTransitions((bands.get(id) ?? []).map(({ label, used }) => ({ label, used: used === 1 }))),
-      cautions: (cautions.get(id) ?? []).map(({ code }) => code),
+      cautions: comparisonCautions((cautions.get(id) ?? []).map(({ code }) => code)),
     };
   });
 }

@@ -17,6 +17,7 @@ const quantityCodes: Readonly<Record<QuantityCode, string>> = {
   WRONG_UNIT: 'a unit of the wrong kind',
   BAD_UNCERTAINTY: 'an uncertainty that cannot be read',
   ZERO_UNCERTAINTY: 'an uncertainty of zero',
+  UNCERTAINTY_SIGN: 'a two-sided uncertainty without one plus and one minus',
   BAD_COVERAGE: 'a coverage factor that cannot be read, or one without an uncertainty',
   NOT_A_COUNT: 'a whole number is wanted',
   BAD_RANGE: 'a range that cannot be read',
@@ -93,9 +94,21 @@ const chemistryCodes = {
   TERM_IS_GROUND: 'the ground level typed as a transition',
   TERM_AMBIGUOUS: 'a term label that names no single level',
   TERM_TWICE: 'two bands that claim one term and are not components',
+  DIP_TERM: 'a dip with the term of a spin-allowed transition',
+  DEGENERACY_MISSING: 'one component of a term with a degeneracy and another without',
+  DEGENERACY_SUM: 'components whose degeneracies do not add up to the states of their term',
+  SPIN_EVIDENCE: 'a spin that the magnetic moment, the EPR spectrum or the terms of the bands contradict',
   HAZARD_UNKNOWN: 'an override of a hazard caution that does not exist',
   POLICY_VALUE: 'a policy value outside its limits',
   POLICY_OVERRIDE: 'an override of the policy without one value and its reason',
+} as const;
+
+const releaseCodes = {
+  RELEASE_FILE: 'a file of releases/ that is no frozen release',
+  GONE_ADDRESS: 'an entry of gone.yaml that cannot be read, names no published address, or leads nowhere',
+  ADDRESS_VANISHED: 'a published record, measurement or page that is no longer there',
+  ID_REUSED: 'an id that was taken away and is used again',
+  IDENTITY_CHANGED: 'an id that no longer means the complex that was published under it',
 } as const;
 
 /** The manual's sections, in its order. */
@@ -105,6 +118,7 @@ export const codeGroups = [
   { title: 'Fields', codes: fieldCodes },
   { title: 'Numbers', codes: quantityCodes },
   { title: 'Chemistry', codes: chemistryCodes },
+  { title: 'Releases', codes: releaseCodes },
 ] as const;
 
-export type FaultCode = QuantityCode | keyof typeof fileCodes | keyof typeof yamlCodes | keyof typeof fieldCodes | keyof typeof chemistryCodes;
+export type FaultCode = QuantityCode | keyof typeof fileCodes | keyof typeof yamlCodes | keyof typeof fieldCodes | keyof typeof chemistryCodes | keyof typeof releaseCodes;

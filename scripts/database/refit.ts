@@ -1,9 +1,13 @@
 import type { Reading, Verdict } from '#engine';
-import { readCollection } from '../content/readCollection.ts';
 import type { Collection, Fault } from '../content/types.ts';
+import { readContent } from '../release/readContent.ts';
+import { historyRows } from '../release/rows.ts';
+import type { History } from '../release/types.ts';
 import { noCache, openCache } from './cache.ts';
 import { loadedEngineHash, softwareName } from './fingerprint.ts';
 import { readCollectionReadings } from './readings.ts';
+import { mergeTables } from './rows/row.ts';
+import type { Tables } from './rows/row.ts';
 import { allTables } from './rows/tables.ts';
 import { writeDatabase } from './write.ts';
 
@@ -35,19 +39,26 @@ export type RefitResult =
 
 /** Content to database: reads every record, fits every measurement, writes the file. Faults in the content leave the old file as it is. */
 export function refit(order: RefitOrder): RefitResult {
-  const { collection, faults, filesRead } = readCollection(order.content);
+  const { collection, history, faults, filesRead } = readContent(order.content);
   if (collection === null) return { ok: false, faults, records: filesRead };
+  const { refit: done, tables } = refitCollection(collection, history, filesRead, order);
+  writeDatabase(order.database, tables);
+  return { ok: true, refit: done };
+}
+
+/** Fits a collection that is read already. Returns every row of its database, and writes none. */
+export function refitCollection(
+  collection: Collection, history: History, records: number, { cache: cacheFile, progress }: Pick<RefitOrder, 'cache' | 'progress'>,
+): { readonly refit: Refit; readonly tables: Tables } {
   const engine = loadedEngineHash();
   const measurements = collection.complexes.reduce((count, complex) => count + complex.measurements.length, 0);
-  const cache = order.cache === null ? noCache : openCache(order.cache);
+  const cache = cacheFile === null ? noCache : openCache(cacheFile);
   try {
-    const { readings, refitted } = readCollectionReadings(
-      collection, engine, cache, (done) => order.progress?.(done, measurements),
-    );
-    writeDatabase(order.database, allTables(collection, readings, engine, softwareName()));
+    const { readings, refitted } = readCollectionReadings(collection, engine, cache, (done) => progress?.(done, measurements));
+    const current = allTables(collection, readings, engine, softwareName());
     return {
-      ok: true,
-      refit: { collection, readings, records: filesRead, measurements, refitted, verdicts: countVerdicts(readings) },
+      refit: { collection, readings, records, measurements, refitted, verdicts: countVerdicts(readings) },
+      tables: mergeTables([current, historyRows(history, current)]),
     };
   } finally {
     cache.close();

@@ -4,6 +4,8 @@
 --   Energies are in cm-1. `u` is one standard uncertainty. Temperatures are in K.
 --   NULL means not recorded, or withheld with the reason in the same row. It never stands for 0.
 --   `..._typed` is the text as the group typed it; the column beside it is the parsed number.
+--   The comment behind a column is its entry in the data dictionary: [unit, range] where it holds a number, then the meaning.
+--   Units are UCUM codes; two with a stroke between depend on the row. A column without a comment takes that of the column it refers to.
 --   Flags are 0 or 1. Lists are JSON arrays in the order typed. Bands are counted from 1 in the order typed.
 --   Nothing here is a time of day or a path of a machine: the same content gives the same bytes.
 --   Kept to what SQLite 3.37 can read.
@@ -13,109 +15,109 @@
 -- group.url, group.release, group.started, group.doi, group.demonstration ("true" or "false").
 -- A key without a value has no row.
 CREATE TABLE meta (
-  key   TEXT NOT NULL PRIMARY KEY,
-  value TEXT NOT NULL
+  key   TEXT NOT NULL PRIMARY KEY,                  -- name of the fact
+  value TEXT NOT NULL                               -- the fact, as text
 ) STRICT, WITHOUT ROWID;
 
 -- The people of the group, in the order typed.
 CREATE TABLE person (
-  number   INTEGER NOT NULL PRIMARY KEY,
-  name     TEXT NOT NULL,
-  orcid    TEXT,
-  initials TEXT
+  number   INTEGER NOT NULL PRIMARY KEY,            -- [>= 1] place in the order typed
+  name     TEXT NOT NULL,                           -- name as typed
+  orcid    TEXT,                                    -- ORCID identifier, without its address
+  initials TEXT                                     -- initials by which measurements name the person
 ) STRICT, WITHOUT ROWID;
 
 -- A declared set of fitting choices. The one of policy.yaml is in force; others are values that a measurement overrides.
 CREATE TABLE policy (
-  id                    TEXT NOT NULL PRIMARY KEY,   -- name and eight hex digits of its content
-  name                  TEXT NOT NULL,
-  in_force              INTEGER NOT NULL CHECK (in_force IN (0, 1)),
-  C_over_B              REAL NOT NULL,
-  C_over_B_u            REAL NOT NULL,
-  C_over_B_per_ion      TEXT NOT NULL CHECK (json_valid(C_over_B_per_ion)),   -- {"Cr(III)": {"value": 4.5, "u": 0.5}}
+  id                    TEXT NOT NULL PRIMARY KEY,  -- name and eight hex digits of its content
+  name                  TEXT NOT NULL,              -- name as typed
+  in_force              INTEGER NOT NULL CHECK (in_force IN (0, 1)),   -- 1: the policy of policy.yaml; 0: a copy with values that a measurement overrides
+  C_over_B              REAL NOT NULL,              -- [1, > 0] C/B assumed where C is not fitted
+  C_over_B_u            REAL NOT NULL,              -- [1, >= 0] standard uncertainty of the assumed C/B
+  C_over_B_per_ion      TEXT NOT NULL CHECK (json_valid(C_over_B_per_ion)),   -- C/B of single ions, which win over the general one: {"Cr(III)": {"value": 4.5, "u": 0.5}}
   C_fitted              INTEGER NOT NULL CHECK (C_fitted IN (0, 1)),   -- 1: C is fitted where spin-flip bands determine it
-  floor_general         REAL NOT NULL,
-  floor_spin_flip       REAL NOT NULL,
-  floor_two_electron    REAL NOT NULL,
-  ceiling_Delta         REAL NOT NULL,               -- fraction: published only where u(total)/value is below
-  ceiling_B             REAL NOT NULL,
-  ceiling_C             REAL NOT NULL,
-  differential_Delta    REAL NOT NULL,               -- cm-1
-  differential_B        REAL NOT NULL,               -- fraction of B
-  free_ion_set          TEXT NOT NULL,
-  rival_margin          REAL NOT NULL,
-  default_u_maximum     REAL NOT NULL,
-  default_u_line        REAL NOT NULL
+  floor_general         REAL NOT NULL,              -- [cm-1, >= 0] model floor of transitions that change neither spin nor two electrons
+  floor_spin_flip       REAL NOT NULL,              -- [cm-1, >= 0] model floor of spin-flip transitions
+  floor_two_electron    REAL NOT NULL,              -- [cm-1, >= 0] model floor of two-electron transitions
+  ceiling_Delta         REAL NOT NULL,              -- [1, > 0] Delta is published only where u_total/value is below this fraction
+  ceiling_B             REAL NOT NULL,              -- [1, > 0] B and beta are published only where u_total/value is below this fraction
+  ceiling_C             REAL NOT NULL,              -- [1, > 0] C is published only where u_total/value is below this fraction
+  differential_Delta    REAL NOT NULL,              -- [cm-1, >= 0] floor on differences of Delta between like results
+  differential_B        REAL NOT NULL,              -- [1, >= 0] floor on differences of B, as a fraction of B
+  free_ion_set          TEXT NOT NULL,              -- named set that B0 is taken from
+  rival_margin          REAL NOT NULL,              -- [1, >= 0] a rival reading is near where its score is within this of the chosen one
+  default_u_maximum     REAL NOT NULL,              -- [cm-1, > 0] u taken for a broad band typed without one
+  default_u_line        REAL NOT NULL               -- [cm-1, > 0] u taken for a line typed without one
 ) STRICT, WITHOUT ROWID;
 
 -- The metal ions of the collection.
 CREATE TABLE ion (
-  name      TEXT NOT NULL PRIMARY KEY,               -- "Cr(III)"
-  metal     TEXT NOT NULL,
-  oxidation INTEGER NOT NULL,
-  electrons INTEGER NOT NULL CHECK (electrons BETWEEN 0 AND 10),
-  shell     TEXT NOT NULL CHECK (shell IN ('3d', '4d', '5d'))
+  name      TEXT NOT NULL PRIMARY KEY,              -- metal and oxidation state, "Cr(III)"
+  metal     TEXT NOT NULL,                          -- element symbol
+  oxidation INTEGER NOT NULL,                       -- oxidation state
+  electrons INTEGER NOT NULL CHECK (electrons BETWEEN 0 AND 10),   -- number of d electrons
+  shell     TEXT NOT NULL CHECK (shell IN ('3d', '4d', '5d'))   -- shell of the d electrons
 ) STRICT, WITHOUT ROWID;
 
 -- Racah parameters of the free ions, by named set. An ion without a row in a set has no beta under it.
 CREATE TABLE free_ion (
-  set_name TEXT NOT NULL CHECK (set_name IN ('published', 'atomic-levels')),
+  set_name TEXT NOT NULL CHECK (set_name IN ('published', 'atomic-levels')),   -- name of the set
   ion      TEXT NOT NULL REFERENCES ion (name),
-  B0       REAL NOT NULL,
-  C0       REAL,
-  kind     TEXT NOT NULL,                            -- how B0 was obtained
-  source   TEXT NOT NULL,
+  B0       REAL NOT NULL,                           -- [cm-1, > 0] Racah B of the free ion
+  C0       REAL,                                    -- [cm-1, > 0] Racah C of the free ion
+  kind     TEXT NOT NULL,                           -- how B0 was obtained
+  source   TEXT NOT NULL,                           -- where B0 and C0 come from
   PRIMARY KEY (set_name, ion)
 ) STRICT, WITHOUT ROWID;
 
 -- Publications cited by records.
 CREATE TABLE source (
-  id        TEXT NOT NULL PRIMARY KEY,
-  file      TEXT NOT NULL,
-  reference TEXT NOT NULL,
-  authors   TEXT NOT NULL CHECK (json_valid(authors)),
-  title     TEXT,
-  journal   TEXT,
-  year      TEXT,
-  volume    TEXT,
-  pages     TEXT,
-  doi       TEXT,
-  url       TEXT
+  id        TEXT NOT NULL PRIMARY KEY,              -- permanent id, the record's file name
+  file      TEXT NOT NULL,                          -- record file within the content folder
+  reference TEXT NOT NULL,                          -- the reference as it is printed
+  authors   TEXT NOT NULL CHECK (json_valid(authors)),   -- authors in order, a list of texts
+  title     TEXT,                                   -- title
+  journal   TEXT,                                   -- journal or publisher
+  year      TEXT,                                   -- year
+  volume    TEXT,                                   -- volume
+  pages     TEXT,                                   -- pages or article number
+  doi       TEXT,                                   -- DOI, without its resolver
+  url       TEXT                                    -- web address where there is no DOI
 ) STRICT, WITHOUT ROWID;
 
 -- Ligands, one row for each way of binding.
 CREATE TABLE ligand (
-  id           TEXT NOT NULL PRIMARY KEY,
-  file         TEXT NOT NULL,
-  name         TEXT NOT NULL,
-  formula      TEXT NOT NULL,
-  abbreviation TEXT,
-  synonyms     TEXT NOT NULL CHECK (json_valid(synonyms)),
-  charge       INTEGER NOT NULL,
-  denticity    INTEGER NOT NULL CHECK (denticity > 0),
-  donors       TEXT NOT NULL CHECK (json_valid(donors)),   -- element symbols, as many as denticity
-  smiles       TEXT,
-  notes        TEXT
+  id           TEXT NOT NULL PRIMARY KEY,           -- permanent id, the record's file name
+  file         TEXT NOT NULL,                       -- record file within the content folder
+  name         TEXT NOT NULL,                       -- name in a complex
+  formula      TEXT NOT NULL,                       -- formula as typed
+  abbreviation TEXT,                                -- abbreviation that may stand for it in formulas
+  synonyms     TEXT NOT NULL CHECK (json_valid(synonyms)),   -- other names, a list of texts
+  charge       INTEGER NOT NULL,                    -- charge of one free ligand
+  denticity    INTEGER NOT NULL CHECK (denticity > 0),   -- donor atoms that one ligand binds
+  donors       TEXT NOT NULL CHECK (json_valid(donors)),   -- element symbols of the donor atoms, as many as denticity
+  smiles       TEXT,                                -- SMILES of the free ligand
+  notes        TEXT                                 -- remarks as typed
 ) STRICT, WITHOUT ROWID;
 
 -- A complex: its formula, ion, geometry, isomer and spin are its identity.
 CREATE TABLE complex (
-  id            TEXT NOT NULL PRIMARY KEY,
-  file          TEXT NOT NULL,
-  hash          TEXT NOT NULL,                       -- sha256 of the record's bytes, hex
-  formula       TEXT NOT NULL,
-  name          TEXT,
-  charge        INTEGER NOT NULL,
-  charge_note   TEXT,                                -- remark on how the charge was assigned
+  id            TEXT NOT NULL PRIMARY KEY,          -- permanent id, the record's file name
+  file          TEXT NOT NULL,                      -- record file within the content folder
+  hash          TEXT NOT NULL,                      -- sha256 of the record's bytes, hex
+  formula       TEXT NOT NULL,                      -- formula as typed, with its charge
+  name          TEXT,                               -- name as typed
+  charge        INTEGER NOT NULL,                   -- charge of the complex
+  charge_note   TEXT,                               -- remark on how the charge was assigned
   ion           TEXT NOT NULL REFERENCES ion (name),
-  geometry      TEXT NOT NULL,                       -- as typed, of the closed list
-  fitted        INTEGER NOT NULL CHECK (fitted IN (0, 1)),   -- 0: a geometry that is stored and drawn, not fitted
-  isomer        TEXT NOT NULL,
-  spin          TEXT,                                -- declared multiplicity as a word, "quartet"
-  multiplicity  INTEGER,
-  spin_typed    TEXT,
-  spin_assumed  INTEGER NOT NULL CHECK (spin_assumed IN (0, 1)),
-  notes         TEXT
+  geometry      TEXT NOT NULL,                      -- geometry as typed, of the closed list
+  fitted        INTEGER NOT NULL CHECK (fitted IN (0, 1)),   -- 1: octahedral or tetrahedral; 0: a geometry that is stored and drawn, not fitted
+  isomer        TEXT NOT NULL,                      -- cis, trans, fac, mer or none
+  spin          TEXT,                               -- multiplicity of the ground level as a word, "quartet"
+  multiplicity  INTEGER,                            -- [1, 1 to 6] multiplicity of the ground level, 2S+1
+  spin_typed    TEXT,                               -- spin as typed: high, low, intermediate or a multiplicity
+  spin_assumed  INTEGER NOT NULL CHECK (spin_assumed IN (0, 1)),   -- 1: high spin was assumed, none was typed
+  notes         TEXT                                -- remarks as typed
 ) STRICT, WITHOUT ROWID;
 CREATE INDEX complex_by_ion ON complex (ion, geometry);
 
@@ -123,9 +125,9 @@ CREATE INDEX complex_by_ion ON complex (ion, geometry);
 CREATE TABLE complex_ligand (
   complex TEXT NOT NULL REFERENCES complex (id),
   ligand  TEXT NOT NULL REFERENCES ligand (id),
-  number  INTEGER NOT NULL,                          -- place in the order typed, from 1
-  count   INTEGER NOT NULL CHECK (count > 0),        -- how many of this ligand
-  bound   INTEGER NOT NULL CHECK (bound > 0),        -- donor atoms bound by each of them
+  number  INTEGER NOT NULL,                         -- [>= 1] place in the order typed
+  count   INTEGER NOT NULL CHECK (count > 0),       -- how many of this ligand
+  bound   INTEGER NOT NULL CHECK (bound > 0),       -- donor atoms bound by each of them
   PRIMARY KEY (complex, ligand)
 ) STRICT, WITHOUT ROWID;
 CREATE INDEX complex_ligand_by_ligand ON complex_ligand (ligand);
@@ -133,35 +135,35 @@ CREATE INDEX complex_ligand_by_ligand ON complex_ligand (ligand);
 -- One spectrum of one sample under one set of conditions.
 CREATE TABLE measurement (
   complex             TEXT NOT NULL REFERENCES complex (id),
-  id                  TEXT NOT NULL,
-  number              INTEGER NOT NULL,              -- place in the record, from 1
-  sample              TEXT,
-  phase               TEXT NOT NULL CHECK (phase IN ('solution', 'solid', 'crystal', 'glass', 'film')),
-  medium              TEXT,
-  host                TEXT,
-  temperature_K       REAL,
-  temperature_u_K     REAL,
-  temperature_typed   TEXT,
-  temperature_assumed INTEGER NOT NULL CHECK (temperature_assumed IN (0, 1)),
-  technique           TEXT CHECK (technique IN ('absorption', 'diffuse reflectance', 'excitation', 'emission', 'MCD')),
-  scanned_typed       TEXT,
-  notebook            TEXT,
-  measured_by         TEXT,
-  measured_on         TEXT,                          -- ISO date
-  source              TEXT REFERENCES source (id),
-  source_place        TEXT,                          -- "Table 2"
-  concentration       TEXT,
-  path_length         TEXT,
-  batch               TEXT,
-  raw_file            TEXT,
-  raw_hash            TEXT,
-  magnetic_moment     TEXT,
-  epr_g               TEXT,
-  innocence_doubtful  INTEGER NOT NULL CHECK (innocence_doubtful IN (0, 1)),
-  nuclearity          INTEGER NOT NULL CHECK (nuclearity > 0),
-  policy              TEXT NOT NULL REFERENCES policy (id),
-  policy_reason       TEXT,                          -- why this measurement overrides the policy in force
-  notes               TEXT,
+  id                  TEXT NOT NULL,                -- id within the complex; the full id is complex/measurement
+  number              INTEGER NOT NULL,             -- [>= 1] place in the record
+  sample              TEXT,                         -- what was weighed, as a formula
+  phase               TEXT NOT NULL CHECK (phase IN ('solution', 'solid', 'crystal', 'glass', 'film')),   -- phase of the sample
+  medium              TEXT,                         -- solvent or matrix
+  host                TEXT,                         -- host of a doped crystal
+  temperature_K       REAL,                         -- [K, > 0] temperature
+  temperature_u_K     REAL,                         -- [K, >= 0] standard uncertainty of the temperature
+  temperature_typed   TEXT,                         -- temperature as typed
+  temperature_assumed INTEGER NOT NULL CHECK (temperature_assumed IN (0, 1)),   -- 1: a word such as "room" was typed and a value taken for it
+  technique           TEXT CHECK (technique IN ('absorption', 'diffuse reflectance', 'excitation', 'emission', 'MCD')),   -- how the spectrum was taken
+  scanned_typed       TEXT,                         -- scanned range as typed
+  notebook            TEXT,                         -- notebook and page
+  measured_by         TEXT,                         -- initials of who measured, see person
+  measured_on         TEXT,                         -- ISO date of the measurement
+  source              TEXT REFERENCES source (id),  -- publication that the readings come from
+  source_place        TEXT,                         -- place in that publication, "Table 2"
+  concentration       TEXT,                         -- concentration as typed
+  path_length         TEXT,                         -- path length as typed
+  batch               TEXT,                         -- batch of the sample
+  raw_file            TEXT,                         -- name of the file with the spectrum
+  raw_hash            TEXT,                         -- sha256 of that file, hex
+  magnetic_moment     TEXT,                         -- magnetic moment as typed
+  epr_g               TEXT,                         -- EPR g as typed
+  innocence_doubtful  INTEGER NOT NULL CHECK (innocence_doubtful IN (0, 1)),   -- 1: the oxidation state is doubtful, beta is withheld
+  nuclearity          INTEGER NOT NULL CHECK (nuclearity > 0),   -- [1, > 0] metal ions in the complex
+  policy              TEXT NOT NULL REFERENCES policy (id),   -- policy under which it was fitted
+  policy_reason       TEXT,                         -- why this measurement overrides the policy in force
+  notes               TEXT,                         -- remarks as typed
   PRIMARY KEY (complex, id)
 ) STRICT, WITHOUT ROWID;
 
@@ -169,11 +171,11 @@ CREATE TABLE measurement (
 CREATE TABLE observed_range (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
-  kind        TEXT NOT NULL CHECK (kind IN ('scanned', 'absent')),
-  number      INTEGER NOT NULL,
-  low         REAL NOT NULL,
-  high        REAL NOT NULL,
-  notes       TEXT,
+  kind        TEXT NOT NULL CHECK (kind IN ('scanned', 'absent')),   -- scanned: looked at; absent: looked at, and no band seen
+  number      INTEGER NOT NULL,                     -- [>= 1] place in the order typed, each kind by itself
+  low         REAL NOT NULL,                        -- [cm-1, > 0] lower end
+  high        REAL NOT NULL,                        -- [cm-1, > 0] upper end
+  notes       TEXT,                                 -- remarks as typed
   PRIMARY KEY (complex, measurement, kind, number),
   FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
 ) STRICT, WITHOUT ROWID;
@@ -182,25 +184,25 @@ CREATE TABLE observed_range (
 CREATE TABLE band (
   complex             TEXT NOT NULL,
   measurement         TEXT NOT NULL,
-  number              INTEGER NOT NULL,
-  position_typed      TEXT NOT NULL,
-  position            REAL NOT NULL,
-  u_minus             REAL,                          -- NULL: none typed; the reading then uses the policy's default
-  u_plus              REAL,
-  half_digit          REAL NOT NULL,                 -- half of the last typed digit
-  coverage_not_stated INTEGER NOT NULL CHECK (coverage_not_stated IN (0, 1)),
-  kind                TEXT NOT NULL CHECK (kind IN ('maximum', 'shoulder', 'line', 'zero-phonon', 'dip', 'centroid', 'component', 'envelope')),
+  number              INTEGER NOT NULL,             -- [>= 1] place in the order typed
+  position_typed      TEXT NOT NULL,                -- position as typed, with its unit
+  position            REAL NOT NULL,                -- [cm-1, 1000 to 100000] position
+  u_minus             REAL,                         -- [cm-1, > 0] standard uncertainty towards lower wavenumber; absent: none typed, the policy's default applies
+  u_plus              REAL,                         -- [cm-1, > 0] standard uncertainty towards higher wavenumber
+  half_digit          REAL NOT NULL,                -- [cm-1, > 0] half of the last typed digit
+  coverage_not_stated INTEGER NOT NULL CHECK (coverage_not_stated IN (0, 1)),   -- 1: the uncertainty was typed as a plain plus-minus
+  kind                TEXT NOT NULL CHECK (kind IN ('maximum', 'shoulder', 'line', 'zero-phonon', 'dip', 'centroid', 'component', 'envelope')),   -- how the position was read
   side                TEXT CHECK (side IN ('higher', 'lower')),   -- of a shoulder: where the stronger band lies
-  width_typed         TEXT,
-  width               REAL,                          -- full width at half height
-  epsilon             REAL,                          -- molar absorption coefficient, L mol-1 cm-1
-  strength            TEXT CHECK (strength IN ('strong', 'medium', 'weak')),
-  degeneracy          INTEGER,
-  deconvoluted        INTEGER NOT NULL CHECK (deconvoluted IN (0, 1)),
-  role                TEXT NOT NULL CHECK (role IN ('transition', 'CT', 'ligand', 'vibration', 'impurity')),
-  terms               TEXT NOT NULL CHECK (json_valid(terms)),   -- candidates as typed
-  left_out            TEXT,                          -- the typed reason why the band is kept and not fitted
-  notes               TEXT,
+  width_typed         TEXT,                         -- full width at half height as typed
+  width               REAL,                         -- [cm-1, > 0] full width at half height
+  epsilon             REAL,                         -- [L.mol-1.cm-1, > 0] molar absorption coefficient
+  strength            TEXT CHECK (strength IN ('strong', 'medium', 'weak')),   -- strength in words where there is no coefficient
+  degeneracy          INTEGER,                      -- [1, >= 1] of a component: degeneracy of its level
+  deconvoluted        INTEGER NOT NULL CHECK (deconvoluted IN (0, 1)),   -- 1: the position comes from a deconvolution
+  role                TEXT NOT NULL CHECK (role IN ('transition', 'CT', 'ligand', 'vibration', 'impurity')),   -- what the band is; only transitions are fitted
+  terms               TEXT NOT NULL CHECK (json_valid(terms)),   -- candidate terms as typed, a list of labels
+  left_out            TEXT,                         -- typed reason why the band is kept and not fitted
+  notes               TEXT,                         -- remarks as typed
   PRIMARY KEY (complex, measurement, number),
   FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
 ) STRICT, WITHOUT ROWID;
@@ -209,12 +211,12 @@ CREATE TABLE band (
 CREATE TABLE quoted (
   complex      TEXT NOT NULL,
   measurement  TEXT NOT NULL,
-  number       INTEGER NOT NULL,                     -- place in the record, from 1
-  parameter    TEXT NOT NULL CHECK (parameter IN ('Delta', 'Dq', 'B', 'C', 'beta')),
-  value        REAL NOT NULL,
-  typed        TEXT NOT NULL,
-  source       TEXT NOT NULL REFERENCES source (id),
-  source_place TEXT,
+  number       INTEGER NOT NULL,                    -- [>= 1] place in the record
+  parameter    TEXT NOT NULL CHECK (parameter IN ('Delta', 'Dq', 'B', 'C', 'beta')),   -- which parameter was printed
+  value        REAL NOT NULL,                       -- [cm-1|1, > 0] printed value: cm-1, or 1 for beta
+  typed        TEXT NOT NULL,                       -- value as typed
+  source       TEXT NOT NULL REFERENCES source (id),   -- publication that printed it
+  source_place TEXT,                                -- place in that publication
   PRIMARY KEY (complex, measurement, number, parameter),
   FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
 ) STRICT, WITHOUT ROWID;
@@ -223,33 +225,33 @@ CREATE TABLE quoted (
 CREATE TABLE reading (
   complex         TEXT NOT NULL,
   measurement     TEXT NOT NULL,
-  number          INTEGER NOT NULL,                  -- 1 is the chosen reading, rivals follow
-  chosen          INTEGER NOT NULL CHECK (chosen IN (0, 1)),
-  verdict         TEXT NOT NULL CHECK (verdict IN ('refused', 'not determinable', 'strained', 'assumed', 'untested', 'tested')),
-  reason          TEXT NOT NULL,                     -- one sentence: why this verdict
-  assignment      TEXT NOT NULL CHECK (assignment IN ('typed', 'proposed', 'none')),
-  geometry        TEXT CHECK (geometry IN ('octahedral', 'tetrahedral')),
-  multiplicity    INTEGER,
-  ground          TEXT,                              -- letter form
-  Delta_over_B    REAL,
-  chi2            REAL,
-  bands_used      INTEGER NOT NULL,
-  spare_bands     INTEGER NOT NULL,
-  rms_residual    REAL,
-  C_over_B        REAL,
-  C_over_B_u      REAL,
-  C_over_B_origin TEXT CHECK (C_over_B_origin IN ('policy', 'policy for this ion', 'fitted')),
-  free_ion_set    TEXT NOT NULL,
-  policy          TEXT NOT NULL REFERENCES policy (id),
-  measure_next    TEXT,                              -- what would help most, in words
-  score           REAL,                              -- chi2 + 2 x free parameters + evidence; lower is better
-  ranking         TEXT,                              -- of a rival: why it ranks where it does
-  combination     TEXT,                              -- the combination that is fixed where single numbers are not
-  rank            INTEGER,                           -- how many parameters the bands fix
-  singular_values TEXT CHECK (json_valid(singular_values)),   -- of the weighted Jacobian, descending
-  spin_crossing   REAL,                              -- Delta/B at which the ground spin changes
-  remarks         TEXT NOT NULL CHECK (json_valid(remarks)),  -- sentences on ground level and order of levels
-  sentence        TEXT NOT NULL,                     -- one sentence for a thesis
+  number          INTEGER NOT NULL,                 -- [>= 1] 1 is the chosen reading, rivals follow
+  chosen          INTEGER NOT NULL CHECK (chosen IN (0, 1)),   -- 1: the chosen reading of its measurement
+  verdict         TEXT NOT NULL CHECK (verdict IN ('refused', 'not determinable', 'strained', 'assumed', 'untested', 'tested')),   -- what the reading is worth
+  reason          TEXT NOT NULL,                    -- one sentence: why this verdict
+  assignment      TEXT NOT NULL CHECK (assignment IN ('typed', 'proposed', 'none')),   -- typed by the group, proposed by the engine, or none
+  geometry        TEXT CHECK (geometry IN ('octahedral', 'tetrahedral')),   -- geometry of the model; absent: not fitted
+  multiplicity    INTEGER,                          -- [1, 1 to 6] multiplicity of the ground level, 2S+1
+  ground          TEXT,                             -- ground level, letter form "a4A2g"
+  Delta_over_B    REAL,                             -- [1, >= 0] Delta over B at the fit
+  chi2            REAL,                             -- [1, >= 0] sum of squared weighted residuals
+  bands_used      INTEGER NOT NULL,                 -- [1, >= 0] bands that the fit used
+  spare_bands     INTEGER NOT NULL,                 -- [1, >= 0] bands used beyond the number of free parameters
+  rms_residual    REAL,                             -- [cm-1, >= 0] root mean square of observed minus calculated
+  C_over_B        REAL,                             -- [1, > 0] C/B of the fit
+  C_over_B_u      REAL,                             -- [1, >= 0] standard uncertainty of C/B
+  C_over_B_origin TEXT CHECK (C_over_B_origin IN ('policy', 'policy for this ion', 'fitted')),   -- where C/B comes from
+  free_ion_set    TEXT NOT NULL,                    -- named set that B0 is taken from
+  policy          TEXT NOT NULL REFERENCES policy (id),   -- policy of the fit
+  measure_next    TEXT,                             -- what would help most, in words
+  score           REAL,                             -- [1] chi2 + 2 x free parameters + evidence; lower is better
+  ranking         TEXT,                             -- of a rival: why it ranks where it does
+  combination     TEXT,                             -- combination that is fixed where single numbers are not
+  rank            INTEGER,                          -- [1, >= 0] how many parameters the bands fix
+  singular_values TEXT CHECK (json_valid(singular_values)),   -- singular values of the weighted Jacobian, descending, a list of numbers
+  spin_crossing   REAL,                             -- [1, > 0] Delta/B at which the ground spin changes
+  remarks         TEXT NOT NULL CHECK (json_valid(remarks)),   -- sentences on ground level and order of levels, a list of texts
+  sentence        TEXT NOT NULL,                    -- one sentence for a thesis
   PRIMARY KEY (complex, measurement, number),
   FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
 ) STRICT, WITHOUT ROWID;
@@ -260,20 +262,20 @@ CREATE TABLE reading_band (
   complex         TEXT NOT NULL,
   measurement     TEXT NOT NULL,
   reading         INTEGER NOT NULL,
-  number          INTEGER NOT NULL,
-  label           TEXT NOT NULL,                     -- letter form, "b4T1g"
-  observed        REAL NOT NULL,
-  u_minus         REAL NOT NULL,
-  u_plus          REAL NOT NULL,
-  u_assumed       INTEGER NOT NULL CHECK (u_assumed IN (0, 1)),
-  floor           REAL NOT NULL,                     -- model floor tau of the transition
+  number          INTEGER NOT NULL,                 -- [>= 1] place in the reading
+  label           TEXT NOT NULL,                    -- transition, letter form of the upper level: "b4T1g"
+  observed        REAL NOT NULL,                    -- [cm-1, > 0] position of the band, or weighted barycentre of merged components
+  u_minus         REAL NOT NULL,                    -- [cm-1, > 0] standard uncertainty towards lower wavenumber
+  u_plus          REAL NOT NULL,                    -- [cm-1, > 0] standard uncertainty towards higher wavenumber
+  u_assumed       INTEGER NOT NULL CHECK (u_assumed IN (0, 1)),   -- 1: the uncertainty is the policy's default
+  floor           REAL NOT NULL,                    -- [cm-1, >= 0] model floor tau of the transition
   used            INTEGER NOT NULL CHECK (used IN (0, 1)),   -- 0: only compared with a prediction
-  calculated      REAL,
-  residual        REAL,                              -- observed - calculated
-  leverage        REAL,                              -- how much of the fit hangs on it, 0 to 1
-  gradient_Delta  REAL,                              -- d(transition energy)/d(parameter) at the fit
-  gradient_B      REAL,
-  gradient_C      REAL,
+  calculated      REAL,                             -- [cm-1, >= 0] transition energy at the fit
+  residual        REAL,                             -- [cm-1] observed - calculated
+  leverage        REAL,                             -- [1, 0 to 1] how much of the fit hangs on it
+  gradient_Delta  REAL,                             -- [1] d(transition energy)/d(Delta) at the fit
+  gradient_B      REAL,                             -- [1] d(transition energy)/d(B) at the fit
+  gradient_C      REAL,                             -- [1] d(transition energy)/d(C) at the fit
   PRIMARY KEY (complex, measurement, reading, number),
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
 ) STRICT, WITHOUT ROWID;
@@ -296,7 +298,7 @@ CREATE TABLE not_fitted (
   measurement TEXT NOT NULL,
   reading     INTEGER NOT NULL,
   band        INTEGER NOT NULL,
-  reason      TEXT NOT NULL,
+  reason      TEXT NOT NULL,                        -- why the band takes no part
   PRIMARY KEY (complex, measurement, reading, band),
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number),
   FOREIGN KEY (complex, measurement, band) REFERENCES band (complex, measurement, number)
@@ -307,12 +309,12 @@ CREATE TABLE branch (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
   reading     INTEGER NOT NULL,
-  number      INTEGER NOT NULL,
-  Delta       REAL NOT NULL,
-  B           REAL NOT NULL,
-  C           REAL NOT NULL,
-  chi2        REAL NOT NULL,
-  chosen      INTEGER NOT NULL CHECK (chosen IN (0, 1)),
+  number      INTEGER NOT NULL,                     -- [>= 1] place in the reading
+  Delta       REAL NOT NULL,                        -- [cm-1, >= 0] Delta of the solution
+  B           REAL NOT NULL,                        -- [cm-1, > 0] Racah B of the solution
+  C           REAL NOT NULL,                        -- [cm-1, > 0] Racah C of the solution
+  chi2        REAL NOT NULL,                        -- [1, >= 0] sum of squared weighted residuals
+  chosen      INTEGER NOT NULL CHECK (chosen IN (0, 1)),   -- 1: the solution that the reading reports
   PRIMARY KEY (complex, measurement, reading, number),
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
 ) STRICT, WITHOUT ROWID;
@@ -322,14 +324,14 @@ CREATE TABLE parameter (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
   reading     INTEGER NOT NULL,
-  name        TEXT NOT NULL CHECK (name IN ('Delta', 'B', 'C', 'beta')),
-  value       REAL,
-  u           REAL,                                  -- from the readings alone
-  u_total     REAL,                                  -- with the model floor and an assumed C/B
-  low         REAL,                                  -- limits of one standard uncertainty from the chi2 profile,
-  high        REAL,                                  --   where the curve is not parabolic
-  standing    TEXT NOT NULL CHECK (standing IN ('measured', 'fitted', 'assumed', 'predicted', 'quoted', 'withheld')),
-  reason      TEXT,
+  name        TEXT NOT NULL CHECK (name IN ('Delta', 'B', 'C', 'beta')),   -- name of the parameter
+  value       REAL,                                 -- [cm-1|1] value: cm-1, or 1 for beta; absent: withheld
+  u           REAL,                                 -- [cm-1|1, >= 0] standard uncertainty from the readings alone
+  u_total     REAL,                                 -- [cm-1|1, >= 0] standard uncertainty with the model floor and an assumed C/B
+  low         REAL,                                 -- [cm-1|1] lower limit of one standard uncertainty from the chi2 profile, where the curve is not parabolic
+  high        REAL,                                 -- [cm-1|1] upper limit, likewise
+  standing    TEXT NOT NULL CHECK (standing IN ('measured', 'fitted', 'assumed', 'predicted', 'quoted', 'withheld')),   -- what the number is
+  reason      TEXT,                                 -- why it is withheld or assumed
   PRIMARY KEY (complex, measurement, reading, name),
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number),
   CHECK ((value IS NULL) = (standing = 'withheld')),
@@ -341,9 +343,9 @@ CREATE TABLE correlation (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
   reading     INTEGER NOT NULL,
-  first       TEXT NOT NULL,
-  second      TEXT NOT NULL,
-  value       REAL NOT NULL CHECK (value BETWEEN -1 AND 1),
+  first       TEXT NOT NULL,                        -- first parameter
+  second      TEXT NOT NULL,                        -- second parameter
+  value       REAL NOT NULL CHECK (value BETWEEN -1 AND 1),   -- [1, -1 to 1] correlation from the total covariance
   PRIMARY KEY (complex, measurement, reading, first, second),
   FOREIGN KEY (complex, measurement, reading, first) REFERENCES parameter (complex, measurement, reading, name),
   FOREIGN KEY (complex, measurement, reading, second) REFERENCES parameter (complex, measurement, reading, name)
@@ -354,11 +356,11 @@ CREATE TABLE predicted_band (
   complex      TEXT NOT NULL,
   measurement  TEXT NOT NULL,
   reading      INTEGER NOT NULL,
-  label        TEXT NOT NULL,
-  position     REAL NOT NULL,
-  u            REAL NOT NULL,
-  spin_allowed INTEGER NOT NULL CHECK (spin_allowed IN (0, 1)),
-  looked       TEXT NOT NULL CHECK (looked IN ('inside', 'outside', 'not recorded')),   -- against what was scanned
+  label        TEXT NOT NULL,                       -- transition, letter form of the upper level
+  position     REAL NOT NULL,                       -- [cm-1, >= 0] where the fit puts it
+  u            REAL NOT NULL,                       -- [cm-1, >= 0] standard uncertainty of the prediction
+  spin_allowed INTEGER NOT NULL CHECK (spin_allowed IN (0, 1)),   -- 1: the upper level has the spin of the ground level
+  looked       TEXT NOT NULL CHECK (looked IN ('inside', 'outside', 'not recorded')),   -- where it lies against what was scanned
   PRIMARY KEY (complex, measurement, reading, label),
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
 ) STRICT, WITHOUT ROWID;
@@ -368,11 +370,11 @@ CREATE TABLE evidence (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
   reading     INTEGER NOT NULL,
-  number      INTEGER NOT NULL,
-  code        TEXT NOT NULL,
-  label       TEXT,                                  -- the transition it concerns, letter form
-  penalty     REAL NOT NULL,
-  text        TEXT NOT NULL,
+  number      INTEGER NOT NULL,                     -- [>= 1] place in the reading
+  code        TEXT NOT NULL,                        -- kind of evidence
+  label       TEXT,                                 -- the transition it concerns, letter form
+  penalty     REAL NOT NULL,                        -- [1] what it adds to the score
+  text        TEXT NOT NULL,                        -- the evidence in words
   PRIMARY KEY (complex, measurement, reading, number),
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
 ) STRICT, WITHOUT ROWID;
@@ -382,14 +384,14 @@ CREATE TABLE helpful_band (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
   reading     INTEGER NOT NULL,
-  number      INTEGER NOT NULL,
-  parameter   TEXT NOT NULL CHECK (parameter IN ('Delta', 'B', 'C')),
-  label       TEXT NOT NULL,
-  low         REAL NOT NULL,                         -- expected range, two standard uncertainties either way
-  high        REAL NOT NULL,
-  u_now       REAL,                                  -- NULL: not fixed at all
-  u_then      REAL NOT NULL,
-  sentence    TEXT NOT NULL,
+  number      INTEGER NOT NULL,                     -- [>= 1] place in the order of help
+  parameter   TEXT NOT NULL CHECK (parameter IN ('Delta', 'B', 'C')),   -- the number it would help
+  label       TEXT NOT NULL,                        -- transition, letter form of the upper level
+  low         REAL NOT NULL,                        -- [cm-1] lower end of the expected range, two standard uncertainties down
+  high        REAL NOT NULL,                        -- [cm-1] upper end, two standard uncertainties up
+  u_now       REAL,                                 -- [cm-1, >= 0] total standard uncertainty of the parameter now; absent: not fixed at all
+  u_then      REAL NOT NULL,                        -- [cm-1, >= 0] total standard uncertainty of the parameter once the band is read
+  sentence    TEXT NOT NULL,                        -- the advice in words
   PRIMARY KEY (complex, measurement, reading, number, parameter),
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
 ) STRICT, WITHOUT ROWID;
@@ -399,12 +401,12 @@ CREATE TABLE stress_pair (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
   reading     INTEGER NOT NULL,
-  first_number  INTEGER NOT NULL,                    -- of the reading_band
-  second_number INTEGER NOT NULL,
-  first       TEXT NOT NULL,
-  second      TEXT NOT NULL,
-  Delta       REAL,
-  B           REAL,
+  first_number  INTEGER NOT NULL,                   -- [>= 1] first transition, number of the reading_band
+  second_number INTEGER NOT NULL,                   -- [>= 1] second transition, number of the reading_band
+  first       TEXT NOT NULL,                        -- first transition, letter form
+  second      TEXT NOT NULL,                        -- second transition, letter form
+  Delta       REAL,                                 -- [cm-1, >= 0] Delta from the pair alone; absent: no solution
+  B           REAL,                                 -- [cm-1] B from the pair alone; absent: no solution
   PRIMARY KEY (complex, measurement, reading, first_number, second_number),
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
 ) STRICT, WITHOUT ROWID;
@@ -414,13 +416,13 @@ CREATE TABLE stress_left_out (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
   reading     INTEGER NOT NULL,
-  number      INTEGER NOT NULL,                      -- of the reading_band
-  label       TEXT NOT NULL,
-  Delta       REAL,
-  B           REAL,
-  C           REAL,
-  predicted   REAL,
-  z           REAL,                                  -- (observed - predicted) / combined u
+  number      INTEGER NOT NULL,                     -- [>= 1] the transition left out, number of the reading_band
+  label       TEXT NOT NULL,                        -- the transition left out, letter form
+  Delta       REAL,                                 -- [cm-1, >= 0] Delta from the others; absent: no solution
+  B           REAL,                                 -- [cm-1] B from the others
+  C           REAL,                                 -- [cm-1] C from the others
+  predicted   REAL,                                 -- [cm-1] where the others put the band
+  z           REAL,                                 -- [1] (observed - predicted) / combined u
   PRIMARY KEY (complex, measurement, reading, number),
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number)
 ) STRICT, WITHOUT ROWID;
@@ -429,14 +431,14 @@ CREATE TABLE stress_left_out (
 CREATE TABLE audit (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
-  number      INTEGER NOT NULL,                      -- place of the quoted entry in the record
-  parameter   TEXT NOT NULL CHECK (parameter IN ('Delta', 'B', 'C', 'beta')),
-  quoted      REAL NOT NULL,
-  refitted    REAL,                                  -- NULL where withheld
-  u_total     REAL,
-  difference  REAL,                                  -- quoted - refitted
-  z           REAL,
-  cause       TEXT,                                  -- a likely cause found by trying
+  number      INTEGER NOT NULL,                     -- [>= 1] place of the quoted entry in the record
+  parameter   TEXT NOT NULL CHECK (parameter IN ('Delta', 'B', 'C', 'beta')),   -- which parameter
+  quoted      REAL NOT NULL,                        -- [cm-1|1] printed value: cm-1, or 1 for beta; Dq is turned into Delta
+  refitted    REAL,                                 -- [cm-1|1] value of the chosen reading; absent: withheld
+  u_total     REAL,                                 -- [cm-1|1, >= 0] its total standard uncertainty
+  difference  REAL,                                 -- [cm-1|1] quoted - refitted
+  z           REAL,                                 -- [1] difference over its standard uncertainty
+  cause       TEXT,                                 -- a likely cause found by trying
   PRIMARY KEY (complex, measurement, number, parameter),
   FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
 ) STRICT, WITHOUT ROWID;
@@ -444,33 +446,33 @@ CREATE TABLE audit (
 -- The factor on an ion's model floors that its own records suggest. Shown beside the policy, never applied.
 CREATE TABLE floor_factor (
   ion         TEXT NOT NULL REFERENCES ion (name),
-  geometry    TEXT NOT NULL CHECK (geometry IN ('octahedral', 'tetrahedral')),
-  kappa       REAL NOT NULL,
-  u           REAL NOT NULL,
-  spare_bands INTEGER NOT NULL,
+  geometry    TEXT NOT NULL CHECK (geometry IN ('octahedral', 'tetrahedral')),   -- geometry of the complexes behind it
+  kappa       REAL NOT NULL,                        -- [1, >= 0] factor on the model floors that makes spare bands agree
+  u           REAL NOT NULL,                        -- [1, >= 0] standard uncertainty of kappa
+  spare_bands INTEGER NOT NULL,                     -- [1, >= 0] spare bands behind it
   PRIMARY KEY (ion, geometry)
 ) STRICT, WITHOUT ROWID;
 
 -- What needs a person, most pressing first: the review page and command print this list.
 CREATE TABLE review (
-  number      INTEGER NOT NULL PRIMARY KEY,
-  kind        TEXT NOT NULL CHECK (kind IN ('refused', 'strained', 'better rival', 'near rival', 'quoted value', 'repeats disagree')),
-  complex     TEXT NOT NULL,
-  measurement TEXT NOT NULL,
-  text        TEXT NOT NULL,
+  number      INTEGER NOT NULL PRIMARY KEY,         -- [>= 1] place in the list, most pressing first
+  kind        TEXT NOT NULL CHECK (kind IN ('refused', 'strained', 'better rival', 'near rival', 'quoted value', 'repeats disagree')),   -- why a person is needed
+  complex     TEXT NOT NULL,                        -- complex it concerns
+  measurement TEXT NOT NULL,                        -- measurement it concerns
+  text        TEXT NOT NULL,                        -- the reason in words
   FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
 ) STRICT, WITHOUT ROWID;
 
 -- Coded warnings. A hazard belongs to the complex, a spectral caution to a reading.
 CREATE TABLE caution (
   complex      TEXT NOT NULL REFERENCES complex (id),
-  number       INTEGER NOT NULL,
-  subject      TEXT NOT NULL CHECK (subject IN ('hazard', 'spectral')),
-  measurement  TEXT,                                 -- NULL for a hazard
-  reading      INTEGER,                              -- NULL for a hazard
-  code         TEXT NOT NULL,
-  found_in     TEXT,                                 -- of a hazard: what raised it, "ClO4 in the sample of aq-295"
-  text         TEXT NOT NULL,
+  number       INTEGER NOT NULL,                    -- [>= 1] place among the cautions of the complex
+  subject      TEXT NOT NULL CHECK (subject IN ('hazard', 'spectral')),   -- hazard: of the substance; spectral: of a reading
+  measurement  TEXT,                                -- measurement it concerns; absent for a hazard
+  reading      INTEGER,                             -- [>= 1] reading it concerns; absent for a hazard
+  code         TEXT NOT NULL,                       -- lasting code
+  found_in     TEXT,                                -- of a hazard: what raised it, "ClO4 in the sample of aq-295"
+  text         TEXT NOT NULL,                       -- the caution in words
   PRIMARY KEY (complex, number),
   FOREIGN KEY (complex, measurement, reading) REFERENCES reading (complex, measurement, number),
   CHECK ((subject = 'hazard') = (measurement IS NULL)),
@@ -482,20 +484,20 @@ CREATE UNIQUE INDEX caution_spectral ON caution (complex, measurement, reading, 
 -- Hazard cautions that the group declared not to apply, with the reason. Shown in their place.
 CREATE TABLE hazard_override (
   complex TEXT NOT NULL REFERENCES complex (id),
-  code    TEXT NOT NULL,
-  reason  TEXT NOT NULL,
+  code    TEXT NOT NULL,                            -- code of the hazard caution that does not apply
+  reason  TEXT NOT NULL,                            -- why, as typed
   PRIMARY KEY (complex, code)
 ) STRICT, WITHOUT ROWID;
 
 -- Fits of factors to the whole collection: Delta = g * average of f, beta = 1 - k * average of h, averages over donor atoms.
 -- Octahedral and tetrahedral complexes apart. A geometry without complexes has no row.
 CREATE TABLE factor_fit (
-  parameter        TEXT NOT NULL CHECK (parameter IN ('Delta', 'beta')),
-  geometry         TEXT NOT NULL CHECK (geometry IN ('octahedral', 'tetrahedral')),
-  complexes        INTEGER NOT NULL,
-  scatter          REAL NOT NULL,                    -- residual scatter s: of ln Delta, or of beta
-  scatter_standing TEXT NOT NULL CHECK (scatter_standing IN ('fitted', 'assumed')),
-  spare_complexes  INTEGER NOT NULL,                 -- beyond what the unknowns need, over all islands
+  parameter        TEXT NOT NULL CHECK (parameter IN ('Delta', 'beta')),   -- which parameter was fitted
+  geometry         TEXT NOT NULL CHECK (geometry IN ('octahedral', 'tetrahedral')),   -- geometry of the complexes
+  complexes        INTEGER NOT NULL,                -- [1, >= 0] complexes in the fit
+  scatter          REAL NOT NULL,                   -- [1, >= 0] residual scatter: of ln Delta, or of beta
+  scatter_standing TEXT NOT NULL CHECK (scatter_standing IN ('fitted', 'assumed')),   -- fitted from spare complexes, or assumed
+  spare_complexes  INTEGER NOT NULL,                -- [1, >= 0] complexes beyond what the unknowns need, over all islands
   PRIMARY KEY (parameter, geometry)
 ) STRICT, WITHOUT ROWID;
 
@@ -503,29 +505,29 @@ CREATE TABLE factor_fit (
 CREATE TABLE factor_island (
   parameter       TEXT NOT NULL,
   geometry        TEXT NOT NULL,
-  number          INTEGER NOT NULL,
-  gauge           TEXT NOT NULL REFERENCES ligand (id),   -- the ligand whose factor is set to 1
-  gauge_is_aqua   INTEGER NOT NULL CHECK (gauge_is_aqua IN (0, 1)),
-  complexes       INTEGER NOT NULL,
-  rank            INTEGER NOT NULL,                  -- independent combinations that the complexes fix
-  spare_complexes INTEGER NOT NULL,
+  number          INTEGER NOT NULL,                 -- [>= 1] number of the island
+  gauge           TEXT NOT NULL REFERENCES ligand (id),   -- ligand whose factor is set to 1
+  gauge_is_aqua   INTEGER NOT NULL CHECK (gauge_is_aqua IN (0, 1)),   -- 1: that ligand is water
+  complexes       INTEGER NOT NULL,                 -- [1, >= 0] complexes in the island
+  rank            INTEGER NOT NULL,                 -- [1, >= 0] independent combinations that the complexes fix
+  spare_complexes INTEGER NOT NULL,                 -- [1, >= 0] complexes beyond the rank
   PRIMARY KEY (parameter, geometry, number),
   FOREIGN KEY (parameter, geometry) REFERENCES factor_fit (parameter, geometry)
 ) STRICT, WITHOUT ROWID;
 
 -- Factors of ions (g in cm-1, k) and ligands (f, h). A factor that the complexes do not fix has no value and says so.
 CREATE TABLE factor (
-  parameter TEXT NOT NULL CHECK (parameter IN ('Delta', 'beta')),
-  geometry  TEXT NOT NULL,
-  kind      TEXT NOT NULL CHECK (kind IN ('ion', 'ligand')),
-  name      TEXT NOT NULL,                           -- ligand id, or ion, geometry and spin: "Cr(III) octahedral quartet"
-  value     REAL,
-  u         REAL,                                    -- 0 for the ligand that is set to 1
-  complexes INTEGER NOT NULL,                        -- how many complexes stand behind it
-  island    INTEGER NOT NULL,                        -- factors of different islands cannot be compared
-  gauge     INTEGER NOT NULL CHECK (gauge IN (0, 1)),
-  tested    INTEGER NOT NULL CHECK (tested IN (0, 1)),    -- 0: every complex behind it is needed to find it
-  reason    TEXT,                                    -- why there is no value, or no test
+  parameter TEXT NOT NULL CHECK (parameter IN ('Delta', 'beta')),   -- which parameter
+  geometry  TEXT NOT NULL,                          -- geometry of the complexes
+  kind      TEXT NOT NULL CHECK (kind IN ('ion', 'ligand')),   -- factor of an ion (g in cm-1, k) or of a ligand (f, h)
+  name      TEXT NOT NULL,                          -- ligand id, or ion, geometry and spin: "Cr(III) octahedral quartet"
+  value     REAL,                                   -- [cm-1|1] value: cm-1 for g, 1 for k, f and h; absent: the complexes do not fix it
+  u         REAL,                                   -- [cm-1|1, >= 0] standard uncertainty; 0 for the ligand that is set to 1
+  complexes INTEGER NOT NULL,                       -- [1, >= 0] complexes behind it
+  island    INTEGER NOT NULL,                       -- [>= 1] factors of different islands cannot be compared
+  gauge     INTEGER NOT NULL CHECK (gauge IN (0, 1)),   -- 1: the factor that is set to 1
+  tested    INTEGER NOT NULL CHECK (tested IN (0, 1)),   -- 0: every complex behind it is needed to find it
+  reason    TEXT,                                   -- why there is no value, or no test
   PRIMARY KEY (parameter, geometry, kind, name),
   FOREIGN KEY (parameter, geometry, island) REFERENCES factor_island (parameter, geometry, number),
   CHECK ((value IS NULL) = (u IS NULL)),
@@ -534,14 +536,14 @@ CREATE TABLE factor (
 
 -- The measurement that stands for each complex in a factor fit, and what the fit makes of it.
 CREATE TABLE factor_complex (
-  parameter   TEXT NOT NULL,
+  parameter   TEXT NOT NULL,                        -- which parameter
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
-  geometry    TEXT NOT NULL,
-  island      INTEGER NOT NULL,
-  fitted      REAL NOT NULL,
-  residual    REAL NOT NULL,                         -- ln(found/fitted) of Delta, found - fitted of beta
-  leverage    REAL NOT NULL CHECK (leverage BETWEEN 0 AND 1),   -- 1: it alone decides its fitted value
+  geometry    TEXT NOT NULL,                        -- geometry of the complex
+  island      INTEGER NOT NULL,                     -- [>= 1] island that the complex belongs to
+  fitted      REAL NOT NULL,                        -- [cm-1|1] what the fit gives: Delta in cm-1, beta as 1
+  residual    REAL NOT NULL,                        -- [1] ln(found/fitted) of Delta, found - fitted of beta
+  leverage    REAL NOT NULL CHECK (leverage BETWEEN 0 AND 1),   -- [1, 0 to 1] 1: it alone decides its fitted value
   PRIMARY KEY (parameter, complex),
   FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id),
   FOREIGN KEY (parameter, geometry, island) REFERENCES factor_island (parameter, geometry, number)
@@ -549,10 +551,10 @@ CREATE TABLE factor_complex (
 
 -- Measurements of a fitted geometry that stand in no factor fit, and why.
 CREATE TABLE factor_left_out (
-  parameter   TEXT NOT NULL,
+  parameter   TEXT NOT NULL,                        -- which parameter
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
-  reason      TEXT NOT NULL,
+  reason      TEXT NOT NULL,                        -- why the measurement stands in no fit
   PRIMARY KEY (parameter, complex, measurement),
   FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id)
 ) STRICT, WITHOUT ROWID;
@@ -562,12 +564,12 @@ CREATE TABLE factor_left_out (
 CREATE TABLE placement (
   complex     TEXT NOT NULL,
   measurement TEXT NOT NULL,
-  parameter   TEXT NOT NULL CHECK (parameter IN ('Delta', 'B', 'beta')),
-  method      TEXT NOT NULL CHECK (method IN ('average environment', 'factors')),
-  predicted   REAL,
-  u           REAL,
-  z           REAL,                                  -- (found - predicted) / combined u, as a normal deviate; of Delta in its logarithm
-  reason      TEXT,                                  -- why nothing is predicted
+  parameter   TEXT NOT NULL CHECK (parameter IN ('Delta', 'B', 'beta')),   -- which parameter
+  method      TEXT NOT NULL CHECK (method IN ('average environment', 'factors')),   -- what predicts it
+  predicted   REAL,                                 -- [cm-1|1] predicted value: cm-1, or 1 for beta
+  u           REAL,                                 -- [cm-1|1, >= 0] standard uncertainty of the prediction
+  z           REAL,                                 -- [1] (found - predicted) / combined u, as a normal deviate; of Delta in its logarithm
+  reason      TEXT,                                 -- why nothing is predicted
   PRIMARY KEY (complex, measurement, parameter, method),
   FOREIGN KEY (complex, measurement) REFERENCES measurement (complex, id),
   CHECK ((predicted IS NULL) = (u IS NULL)),
@@ -577,12 +579,98 @@ CREATE TABLE placement (
 
 -- Releases of the collection.
 CREATE TABLE release (
-  id           TEXT NOT NULL PRIMARY KEY,
-  doi          TEXT,                                 -- NULL: not yet assigned
-  licence      TEXT NOT NULL,                        -- SPDX identifier
-  policy       TEXT NOT NULL REFERENCES policy (id),
-  complexes    INTEGER NOT NULL,
-  measurements INTEGER NOT NULL
+  id           TEXT NOT NULL PRIMARY KEY,           -- name of the release, as group.yaml gives it
+  doi          TEXT,                                -- DOI of the set; absent: not yet assigned
+  licence      TEXT NOT NULL,                       -- SPDX identifier of the content's licence
+  policy       TEXT NOT NULL REFERENCES policy (id),   -- policy in force
+  complexes    INTEGER NOT NULL,                    -- [1, >= 0] complexes in the collection
+  measurements INTEGER NOT NULL                     -- [1, >= 0] measurements in the collection
+) STRICT, WITHOUT ROWID;
+
+-- Releases that were frozen, oldest first. Their dates are the only dates of publication that the collection has.
+CREATE TABLE frozen_release (
+  id           TEXT NOT NULL PRIMARY KEY,           -- name of the release
+  number       INTEGER NOT NULL,                    -- [>= 1] place in the order of release
+  date         TEXT NOT NULL,                       -- ISO date
+  who          TEXT NOT NULL,                       -- who released it
+  cause        TEXT NOT NULL,                       -- why, in one sentence
+  code_version TEXT,                                -- revision of the files under version control; absent: not recorded
+  software     TEXT NOT NULL,                       -- name and version of the software
+  engine       TEXT NOT NULL,                       -- sha256 of the engine's sources, hex
+  licence      TEXT NOT NULL,                       -- SPDX identifier of the content's licence
+  doi          TEXT,                                -- DOI of the release; absent: not yet assigned
+  complexes    INTEGER NOT NULL,                    -- [1, >= 0] complexes in it
+  measurements INTEGER NOT NULL                     -- [1, >= 0] measurements in it
+) STRICT, WITHOUT ROWID;
+
+-- What a frozen release held of each complex: enough to tell whether the id still means the same complex.
+-- No foreign key leads to complex: a record may be gone by now.
+CREATE TABLE frozen_complex (
+  release  TEXT NOT NULL REFERENCES frozen_release (id),   -- the frozen release
+  complex  TEXT NOT NULL,                           -- id of the complex
+  formula  TEXT NOT NULL,                           -- formula as it was typed
+  ion      TEXT NOT NULL,                           -- metal ion
+  geometry TEXT NOT NULL,                           -- geometry
+  isomer   TEXT NOT NULL,                           -- cis, trans, fac, mer or none
+  PRIMARY KEY (release, complex)
+) STRICT, WITHOUT ROWID;
+
+-- What a frozen release held of each measurement, and hashes of what its numbers hang on.
+CREATE TABLE frozen_measurement (
+  release     TEXT NOT NULL,                        -- the frozen release
+  complex     TEXT NOT NULL,                        -- id of the complex
+  measurement TEXT NOT NULL,                        -- id of the measurement within the complex
+  verdict     TEXT NOT NULL,                        -- verdict on the chosen reading
+  readings    TEXT NOT NULL,                        -- sha256 of what was typed and enters the fit, hex
+  policy      TEXT NOT NULL,                        -- policy of the fit
+  free_ion    TEXT NOT NULL,                        -- set, B0 and C0 in cm-1: "published 918 3850"; "published" alone: the set has no such ion
+  PRIMARY KEY (release, complex, measurement),
+  FOREIGN KEY (release, complex) REFERENCES frozen_complex (release, complex)
+) STRICT, WITHOUT ROWID;
+
+-- The numbers of frozen releases. They stay readable when the collection moves on.
+CREATE TABLE frozen_value (
+  release     TEXT NOT NULL,                        -- the frozen release
+  complex     TEXT NOT NULL,                        -- id of the complex
+  measurement TEXT NOT NULL,                        -- id of the measurement within the complex
+  parameter   TEXT NOT NULL CHECK (parameter IN ('Delta', 'B', 'C', 'beta')),   -- which parameter
+  value       REAL,                                 -- [cm-1|1] value: cm-1, or 1 for beta; absent: withheld
+  u           REAL,                                 -- [cm-1|1, >= 0] standard uncertainty from the readings alone
+  u_total     REAL,                                 -- [cm-1|1, >= 0] standard uncertainty with the model floor and an assumed C/B
+  standing    TEXT NOT NULL,                        -- what the number was
+  PRIMARY KEY (release, complex, measurement, parameter),
+  FOREIGN KEY (release, complex, measurement) REFERENCES frozen_measurement (release, complex, measurement)
+) STRICT, WITHOUT ROWID;
+
+-- Addresses that a frozen release published, each with the first release that had it. They are kept, or stand in `gone`.
+CREATE TABLE published_address (
+  address TEXT NOT NULL PRIMARY KEY,                -- path within the site, "complexes/cr-am6/"; with # for a place on a page
+  release TEXT NOT NULL REFERENCES frozen_release (id)   -- first release that had it
+) STRICT, WITHOUT ROWID;
+
+-- What became of published addresses and ids that are no longer what they were, as the group declares it.
+CREATE TABLE gone (
+  address TEXT NOT NULL PRIMARY KEY,                -- path within the site
+  kind    TEXT NOT NULL CHECK (kind IN ('tombstone', 'redirect', 'corrected')),   -- tombstone: taken away; redirect: renamed; corrected: kept, and its identity was typed wrongly before
+  target  TEXT,                                     -- path of the successor, or of the new name
+  reason  TEXT                                      -- why, as typed
+) STRICT, WITHOUT ROWID;
+
+-- What changed from one release to the next, and since the last. Numbers count as changed where they differ by more than 1e-9 of themselves.
+CREATE TABLE change (
+  number      INTEGER NOT NULL PRIMARY KEY,         -- [>= 1] place in the list: by release, complex, measurement, parameter
+  release     TEXT REFERENCES frozen_release (id),  -- release that brought the change; absent: made since the last release
+  kind        TEXT NOT NULL CHECK (kind IN ('complex added', 'complex removed', 'measurement added', 'measurement removed', 'verdict', 'number')),   -- what changed
+  complex     TEXT NOT NULL,                        -- id of the complex
+  measurement TEXT,                                 -- id of the measurement; absent: the whole complex
+  parameter   TEXT CHECK (parameter IN ('Delta', 'B', 'C', 'beta')),   -- of a number: which parameter
+  before      REAL,                                 -- [cm-1|1] of a number: value before; absent: withheld or none
+  before_u    REAL,                                 -- [cm-1|1, >= 0] its total standard uncertainty
+  after       REAL,                                 -- [cm-1|1] of a number: value after; absent: withheld or none
+  after_u     REAL,                                 -- [cm-1|1, >= 0] its total standard uncertainty
+  cause       TEXT NOT NULL,                        -- what brought it: readings, policy, free-ion set, engine, record; several with commas
+  text        TEXT NOT NULL,                        -- the change in words
+  CHECK ((kind = 'number') = (parameter IS NOT NULL))
 ) STRICT, WITHOUT ROWID;
 
 -- One row for each measurement's chosen reading. A withheld number is NULL and its standing says so.

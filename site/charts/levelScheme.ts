@@ -1,4 +1,4 @@
-import { svgElement } from './plot.ts';
+import { svgElement } from './svg.ts';
 import { spreadLabels } from './spread.ts';
 import { type TextPart, coordinate as c, spans } from './text.ts';
 

@@ -1,6 +1,6 @@
 import * as Plot from '@observablehq/plot';
 import { parseHTML } from 'linkedom';
-import { escapeText } from './text.ts';
+import { type Dress, svgElement } from './svg.ts';
 
 /** A Plot drawing with its scales, before it is dressed for the page. */
 export interface Drawing {
@@ -23,16 +23,6 @@ export function drawPlot(document: Document, options: Plot.PlotOptions): Drawing
   return { svg, x: x.apply.bind(x), y: y.apply.bind(y) };
 }
 
-export interface Dress {
-  /** Unique on its page; the ids of title and description begin with it. */
-  readonly id: string;
-  readonly title: string;
-  readonly description: string;
-  /** Hand-made SVG drawn under and over what Plot drew. */
-  readonly under?: string;
-  readonly over?: string;
-}
-
 /**
  * The drawing as an SVG string for the page: no style element or attributes of Plot's own (the content security policy
  * blocks them), a name and a description for those who do not see it, and coordinates of two decimals, so that the bytes
@@ -46,10 +36,4 @@ export function dressed({ svg }: Drawing, dress: Dress): string {
   }
   const inner = svg.innerHTML.replace(/\d+\.\d{3,}/g, (digits) => String(Math.round(Number(digits) * 100) / 100));
   return svgElement(dress, Number(width), Number(height), `${dress.under ?? ''}<g class="plot" font-size="12.5" text-anchor="middle" fill="currentColor">${inner}</g>${dress.over ?? ''}`);
-}
-
-/** An SVG element with role, name and description around hand-made or dressed content. */
-export function svgElement({ id, title, description }: Dress, width: number, height: number, content: string): string {
-  return `<svg class="drawing${width > 600 ? ' broad-drawing' : width > 400 ? ' middle-drawing' : ''}" role="img" aria-labelledby="${id}-title" aria-describedby="${id}-desc" viewBox="0 0 ${width} ${height}" width="${width}" height="${height}">`
-    + `<title id="${id}-title">${escapeText(title)}</title><desc id="${id}-desc">${escapeText(description)}</desc>${content}</svg>`;
 }

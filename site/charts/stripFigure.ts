@@ -1,5 +1,5 @@
 import { energyScale, energyTicks } from './energyAxis.ts';
-import { svgElement } from './plot.ts';
+import { svgElement } from './svg.ts';
 import { spreadLabels } from './spread.ts';
 import { type StripPlace, type StripRow, stripInk } from './strip.ts';
 import { type TextPart, coordinate as c, spans, textWidth } from './text.ts';

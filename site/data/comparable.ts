@@ -1,6 +1,6 @@
 import {
   type ComplexIdentity, type Difference, type Geometry, type SeriesNumber, type SeriesParameter, type SeriesResult, type Subject,
-  conditionWords, difference, ionKey, ionSubject, ionWords, ligandSubject, parametersByName, temperatureReach, usedTransitions, usualSeries,
+  comparisonCautions, conditionWords, difference, ionKey, ionSubject, ionWords, ligandSubject, parametersByName, temperatureReach, usedTransitions, usualSeries,
 } from '#engine';
 import { groupBy } from './group.ts';
 import { oncePerCollection } from './memo.ts';
@@ -32,7 +32,7 @@ function seriesResultOf(node: MeasurementNode): SeriesResult {
     parameters: parametersByName(Object.values(chosen.parameters).map(numberOf)),
     correlation: chosen.correlations.find(({ first, second }) => first === 'Delta' && second === 'B')?.value ?? null,
     transitions: usedTransitions(chosen.transitions.map(({ row: { label, used } }) => ({ label, used: used === 1 }))),
-    cautions: chosen.cautions.map(({ code }) => code),
+    cautions: comparisonCautions(chosen.cautions.map(({ code }) => code)),
   };
 }
 
@@ -90,6 +90,9 @@ export function seriesOfKind(tree: CollectionTree, { measurements }: Kind, param
 export function seriesByMetal(tree: CollectionTree, complexes: readonly ComplexNode[], parameter: SeriesParameter): Series {
   return series(tree, complexes.flatMap((complex) => complex.measurements), parameter, ligandSubject(identity(complexes[0]!), tree.policy.id));
 }
+
+/** A measurement's chosen reading as the engine compares it. */
+export const resultOf = (tree: CollectionTree, node: MeasurementNode): SeriesResult => comparedResults(tree).get(node)!;
 
 /** First less second, with the uncertainty that belongs to it; null where one is withheld. */
 export function differenceOf(tree: CollectionTree, first: MeasurementNode, second: MeasurementNode, parameter: SeriesParameter): Difference | null {

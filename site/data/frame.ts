@@ -28,7 +28,8 @@ export function frame(tree: CollectionTree): Frame {
     hazardNote: hazardFooter,
     sections: [
       { text: 'Collection', path: '' }, { text: 'Ions', path: 'ions/' }, { text: 'Ligands', path: 'ligands/' },
-      { text: 'Series', path: 'series/' }, { text: 'Methods', path: 'methods/' }, { text: 'Data', path: 'data/' },
+      { text: 'Series', path: 'series/' },
+      { text: 'Compare', path: 'compare/' }, { text: 'Predict', path: 'predict/' }, { text: 'Methods', path: 'methods/' }, { text: 'Data', path: 'data/' },
     ],
   };
 }

@@ -10,7 +10,7 @@ export interface MetaRow { readonly key: string; readonly value: string }
 export interface PersonRow { readonly number: number; readonly name: string; readonly orcid: string | null; readonly initials: string | null }
 export interface PolicyRow {
   readonly id: string; readonly name: string; readonly in_force: Flag;
-  readonly C_over_B: number; readonly C_over_B_u: number; readonly C_over_B_per_ion: string;
+  readonly C_over_B: number; readonly C_over_B_u: number; readonly C_over_B_per_ion: string; readonly C_fitted: Flag;
   readonly floor_general: number; readonly floor_spin_flip: number; readonly floor_two_electron: number;
   readonly ceiling_Delta: number; readonly ceiling_B: number; readonly ceiling_C: number;
   readonly differential_Delta: number; readonly differential_B: number;
@@ -60,19 +60,37 @@ export interface ReadingRow extends OfMeasurement {
   readonly Delta_over_B: number | null; readonly chi2: number | null; readonly bands_used: number; readonly spare_bands: number; readonly rms_residual: number | null;
   readonly C_over_B: number | null; readonly C_over_B_u: number | null; readonly C_over_B_origin: string | null;
   readonly free_ion_set: string; readonly policy: string; readonly measure_next: string | null;
-  readonly score: number | null; readonly ranking: string | null; readonly remarks: string; readonly sentence: string;
+  readonly score: number | null; readonly ranking: string | null; readonly combination: string | null; readonly rank: number | null;
+  readonly remarks: string; readonly sentence: string;
 }
-export interface StressLeftOutRow extends OfReading { readonly number: number; readonly label: string; readonly Delta: number | null; readonly B: number | null; readonly predicted: number | null; readonly z: number | null }
+export interface StressLeftOutRow extends OfReading { readonly number: number; readonly label: string; readonly Delta: number | null; readonly B: number | null; readonly C: number | null; readonly predicted: number | null; readonly z: number | null }
+export interface StressPairRow extends OfReading { readonly first_number: number; readonly second_number: number; readonly first: string; readonly second: string; readonly Delta: number | null; readonly B: number | null }
+export interface EvidenceRow extends OfReading { readonly number: number; readonly code: string; readonly label: string | null; readonly penalty: number; readonly text: string }
+export interface HelpfulBandRow extends OfReading {
+  readonly number: number; readonly parameter: 'Delta' | 'B' | 'C'; readonly label: string; readonly low: number; readonly high: number;
+  readonly u_now: number | null; readonly u_then: number; readonly sentence: string;
+}
+export interface AuditRow extends OfMeasurement {
+  readonly number: number; readonly parameter: 'Delta' | 'B' | 'C' | 'beta'; readonly quoted: number; readonly refitted: number | null;
+  readonly u_total: number | null; readonly difference: number | null; readonly z: number | null; readonly cause: string | null;
+}
+export interface PlacementRow extends OfMeasurement {
+  readonly parameter: 'Delta' | 'B' | 'beta'; readonly method: string; readonly predicted: number | null; readonly u: number | null;
+  readonly z: number | null; readonly reason: string | null;
+}
+export interface FloorFactorRow { readonly ion: string; readonly geometry: string; readonly kappa: number; readonly u: number; readonly spare_bands: number }
+export interface ReviewRow extends OfMeasurement { readonly number: number; readonly kind: string; readonly text: string }
 export interface ReadingBandRow extends OfReading {
   readonly number: number; readonly label: string; readonly observed: number; readonly u_minus: number; readonly u_plus: number;
   readonly u_assumed: Flag; readonly floor: number; readonly used: Flag; readonly calculated: number | null; readonly residual: number | null;
+  readonly leverage: number | null; readonly gradient_Delta: number | null; readonly gradient_B: number | null; readonly gradient_C: number | null;
 }
 export interface ReadingBandMemberRow extends OfReading { readonly reading_band: number; readonly band: number }
 export interface NotFittedRow extends OfReading { readonly band: number; readonly reason: string }
 export interface BranchRow extends OfReading { readonly number: number; readonly Delta: number; readonly B: number; readonly C: number; readonly chi2: number; readonly chosen: Flag }
 export interface ParameterRow extends OfReading {
   readonly name: 'Delta' | 'B' | 'C' | 'beta'; readonly value: number | null; readonly u: number | null; readonly u_total: number | null;
-  readonly standing: string; readonly reason: string | null;
+  readonly low: number | null; readonly high: number | null; readonly standing: string; readonly reason: string | null;
 }
 export interface CorrelationRow extends OfReading { readonly first: string; readonly second: string; readonly value: number }
 export interface PredictedBandRow extends OfReading { readonly label: string; readonly position: number; readonly u: number; readonly spin_allowed: Flag; readonly looked: string }
@@ -103,9 +121,16 @@ export interface Rows {
   readonly not_fitted: readonly NotFittedRow[];
   readonly branch: readonly BranchRow[];
   readonly stress_left_out: readonly StressLeftOutRow[];
+  readonly stress_pair: readonly StressPairRow[];
+  readonly evidence: readonly EvidenceRow[];
+  readonly helpful_band: readonly HelpfulBandRow[];
   readonly parameter: readonly ParameterRow[];
   readonly correlation: readonly CorrelationRow[];
   readonly predicted_band: readonly PredictedBandRow[];
   readonly caution: readonly CautionRow[];
   readonly hazard_override: readonly HazardOverrideRow[];
+  readonly audit: readonly AuditRow[];
+  readonly placement: readonly PlacementRow[];
+  readonly floor_factor: readonly FloorFactorRow[];
+  readonly review: readonly ReviewRow[];
 }

@@ -12,6 +12,12 @@ export interface ReadingNode {
   readonly branches: readonly R.BranchRow[];
   /** The fit with each band left out. */
   readonly leftOut: readonly R.StressLeftOutRow[];
+  /** The fit to each pair of bands alone. */
+  readonly pairs: readonly R.StressPairRow[];
+  /** What speaks against the reading; the sum is its score. */
+  readonly evidence: readonly R.EvidenceRow[];
+  /** Bands worth looking for, most helpful first, one row for each number they would help. */
+  readonly helpful: readonly R.HelpfulBandRow[];
   readonly parameters: Readonly<Record<R.ParameterRow['name'], R.ParameterRow>>;
   readonly correlations: readonly R.CorrelationRow[];
   readonly predicted: readonly R.PredictedBandRow[];
@@ -25,6 +31,8 @@ export interface MeasurementNode {
   readonly scanned: readonly R.ObservedRangeRow[];
   readonly absent: readonly R.ObservedRangeRow[];
   readonly quoted: readonly R.QuotedRow[];
+  readonly audits: readonly R.AuditRow[];
+  readonly placements: readonly R.PlacementRow[];
   readonly chosen: ReadingNode;
   readonly rivals: readonly ReadingNode[];
 }
@@ -52,6 +60,9 @@ export interface CollectionTree {
   /** Symbols of ligands that formulas of the collection may hold. */
   readonly abbreviations: readonly string[];
   readonly complexes: readonly ComplexNode[];
+  /** What needs a person, most pressing first. */
+  readonly review: readonly R.ReviewRow[];
+  readonly floorFactors: readonly R.FloorFactorRow[];
 }
 
 /**
@@ -70,6 +81,8 @@ export function collectionTree(rows: Rows): CollectionTree {
   const bands = grouped(rows.band, ofMeasurement);
   const ranges = grouped(rows.observed_range, ofMeasurement);
   const quoted = grouped(rows.quoted, ofMeasurement);
+  const audits = grouped(rows.audit, ofMeasurement);
+  const placements = grouped(rows.placement, ofMeasurement);
   const hazards = grouped(rows.caution.filter((row) => row.subject === 'hazard'), (row) => row.complex);
   const overrides = grouped(rows.hazard_override, (row) => row.complex);
 
@@ -91,7 +104,7 @@ export function collectionTree(rows: Rows): CollectionTree {
       const chosen = own.find((reading) => reading.row.chosen === 1);
       if (chosen === undefined) throw new Error(`${key} has no chosen reading`);
       inner.push({
-        row: measurement, complex: node, bands: bands(key), quoted: quoted(key),
+        row: measurement, complex: node, bands: bands(key), quoted: quoted(key), audits: audits(key), placements: placements(key),
         scanned: ranges(key).filter((range) => range.kind === 'scanned'),
         absent: ranges(key).filter((range) => range.kind === 'absent'),
         chosen, rivals: own.filter((reading) => reading !== chosen),
@@ -103,7 +116,7 @@ export function collectionTree(rows: Rows): CollectionTree {
     meta: new Map(rows.meta.map(({ key, value }) => [key, value])),
     people: rows.person, policies: byKey(rows.policy, (row) => row.id), policy,
     ions: rows.ion, freeIons: rows.free_ion, sources: byKey(rows.source, (row) => row.id), ligands: rows.ligand,
-    abbreviations, complexes,
+    abbreviations, complexes, review: rows.review, floorFactors: rows.floor_factor,
   };
 }
 
@@ -116,6 +129,9 @@ function readingNodes(rows: Rows): (key: string) => readonly ReadingNode[] {
   const notFitted = grouped(rows.not_fitted, ofReading);
   const branches = grouped(rows.branch, ofReading);
   const leftOut = grouped(rows.stress_left_out, ofReading);
+  const pairs = grouped(rows.stress_pair, ofReading);
+  const evidence = grouped(rows.evidence, ofReading);
+  const helpful = grouped(rows.helpful_band, ofReading);
   const parameters = grouped(rows.parameter, ofReading);
   const correlations = grouped(rows.correlation, ofReading);
   const predicted = grouped(rows.predicted_band, ofReading);
@@ -129,7 +145,7 @@ function readingNodes(rows: Rows): (key: string) => readonly ReadingNode[] {
         bands: members(`${key}:${transition.number}`).map((member) => found(bands, `${ofMeasurement(row)}#${member.band}`)),
       })),
       notFitted: new Map(notFitted(key).map(({ band, reason }) => [band, reason])),
-      branches: branches(key), leftOut: leftOut(key),
+      branches: branches(key), leftOut: leftOut(key), pairs: pairs(key), evidence: evidence(key), helpful: helpful(key),
       parameters: Object.fromEntries(parameters(key).map((parameter) => [parameter.name, parameter])) as ReadingNode['parameters'],
       correlations: correlations(key), cautions: cautions(key),
       predicted: [...predicted(key)].sort((a, b) => a.position - b.position),

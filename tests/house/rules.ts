@@ -20,7 +20,7 @@ export const engineStandsAlone: Rule = (sources) =>
  * Folders of the engine from the ground up: each uses only those before it. `index.ts` stands above all.
  * A new folder has to find its place here.
  */
-export const engineFolders = ['linear', 'quantity', 'ions', 'formula', 'shell', 'levels', 'policy', 'measurement', 'words', 'cautions', 'readings', 'series'];
+export const engineFolders = ['linear', 'quantity', 'ions', 'formula', 'shell', 'levels', 'policy', 'measurement', 'words', 'cautions', 'readings', 'series', 'record'];
 
 export const engineFoldersInOrder: Rule = (sources) =>
   imports(sources, 'engine').filter(({ from }) => from !== 'engine/index.ts').flatMap((one) => {
@@ -101,10 +101,16 @@ export const noSilentSkips: Rule = (sources) =>
   });
 
 // Written in halves, so that this file does not offend its own rule.
-const foreign: readonly RegExp[] = [
+const origin: readonly RegExp[] = [
   new RegExp(`\\b${'trans'}${'cripts?'}\\b`, 'i'),
   new RegExp(`\\b${'lec'}${'tur(e|es|er|ers)'}\\b`, 'i'),
   new RegExp(`\\b${'seed'} ${'documents?'}\\b`, 'i'),
+];
+
+/** The one file that may say where the idea of the project came from. */
+const mayNameOrigin = 'DEVELOPERS.md';
+
+const foreign: readonly RegExp[] = [
   new RegExp(`\\b${'ses'}${'sions?'}\\b`, 'i'),
   // A reducing agent and the user agent are chemistry and the web.
   new RegExp(`(?<!ing[ -]|user[ -])\\b${'ag'}${'ents?'}\\b`, 'i'),
@@ -118,6 +124,7 @@ const foreign: readonly RegExp[] = [
 export const noForeignWords: Rule = (sources) =>
   sources.flatMap(({ path, text }) =>
     [path, ...text.split('\n')].flatMap((line, i) => {
-      const hit = foreign.map((pattern) => pattern.exec(line)).find((found) => found !== null);
+      const patterns = path === mayNameOrigin ? foreign : [...origin, ...foreign];
+      const hit = patterns.map((pattern) => pattern.exec(line)).find((found) => found !== null);
       return hit ? [`${path}:${i} "${hit[0]}"`] : [];
     }));

@@ -9,6 +9,7 @@ import type { complexSchema } from '../schema/complex.ts';
 import { hasSpinChoice, fittedGeometry, lowSpinMultiplicity, possibleMultiplicities, resolvedSpin } from '../spin.ts';
 import type { LigandRecord } from '../types.ts';
 import { checkBands } from './bands.ts';
+import { checkEvidence } from './evidence.ts';
 import { checkFormula, checkSample } from './formula.ts';
 import { checkLigands } from './ligands.ts';
 import { checkTerms } from './terms.ts';
@@ -44,7 +45,9 @@ export function checkComplex(complex: Draft<typeof complexSchema>, report: Repor
     checkOverride(measurement, path, report);
     checkSample(measurement, path, complex.formula, formula, report, known);
     checkBands(measurement, path, report);
-    if (multiplicity !== 'unknown') checkTerms(complex, measurement, path, multiplicity, report);
+    if (multiplicity === 'unknown') return;
+    checkTerms(complex, measurement, path, multiplicity, report);
+    checkEvidence(complex, measurement, path, multiplicity, report);
   });
 }
 

@@ -1,4 +1,4 @@
-// The terms that bands claim: each is a level of the ion, and no two bands claim one level.
+// The terms that bands claim: each is a level of the ion that its band can reach, and no two bands claim one level.
 
 import { degeneratePair, freeIon, levelNames, readLabel, shownLabel } from '#engine';
 import type { Geometry, Ion } from '#engine';
@@ -6,8 +6,10 @@ import { andList, nearNames, orList } from '../nearest.ts';
 import { bandRoles } from '../records/measurement.ts';
 import { typedText } from '../report.ts';
 import type { Finding, Reporter } from '../report.ts';
-import { fittedGeometry } from '../spin.ts';
+import { fittedGeometry, possibleMultiplicities } from '../spin.ts';
 import type { ComplexDraft, MeasurementDraft } from './complex.ts';
+import { checkComponents } from './components.ts';
+import type { Component } from './components.ts';
 
 /** C/B by which parents are told apart where the free-ion set has no C0 for an ion: the middle of fitted values. */
 const usualRatio = 4.5;
@@ -38,11 +40,25 @@ function nearTerm(typed: string, ion: Ion, geometry: Geometry): string | null {
   return near.length > 0 ? `write ${orList(near)}` : null;
 }
 
+/** Multiplicity of a level in letter form. */
+const multiplicityOf = (label: string): number => Number(/[1-6]/.exec(label)?.[0]);
+
+/** A dip is where a narrow spin-forbidden line interferes with a broad band; no spin-allowed transition looks like that. */
+function dipFinding(typed: string, labels: readonly string[], { ion, multiplicity }: TermContext): Finding | null {
+  const ground = multiplicity ?? possibleMultiplicities(ion.electrons)[0]!;
+  if (!labels.some((label) => multiplicityOf(label) === ground)) return null;
+  return {
+    code: 'DIP_TERM', found: `${typedText(typed)} of a dip`, expected: `a spin-forbidden level, of another multiplicity than the ground level's ${ground}: a dip is a narrow line that interferes with a broad band`,
+    mend: 'give the level of the narrow line, or write kind: maximum where this is a band of its own',
+  };
+}
+
 /** Checks the terms of one measurement. Geometries that are not fitted keep whatever label is typed. */
 export function checkTerms(complex: ComplexDraft, { bands }: MeasurementDraft, path: readonly (string | number)[], multiplicity: number | null, report: Reporter): void {
   const geometry = fittedGeometry(complex.geometry ?? '');
   const { ion } = complex;
   if (geometry === null || ion === undefined) return;
+  const context: TermContext = { ion, geometry, multiplicity };
   const claims = new Map<string, Claim[]>();
   bands?.forEach((band, index) => {
     if (band === undefined || !('position' in band) || band.term === undefined) return;
@@ -51,11 +67,16 @@ export function checkTerms(complex: ComplexDraft, { bands }: MeasurementDraft, p
     terms.forEach((term, place) => {
       if (term === undefined || bandRoles.includes(term)) return;
       const at = [...path, 'bands', index, 'term', ...(listed ? [place] : [])];
-      const read = checkTerm(term, { ion, geometry, multiplicity });
+      const read = checkTerm(term, context);
+      const dip = 'labels' in read && band.kind === 'dip' ? dipFinding(term, read.labels, context) : null;
       if (!('labels' in read)) report.at(at, read);
+      else if (dip !== null) report.at(at, dip);
       else if (terms.length === 1 && read.labels.length === 1 && band['left-out'] === undefined) {
         const label = read.labels[0]!;
-        claims.set(label, [...(claims.get(label) ?? []), { index, at, typed: term, component: band.kind === 'component', position: band.position?.typed ?? `band ${index + 1}` }]);
+        const degeneracy = band.degeneracy ?? (Object.hasOwn(band, 'degeneracy') ? 'unread' : null);
+        claims.set(label, [...(claims.get(label) ?? []), {
+          at: [...path, 'bands', index], atTerm: at, typed: term, component: band.kind === 'component', position: band.position?.typed ?? `band ${index + 1}`, degeneracy,
+        }]);
       }
     });
   });
@@ -64,9 +85,12 @@ export function checkTerms(complex: ComplexDraft, { bands }: MeasurementDraft, p
     const components = claimants.every(({ component }) => component);
     // Two levels fall together in the pair; a level has at most three states.
     const most = label === pair ? 2 : components ? 3 : 1;
-    if (claimants.length <= most) continue;
+    if (claimants.length <= most) {
+      if (components) checkComponents(claimants, label, context, report);
+      continue;
+    }
     const last = claimants[most]!;
-    report.at(last.at, {
+    report.at(last.atTerm, {
       code: 'TERM_TWICE', found: `${typedText(last.typed)}, claimed by ${andList(claimants.map(({ position }) => position))}`,
       expected: label === pair ? `at most two bands for the pair ${shownLabel(label, ion.electrons)}`
         : components ? `at most three components of one level, ${shownLabel(label, ion.electrons)}`
@@ -76,10 +100,9 @@ export function checkTerms(complex: ComplexDraft, { bands }: MeasurementDraft, p
   }
 }
 
-interface Claim {
-  readonly index: number;
-  readonly at: readonly (string | number)[];
+/** One band that claims a level alone, a component or not. */
+interface Claim extends Component {
+  readonly atTerm: readonly (string | number)[];
   readonly typed: string;
   readonly component: boolean;
-  readonly position: string;
 }

@@ -99,7 +99,7 @@ export const complexSchema = z.strictObject({
   nuclearity: count(1, 12).optional().meta({ description: 'number of metal centres; 1 where nothing is typed', examples: ['1'] }),
   innocence: choice(['doubtful']).optional().meta({ description: 'the word doubtful, where a ligand may share its electrons; beta is then withheld', examples: ['doubtful'] }),
   'charge-note': text().optional().meta({ description: 'a remark on how the charge was assigned', examples: ['"from the EPR spectrum"'] }),
-  hazards: z.record(text(), text()).optional().meta({ description: 'hazard cautions that do not apply, each with the reason', examples: ['{ PERCHLORATE: "never in contact with perchlorate" }'] }),
+  hazards: z.record(text(), text().meta({ description: 'the reason why it does not apply', examples: ['"never in contact with perchlorate"'] })).optional().meta({ description: 'hazard cautions that do not apply, each with the reason', examples: ['{ PERCHLORATE: "never in contact with perchlorate" }'] }),
   notes: text().optional().meta({ description: 'anything else', examples: ['"made by the old route"'] }),
   measurements: z.array(measurement).max(200).optional().meta({ description: 'spectra of this complex', examples: ['[{ id: aq-295, ... }]'] }),
 });

@@ -2,6 +2,7 @@
 
 import type { z } from 'zod';
 import { complexSchema } from './complex.ts';
+import { goneSchema } from './gone.ts';
 import { groupSchema } from './group.ts';
 import { ligandSchema } from './ligand.ts';
 import { policySchema } from './policy.ts';
@@ -19,4 +20,5 @@ export const recordKinds: readonly RecordKind[] = [
   { name: 'source', files: 'sources/ID.yaml', schema: sourceSchema },
   { name: 'group', files: 'group.yaml', schema: groupSchema },
   { name: 'policy', files: 'policy.yaml', schema: policySchema },
+  { name: 'gone', files: 'releases/gone.yaml', schema: goneSchema },
 ];

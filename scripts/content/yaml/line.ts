@@ -98,6 +98,12 @@ const deepestFormula = 8;
 export function closesAsFormula(line: string, at: number): boolean {
   let open = 0;
   for (let index = at; index < line.length; index += 1) {
+    // Brackets in an item's quotes belong to the item.
+    if (/["']/.test(line[index]!) && /[[\s,]/.test(line[index - 1] ?? '')) {
+      const end = skipQuoted(line, index + 1, line[index] as '"' | "'");
+      if (end === null) return false;
+      index = end;
+    }
     if (line[index] === '[') open += 1;
     if (line[index] === ']') open -= 1;
     if (open > deepestFormula) return false;

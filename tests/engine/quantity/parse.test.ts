@@ -122,6 +122,10 @@ describe('what is refused, and how it is mended', () => {
     ['21550() cm-1', 'BAD_UNCERTAINTY', null],
     ['21550(±60) cm-1', 'BAD_UNCERTAINTY', '21550(60) cm-1'],
     ['21550 cm-1 ± 0.3 %', 'BAD_UNCERTAINTY', null],
+    ['21550(+60 +40) cm-1', 'UNCERTAINTY_SIGN', null],
+    ['464.0(−5 −8) nm', 'UNCERTAINTY_SIGN', null],
+    ['21550(60/-40) cm-1', 'UNCERTAINTY_SIGN', null],
+    ['21550(-60) cm-1', 'UNCERTAINTY_SIGN', null],
     ['21550 ± 60 ± 3 cm-1', 'BAD_UNCERTAINTY', null],
     ['21550(60) ± 3 cm-1', 'BAD_UNCERTAINTY', null],
     ['21550 cm-1 (k = 2)', 'BAD_COVERAGE', null],
@@ -146,6 +150,7 @@ describe('what is refused, and how it is mended', () => {
   });
 
   test('other fields name what they expect', () => {
+    expect(bad('36 cm-1', 'absorption-coefficient')).toMatchObject({ code: 'WRONG_UNIT', mend: 'write the number alone, or in L mol-1 cm-1' });
     expect(bad('295', 'temperature')).toMatchObject({ code: 'NO_UNIT', corrected: '295 K' });
     expect(bad('22 C', 'temperature')).toMatchObject({ code: 'UNKNOWN_UNIT', corrected: '22 °C' });
     expect(bad('-300 °C', 'temperature').code).toBe('NEGATIVE');

@@ -192,6 +192,18 @@ describe('awkward collections', () => {
     expect(factor(flat, quartet('Cr(III)')).value).toBeCloseTo(0, 10);
     expect(factor(flat, 'ammine')).toMatchObject({ value: null, u: null });
   });
+  test('a factor that hardly anything holds is withheld, not printed: k close to nothing leaves h loose', () => {
+    const one = fit([...['aqua', 'ammine'].map((ligand) => result({ ligands: { [ligand]: 6 }, beta: 0.98, uBetaTotal: 0.05 })), result({ ligands: { fluorido: 6 }, beta: 1.03, uBetaTotal: 0.05 })], 'beta');
+    expect(factor(one, 'fluorido')).toMatchObject({ value: null, u: null, reason: expect.stringContaining('hardly fix it') });
+    expect(factor(one, quartet('Cr(III)')).value).toBeCloseTo(0.02, 6);
+  });
+  test('where the best fit lies at no finite factor the answer comes all the same, and nothing that drifts is printed', () => {
+    // beta falls below 1 with one ligand and above it with the other on one ion, and the other way round on the next: no k and h do that.
+    const one = fit([['Cr(III)', 'aqua', 0.7], ['Cr(III)', 'ammine', 1.2], ['V(II)', 'aqua', 1.2], ['V(II)', 'ammine', 0.7], ['Mo(III)', 'ammine', 0.9]]
+      .map(([ion, ligand, beta]) => result({ ion: ion as string, ligands: { [ligand as string]: 6 }, beta: beta as number })), 'beta');
+    for (const { value, u } of one.factors) expect(value === null || (Number.isFinite(value) && Number.isFinite(u!))).toBe(true);
+    expect(one.factors.filter(({ value }) => value !== null && Math.abs(value) > 20)).toEqual([]);
+  });
   test('no complex at all gives an empty fit', () => {
     expect(fit([])).toMatchObject({ factors: [], islands: [], complexes: [], leftOut: [] });
     expect(predictFromFactors(fit([]), identity({ ligands: { aqua: 6 } }))).toEqual({ reason: expect.stringContaining('no other complex of it is in the fit') });

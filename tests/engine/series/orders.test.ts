@@ -84,8 +84,8 @@ describe('Delta against beta', () => {
       const delta = 14000 + 700 * i;
       const [a, b] = [random.normal(0, 1), random.normal(0, 1)];
       return result({
-        id: `c-${i}`, ligands: { aqua: i, ammine: 12 - i }, delta: delta + 600 * a, beta: 0.75 + slope * (delta - 18000) + 0.04 * (correlation * a + Math.sqrt(1 - correlation ** 2) * b),
-        uDeltaTotal: 600, uBetaTotal: 0.04, correlation,
+        id: `c-${i}`, ligands: { aqua: i, ammine: 12 - i }, delta: delta + 300 * a, beta: 0.75 + slope * (delta - 18000) + 0.04 * (correlation * a + Math.sqrt(1 - correlation ** 2) * b),
+        uDeltaTotal: 300, uBetaTotal: 0.04, correlation,
       });
     });
   };
@@ -104,8 +104,8 @@ describe('Delta against beta', () => {
       if (found.withinNull) inside += 1;
       if (found.nullBand.low + found.nullBand.high < 0) negative += 1;
     }
-    expect(inside).toBeGreaterThanOrEqual(91);
-    expect(negative).toBe(100);
+    expect(inside).toBeGreaterThanOrEqual(90);
+    expect(negative).toBeGreaterThanOrEqual(90);
   });
   test('says nothing below three points, where nothing varies, or where a number is withheld', () => {
     expect(planeCorrelation(cloud(1, 0, 0).slice(0, 2), resampling)).toBeNull();

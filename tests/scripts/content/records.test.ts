@@ -113,6 +113,7 @@ describe('the policy', () => {
       ceilings: { delta: 0.12, racahB: 0.2, racahC: 0.15 },
       differentialFloor: { delta: 40, racahB: 0.02 },
       freeIons: 'atomic-levels',
+      cFitted: true,
       rivalMargin: 5,
       defaultUncertainties: { maximum: 90, line: 15 },
     });

@@ -90,7 +90,7 @@ export const handMadeReading: Reading = {
   score: 4, evidence: [{ code: 'parameters', penalty: 4, label: '', value: null }], ranking: null,
   identifiability: { singularValues: [140, 12], rank: 2, combination: null },
   stress: {
-    pairs: [{ labels: ['a4T2g', 'a4T1g'], at: { delta: 21550, racahB: 650.25, racahC: 2926 } }],
+    pairs: [{ bands: [0, 1], labels: ['a4T2g', 'a4T1g'], at: { delta: 21550, racahB: 650.25, racahC: 2926 } }],
     leftOut: [{ label: 'a4T1g', at: null, predicted: null, z: null }],
   },
   groundState: { crossing: null, stabilisationInDelta: -1.2, stabilisation: -25860 }, doubletOrder: null,
