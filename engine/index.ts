@@ -23,7 +23,7 @@ export type { Range } from './quantity/range.ts';
 // Cautions and words
 export { cautionMeanings } from './cautions/catalogue.ts';
 export { complexCautions } from './cautions/ofComplex.ts';
-export { evidenceWords } from './words/ranking.ts';
+export { evidenceHeading, evidenceWords } from './words/ranking.ts';
 export type { ComplexFacts, MeasurementFacts } from './cautions/ofComplex.ts';
 export type { CautionMeaning, CautionSubject } from './cautions/catalogue.ts';
 export type { Caution } from './cautions/types.ts';

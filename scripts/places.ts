@@ -7,6 +7,7 @@ import { projectFolder } from './publish/pages.ts';
 export const places = {
   content: join(projectFolder, 'content'),
   database: join(projectFolder, '.cache', 'collection.sqlite'),
+  rebuilt: join(projectFolder, '.cache', 'from-export.sqlite'),
   site: join(projectFolder, 'dist'),
 } as const;
 

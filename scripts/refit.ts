@@ -5,8 +5,10 @@ import type { CommandTable } from './arguments.ts';
 import { refit } from './database/refit.ts';
 import { exitCodes } from './exitCodes.ts';
 import { explain } from './explain/explain.ts';
+import { rebuildFromExport } from './export/fromExport.ts';
 import { cacheFile, places } from './places.ts';
 import { progressLine } from './report/progress.ts';
+import { rebuildLines } from './report/rebuild.ts';
 import { stoppedByFaults } from './report/stoppedByFaults.ts';
 import { duration, refitFacts, refitLines } from './report/summary.ts';
 import { runCommand } from './runCommand.ts';
@@ -18,10 +20,11 @@ const table: CommandTable = {
     { name: 'content', value: 'DIR', help: 'folder of the records (content)' },
     { name: 'database', value: 'FILE', help: 'database file to write (.cache/collection.sqlite)' },
     { name: 'explain', value: 'ID', help: 'tell the story of one measurement (cr-am6/aq-295) or complex (cr-am6); writes nothing' },
+    { name: 'from-export', value: 'DIR', help: 'rebuild from the files of an export alone (dist/data) and compare every value; writes .cache/from-export.sqlite' },
     { name: 'cold', help: 'fit everything, read and keep no cache' },
     { name: 'json', help: 'print the summary, or the story, as JSON' },
   ],
-  examples: ['', '--explain cr-am6/aq-295', '--content ../our-bands --database our-bands.sqlite'],
+  examples: ['', '--from-export dist/data', '--explain cr-am6/aq-295', '--content ../our-bands --database our-bands.sqlite'],
 };
 
 await runCommand(table.name, () => {
@@ -32,6 +35,9 @@ await runCommand(table.name, () => {
   const json = given.has('json');
   const story = given.text('explain');
   if (story !== null) return explain(content, story, json);
+  if (given.text('from-export') !== null) {
+    return rebuild(given.path('from-export', places.site), given.path('database', places.rebuilt), given.has('cold') ? null : cacheFile(places.content), json);
+  }
 
   const progress = progressLine('fitting', process.stderr);
   const result = refit({ content, database, cache: given.has('cold') ? null : cacheFile(content), progress: progress.update });
@@ -46,3 +52,13 @@ await runCommand(table.name, () => {
   }
   return exitCodes.good;
 });
+
+function rebuild(from: string, database: string, cache: string | null, json: boolean): number {
+  const progress = progressLine('fitting', process.stderr);
+  const result = rebuildFromExport({ from, database, cache, progress: progress.update });
+  progress.end();
+  const { cells, differences, largest } = result.comparison;
+  if (json) process.stdout.write(`${JSON.stringify({ ok: differences.length === 0, ...refitFacts(result.refit), database, cells, sameBytes: result.sameBytes, largest, differences })}\n`);
+  else process.stdout.write(`${[...refitLines(result.refit), `Wrote ${database}.`, ...rebuildLines(result)].join('\n')}\n`);
+  return differences.length === 0 ? exitCodes.good : exitCodes.failed;
+}

@@ -40,6 +40,39 @@ export function evidenceWords({ code, penalty, label, value }: EvidenceFacts): s
   }
 }
 
+/**
+ * One kind of evidence as the head of a row in which readings stand side by side: without numbers, which differ between them.
+ * @param label as printed; "" where it concerns the whole reading
+ */
+export function evidenceHeading(code: string, label: string): string {
+  switch (code) {
+    case 'misfit':
+      return 'misfit, chi-square';
+    case 'parameters':
+      return 'fitted parameters';
+    case 'left over':
+      return 'bands left unexplained';
+    case 'gap':
+      return `${label} expected between assigned bands, not seen`;
+    case 'unseen':
+      return `${label} expected inside what was scanned, not seen`;
+    case 'below':
+      return `${label} expected below the lowest assigned band`;
+    case 'line skipped':
+      return `${label} expected below an assigned line, not seen`;
+    case 'beta':
+      return 'beta outside its usual range';
+    case 'absorptivity':
+      return `absorption coefficient not usual for ${label}`;
+    case 'width':
+      return `width not usual for ${label}`;
+    case 'forbidden and broad':
+      return `${label} spin-forbidden, yet the band is broad`;
+    default:
+      return code;
+  }
+}
+
 /** Differences of evidence worth naming. */
 const worthNaming = 0.5;
 const namedAtMost = 3;

@@ -26,7 +26,7 @@ export function writeRecords(databaseFile: string, content: string, site: string
     mkdirSync(folder, { recursive: true });
     const about = { $schema: '../../data/record.schema.json', ...aboutJson(publication, recordAddress(publication, record)) };
     const put = (name: string, text: string | Buffer): void => writeFileSync(join(folder, name), text);
-    put('record.json', `${JSON.stringify(recordJson(tables, rows, find, complex, about), null, 1)}\n`);
+    put('record.json', `${JSON.stringify(recordJson(tables, rows, find, complex, about))}\n`);
     put('record.yaml', typedRecord(content, String(complex['file']), String(complex['hash'])));
     put('bands.csv', bandsCsv({ complex, find }));
     put('cite.bib', citationBibtex(publication, record));

@@ -1,7 +1,7 @@
 import type { Parts } from './typeset.ts';
 
-/** A table cell: text, or typeset parts that may link to a page of the site. */
-export type Cell = string | { readonly parts: Parts; readonly path?: string; readonly soft?: boolean };
+/** A table cell: text, or typeset parts that may link to a page of the site; a small drawing may stand before them. */
+export type Cell = string | { readonly parts: Parts; readonly path?: string; readonly soft?: boolean; readonly drawing?: string };
 
 export interface Column {
   readonly head: Parts;

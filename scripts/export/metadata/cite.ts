@@ -37,7 +37,7 @@ export function citationBibtex(publication: Publication, record: CitedRecord | n
   const personal = publication.people.length > 0;
   return bibtexEntry('misc', key, [
     ['author', authors(publication), personal ? 'people' : 'group'],
-    ['title', title], ['publisher', publication.group], ['year', publication.date.slice(0, 4)], ['month', publication.date.slice(5, 7)],
+    ['title', title], ['publisher', publication.group], ['year', publication.date.slice(0, 4)], ['month', String(Number(publication.date.slice(5, 7)))],
     ['version', versionCode(publication)], ['url', address], ['doi', publication.doi],
     ['note', `${capital(versionWords(publication))}. DOI: ${doiWords(publication)}. Licence: ${publication.licence}.${publication.demonstration ? ` ${invented}` : ''}`],
   ]);
