@@ -1,20 +1,16 @@
 // npm run build: refit, pages, files for download.
 
-import { join } from 'node:path';
 import { readArguments } from './arguments.ts';
 import type { CommandTable } from './arguments.ts';
 import { refit } from './database/refit.ts';
 import { exitCodes } from './exitCodes.ts';
-import { writeExports } from './export/writeExports.ts';
-import { writeRecords } from './export/writeRecords.ts';
-import { writeSiteFiles } from './export/writeSiteFiles.ts';
+import { writePublication } from './export/writePublication.ts';
 import { cacheFile, places } from './places.ts';
 import { addressOf } from './publish/address.ts';
 import { buildPages, countPages } from './publish/pages.ts';
 import { swapFolder } from './publish/swapFolder.ts';
 import { counted } from './report/columns.ts';
 import { progressLine } from './report/progress.ts';
-import { writeTombstones } from './release/tombstones.ts';
 import { stoppedByFaults } from './report/stoppedByFaults.ts';
 import { duration, refitFacts, refitLines } from './report/summary.ts';
 import { runCommand } from './runCommand.ts';
@@ -47,9 +43,7 @@ await runCommand(table.name, async () => {
   if (process.stderr.isTTY) process.stderr.write('drawing pages ...');
   await swapFolder(out, async (folder) => {
     await buildPages(database, addressOf(result.refit.collection.group.url), folder);
-    writeExports(database, join(folder, 'data'));
-    writeRecords(database, content, folder);
-    writeSiteFiles(database, folder, writeTombstones(database, folder));
+    writePublication(database, content, folder);
   });
   if (process.stderr.isTTY) process.stderr.write('\r\u001b[K');
 

@@ -35,9 +35,7 @@ await runCommand(table.name, () => {
   const json = given.has('json');
   const story = given.text('explain');
   if (story !== null) return explain(content, story, json);
-  if (given.text('from-export') !== null) {
-    return rebuild(given.path('from-export', places.site), given.path('database', places.rebuilt), given.has('cold') ? null : cacheFile(places.content), json);
-  }
+  if (given.text('from-export') !== null) return rebuild(given.path('from-export', places.site), given.path('database', places.rebuilt), json);
 
   const progress = progressLine('fitting', process.stderr);
   const result = refit({ content, database, cache: given.has('cold') ? null : cacheFile(content), progress: progress.update });
@@ -53,9 +51,10 @@ await runCommand(table.name, () => {
   return exitCodes.good;
 });
 
-function rebuild(from: string, database: string, cache: string | null, json: boolean): number {
+/** Everything is fitted: a cache would prove nothing. */
+function rebuild(from: string, database: string, json: boolean): number {
   const progress = progressLine('fitting', process.stderr);
-  const result = rebuildFromExport({ from, database, cache, progress: progress.update });
+  const result = rebuildFromExport({ from, database, progress: progress.update });
   progress.end();
   const { cells, differences, largest } = result.comparison;
   if (json) process.stdout.write(`${JSON.stringify({ ok: differences.length === 0, ...refitFacts(result.refit), database, cells, sameBytes: result.sameBytes, largest, differences })}\n`);

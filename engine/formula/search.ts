@@ -95,29 +95,45 @@ function holds(keys: FormulaKeys, word: QueryWord): boolean {
   return keys.words.some((key) => key === word.text || key.startsWith(word.whole ? `${word.text}:` : word.text));
 }
 
-function base(query: NormalisedQuery, keys: FormulaKeys): number {
+/** By what a complex answers a query. */
+export type MatchKind = 'charge' | 'formula' | 'name' | 'donor atoms' | 'ion and ligands' | 'start of the formula' | 'start of a name' | 'words' | 'part of a formula or name';
+
+/** The best match by itself, without charge and isomer: its worth and its kind; null for none. */
+function base(query: NormalisedQuery, keys: FormulaKeys): readonly [worth: number, kind: MatchKind] | null {
   const text = query.squeezed;
-  if (text === '') return query.charge !== null && query.charge === keys.charge ? 20 : 0;
-  if (keys.formulas.includes(text)) return 100;
-  if (keys.names.includes(text)) return 90;
-  if (keys.donors.includes(text)) return 80;
+  if (text === '') return query.charge !== null && query.charge === keys.charge ? [20, 'charge'] : null;
+  if (keys.formulas.includes(text)) return [100, 'formula'];
+  if (keys.names.includes(text)) return [90, 'name'];
+  if (keys.donors.includes(text)) return [80, 'donor atoms'];
   const allWords = query.words.length > 0 && query.words.every((word) => holds(keys, word));
-  if (allWords && query.formula) return 70;
-  if (keys.formulas.some((formula) => formula.startsWith(text))) return query.formula || text.length > 2 ? 60 : 40;
-  if (keys.names.some((name) => name.startsWith(text))) return 50;
-  if (allWords) return 40;
+  if (allWords && query.formula) return [70, 'ion and ligands'];
+  if (keys.formulas.some((formula) => formula.startsWith(text))) return [query.formula || text.length > 2 ? 60 : 40, 'start of the formula'];
+  if (keys.names.some((name) => name.startsWith(text))) return [50, 'start of a name'];
+  if (allWords) return [40, 'words'];
   const piece = !query.formula && text.length > 2;
-  return piece && [...keys.formulas, ...keys.names].some((whole) => whole.includes(text)) ? 30 : 0;
+  return piece && [...keys.formulas, ...keys.names].some((whole) => whole.includes(text)) ? [30, 'part of a formula or name'] : null;
+}
+
+/** A complex that answers a query: how well (higher is better), and by what. */
+export interface FormulaMatch {
+  readonly score: number;
+  readonly kind: MatchKind;
 }
 
 /**
- * How well a complex answers a query: 0 not at all, else higher is better. A charge or an isomer that was typed decides between
+ * How and how well a complex answers a query; null where it does not. A charge or an isomer that was typed decides between
  * complexes that agree in all else and never hides one.
  */
-export function searchScore(query: NormalisedQuery, keys: FormulaKeys): number {
-  const score = base(query, keys);
-  if (score === 0) return 0;
+export function searchMatch(query: NormalisedQuery, keys: FormulaKeys): FormulaMatch | null {
+  const found = base(query, keys);
+  if (found === null) return null;
+  const [worth, kind] = found;
   const charge = query.charge === null ? 0 : query.charge === keys.charge ? 5 : -5;
   const isomer = query.isomer === null ? 0 : query.isomer === keys.isomer ? 4 : -4;
-  return score + charge + isomer;
+  return { score: worth + charge + isomer, kind };
+}
+
+/** The score of `searchMatch`; 0 where the complex does not answer. */
+export function searchScore(query: NormalisedQuery, keys: FormulaKeys): number {
+  return searchMatch(query, keys)?.score ?? 0;
 }

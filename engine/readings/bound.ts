@@ -1,176 +1,239 @@
-import { levelNames } from '../levels/labels.ts';
-import { fieldSign } from '../levels/levels.ts';
-import { solveBlock } from '../levels/solve.ts';
-import { highestRatio, lowestRatio } from './freeRatio.ts';
-import { angleScale, levelPlace } from './table.ts';
+import type { FreeIon } from '../ions/types.ts';
+import { cellsOf, isAbove, mostCells } from './cells.ts';
+import type { Cells, CellTransition } from './cells.ts';
+import { evidenceWeights, usualBeta } from './evidenceWeights.ts';
+import type { Estimate } from '../policy/types.ts';
 import type { GroundCase } from './transitions.ts';
 
 /**
- * A lower bound of chi2 for a partial assignment, over every Delta/B (and every C/B from 2 to 9 where C may be
- * free), cheap enough to cut a search by.
+ * A lower bound of the misfit and the parameters' cost of a partial assignment, over every Delta/B (and every C/B where C
+ * may be free), cheap enough to cut a search by.
  *
- * The curve is covered by cells. Within a cell a transition is E = rho (e + e_t dt + e_r dr) to second order, so
- * chi2 is a linear least-squares problem in (rho, rho dt, rho dr). Leaving the cell is not forbidden but charged
- * (dt/h)^2 and (dr/h)^2 over `slack`; inside the cell the charge is at most 2/slack, which is taken off again.
- * The least over all cells is therefore no higher than the true chi2, but for what is of second order in a cell.
+ * The curve is covered by cells (cells.ts). Within a cell a transition is E = rho (e + e_t dt + e_r dr) to second order,
+ * so chi2 is a linear least-squares problem in (rho, rho dt, rho dr). Leaving the cell is not forbidden but charged
+ * (dt/h)^2 and (dr/h)^2 over `slack`; inside the cell the charge is at most 2/slack, which is taken off again. The least
+ * over all cells is therefore no higher than the true chi2, but for what is of second order in a cell.
+ *
+ * A cell is dropped for good where it lies beyond the limit, or where two bands that have to keep the order of the
+ * calculated transitions cannot.
  */
-interface Cells {
-  readonly count: number;
-  readonly halfAngle: number;
-  /** 0 where C/B is fixed. */
-  readonly halfRatio: number;
-  /** Transition energies and derivatives by label; computed on first use. */
-  transition(label: string): { readonly e: Float64Array; readonly et: Float64Array; readonly er: Float64Array };
+export interface BoundNode {
+  /** Cells still possible, ascending. */
+  readonly cells: Int32Array;
+  /** Sums of the normal equations for each of them: of all bands, then, where spin-forbidden ones may stay out of the fit, of the spin-allowed bands. */
+  readonly sums: Float64Array;
+  /** Bound in each cell of the fits in which every band takes part, and the best scale there. */
+  readonly values: Float64Array;
+  readonly scales: Float64Array;
+  /** The same bound of the fits that leave spin-forbidden bands out. */
+  readonly valuesOfSome: Float64Array;
+  /** Bands that keep the order, with the positions and transitions they were given. */
+  readonly ordered: readonly Placed[];
+  /** How many bands. */
+  readonly assigned: number;
+  /** How many spin-allowed bands, and what two of them may be forgiven (see `Addition.forgiven`). */
+  readonly allowed: number;
+  readonly forgiven: number;
+  /** Least of misfit and parameters' cost, over fits in which some or all bands take part. */
+  readonly least: number;
+  /** The same over fits in which every band takes part. */
+  readonly leastOfAll: number;
+}
+
+interface Placed {
+  readonly label: string;
+  readonly position: number;
+}
+
+/** A band with the transition it is given. */
+export interface Addition extends Placed {
+  /** u^2 + floor^2, the larger u. */
+  readonly variance: number;
+  readonly spinAllowed: boolean;
+  /**
+   * 2 u^2 / variance: two spin-allowed bands that miss a solution by no more than 2 u against each other are fitted by one of
+   * them, so their misfit is forgiven.
+   */
+  readonly forgiven: number;
+  /** Whether it must keep the order of the calculated transitions. */
+  readonly keepsOrder: boolean;
+}
+
+export interface Bound {
+  readonly cells: Cells;
+  readonly root: BoundNode;
+  /** The node with one more band; cells whose bound lies above the limit are dropped. */
+  add(node: BoundNode, band: Addition, limit: number): BoundNode;
 }
 
 const slack = 4;
-const fixedRatioCells = 90;
-const freeRatioAngleCells = 45;
-const freeRatios = [2.875, 4.625, 6.375, 8.125];
+const sumsACell = 10;
 
-const held = new Map<string, Cells>();
+/** Fewest parameters: of a fit that leaves bands out, of one with all bands, of one with spin-forbidden bands alone. */
+const fewest = { ofSome: evidenceWeights.parameter, ofAll: 2 * evidenceWeights.parameter, ofForbidden: 3 * evidenceWeights.parameter } as const;
 
-/** Cells of an ion at one C/B, or over all C/B (null). */
-function cellsOf(ion: GroundCase, ratio: number | null): Cells {
-  const key = `${ion.electrons} ${ion.geometry} ${ion.multiplicity} ${ratio}`;
-  let cells = held.get(key);
-  if (!cells) {
-    cells = makeCells(ion, ratio);
-    if (held.size > 200) held.delete(held.keys().next().value!);
-    held.set(key, cells);
-  }
-  return cells;
-}
+/**
+ * @param ratio C/B that a policy assumes
+ * @param forbidden whether spin-forbidden bands may be among the assigned: C may be free then, or they may stay out of the fit
+ * @param anyAllowed whether any transition is spin-allowed: without one every fit takes all bands, with C free
+ */
+export function boundFor(ion: GroundCase, ratio: Estimate, forbidden: boolean, anyAllowed: boolean, freeIon: FreeIon | null): Bound {
+  const cells = cellsOf(ion, ratio.value, forbidden);
+  // Where spin-forbidden bands may stay out of the fit, the sums of the spin-allowed ones are kept beside those of all.
+  const stride = forbidden && anyAllowed ? 2 * sumsACell : sumsACell;
+  const ofAllParameters = anyAllowed ? fewest.ofAll : fewest.ofForbidden;
+  // With C/B assumed its uncertainty is forgiven to a band that is only compared with the fit.
+  const reachAssumed = Math.max(cells.halfRatio, ratio.u);
 
-function makeCells(ion: GroundCase, ratio: number | null): Cells {
-  const angles = ratio === null ? freeRatioAngleCells : fixedRatioCells;
-  const ratios = ratio === null ? freeRatios : [ratio];
-  const width = Math.PI / 2 / angles;
-  const centres = ratios.flatMap((r) => Array.from({ length: angles }, (_, i) => ({ t: (i + 0.5) * width, r })));
-  const known = new Map<string, { e: Float64Array; et: Float64Array; er: Float64Array }>();
-  const sign = fieldSign(ion.geometry);
-  const solved = new Map<object, ReturnType<typeof solveBlock>[]>();
-  const absolute = (label: string, i: number): { e: number; et: number; er: number } => {
-    const { block, index } = levelPlace(ion, label);
-    let solutions = solved.get(block);
-    if (!solutions) {
-      solutions = centres.map(({ t, r }) => solveBlock(block, sign, angleScale * Math.sin(t), Math.cos(t), r * Math.cos(t)));
-      solved.set(block, solutions);
-    }
-    const solution = solutions[i]!;
-    const { t, r } = centres[i]!;
-    const field = solution.field[index]!;
-    const racahC = solution.racahC[index]!;
-    return {
-      e: solution.energy[index]!,
-      et: field * angleScale * Math.cos(t) - (solution.racahB[index]! + r * racahC) * Math.sin(t),
-      er: racahC * Math.cos(t),
-    };
-  };
-  const ofSpin = levelNames(ion.electrons, ion.geometry).filter(
-    (label) => label.startsWith('a') && levelPlace(ion, label).block.multiplicity === ion.multiplicity,
-  );
-  const ground = centres.map((_, i) => ofSpin.map((label) => absolute(label, i)).reduce((lowest, level) => (level.e < lowest.e ? level : lowest)));
+  /** Bound of fits in which spin-forbidden bands stay out; the sums at `at` are those of the spin-allowed ones and perhaps one of the others. */
+  const ofSomeAt = (at: number, i: number, forgiven: number): number => fewest.ofSome + Math.max(0, leastInCell(at, cells, i, reachAssumed, null) - forgiven);
+
   return {
-    count: centres.length,
-    halfAngle: width / 2,
-    halfRatio: ratio === null ? (highestRatio - lowestRatio) / freeRatios.length / 2 : 0,
-    transition(label) {
-      let found = known.get(label);
-      if (!found) {
-        found = { e: new Float64Array(centres.length), et: new Float64Array(centres.length), er: new Float64Array(centres.length) };
-        for (let i = 0; i < centres.length; i++) {
-          const level = absolute(label, i);
-          found.e[i] = level.e - ground[i]!.e;
-          found.et[i] = level.et - ground[i]!.et;
-          found.er[i] = level.er - ground[i]!.er;
+    cells,
+    root: {
+      cells: Int32Array.from({ length: cells.count }, (_, i) => i), sums: new Float64Array(cells.count * stride),
+      values: new Float64Array(cells.count), scales: new Float64Array(cells.count),
+      // Fits that leave bands out are those at the assumed C/B.
+      valuesOfSome: Float64Array.from(cells.atRatio, (here) => (anyAllowed && here === 1 ? fewest.ofSome : Number.POSITIVE_INFINITY)),
+      ordered: [], assigned: 0, allowed: 0, forgiven: 0, least: anyAllowed ? fewest.ofSome : ofAllParameters, leastOfAll: ofAllParameters,
+    },
+    add(node, band, limit) {
+      const own = cells.transition(band.label);
+      const allowed = node.allowed + (band.spinAllowed ? 1 : 0);
+      const forgivenSum = node.forgiven + (band.spinAllowed ? band.forgiven : 0);
+      const forgiven = allowed <= 2 ? forgivenSum : 0;
+      const order = band.keepsOrder ? node.ordered.filter((one) => one.position !== band.position).map((one) => ({ isBelow: one.position < band.position, transition: cells.transition(one.label) })) : [];
+      let count = 0;
+      let least = Number.POSITIVE_INFINITY;
+      let leastOfAll = Number.POSITIVE_INFINITY;
+      for (let n = 0; n < node.cells.length; n++) {
+        const i = node.cells[n]!;
+        if (breaksOrder(cells, i, own, order)) continue;
+        const at = count * stride;
+        const atAllowed = at + stride - sumsACell;
+        copySums(node.sums, n * stride, at, stride);
+        addBand(at, own, i, band);
+        const ofAll = forbidden ? ofAllParameters + leastInCell(at, cells, i, cells.halfRatio, freeIon) : Number.POSITIVE_INFINITY;
+        let ofSome = node.valuesOfSome[n]!;
+        if (ofSome < Number.POSITIVE_INFINITY && band.spinAllowed) {
+          if (forbidden) addBand(atAllowed, own, i, band);
+          ofSome = Math.max(ofSome, ofSomeAt(atAllowed, i, forgiven));
+        } else if (ofSome < Number.POSITIVE_INFINITY && allowed > 0) {
+          // One band compared costs at least what it would if it took part alone; several cost at least the most of them.
+          keptSums.copyWithin(trial, atAllowed, atAllowed + sumsACell);
+          addBand(trial, own, i, band);
+          ofSome = Math.max(ofSome, ofSomeAt(trial, i, forgiven));
         }
-        known.set(label, found);
+        const value = Math.min(ofAll, ofSome);
+        if (value > limit) continue;
+        keptCells[count] = i;
+        keptValues[count] = forbidden ? ofAll : ofSome;
+        keptValuesOfSome[count] = ofSome;
+        keptScales[count++] = keptSums[at]! > 0 ? keptSums[at + 6]! / keptSums[at]! : 0;
+        if (value < least) least = value;
+        if (ofAll < leastOfAll) leastOfAll = ofAll;
       }
-      return found;
+      return {
+        cells: keptCells.slice(0, count), sums: keptSums.slice(0, count * stride), values: keptValues.slice(0, count),
+        valuesOfSome: keptValuesOfSome.slice(0, count), scales: keptScales.slice(0, count),
+        least, leastOfAll: forbidden ? leastOfAll : least, assigned: node.assigned + 1, allowed, forgiven: forgivenSum,
+        ordered: band.keepsOrder ? [...node.ordered, { label: band.label, position: band.position }] : node.ordered,
+      };
     },
   };
 }
 
-/** Sums of the normal equations at every cell, for the bands assigned so far. */
-const sumsACell = 10;
+/** Work space for the cells that a step keeps; no ion has more. */
+const keptCells = new Int32Array(mostCells);
+const keptValues = new Float64Array(mostCells);
+const keptValuesOfSome = new Float64Array(mostCells);
+const keptScales = new Float64Array(mostCells);
+const keptSums = new Float64Array(2 * sumsACell * mostCells + sumsACell);
+/** Where sums are tried that are not kept. */
+const trial = 2 * sumsACell * mostCells;
 
-export interface Bound {
-  /** Sums with one more band; the given sums are not changed. null: no band yet. */
-  add(sums: Float64Array | null, label: string, position: number, variance: number): Float64Array;
-  /** Lower bound of chi2 for the bands in the sums. */
-  least(sums: Float64Array | null): number;
+function copySums(from: Float64Array, start: number, to: number, stride: number): void {
+  for (let k = 0; k < stride; k++) keptSums[to + k] = from[start + k]!;
+}
+
+/** Whether the transition lies on the wrong side of an earlier one everywhere in the cell. */
+function breaksOrder(cells: Cells, i: number, own: CellTransition, order: readonly { readonly isBelow: boolean; readonly transition: CellTransition }[]): boolean {
+  for (let k = 0; k < order.length; k++) {
+    const { isBelow, transition } = order[k]!;
+    if (isBelow ? isAbove(cells, i, transition, own) : isAbove(cells, i, own, transition)) return true;
+  }
+  return false;
+}
+
+function addBand(at: number, transition: CellTransition, i: number, { position, variance }: Addition): void {
+  const weight = 1 / variance;
+  const e = transition.e[i]!;
+  const et = transition.et[i]!;
+  const er = transition.er[i]!;
+  const we = weight * e;
+  const wt = weight * et;
+  const wr = weight * er;
+  keptSums[at]! += we * e;
+  keptSums[at + 1]! += we * et;
+  keptSums[at + 2]! += we * er;
+  keptSums[at + 3]! += wt * et;
+  keptSums[at + 4]! += wt * er;
+  keptSums[at + 5]! += wr * er;
+  keptSums[at + 6]! += we * position;
+  keptSums[at + 7]! += wt * position;
+  keptSums[at + 8]! += wr * position;
+  keptSums[at + 9]! += weight * position * position;
 }
 
 /**
- * The bound for an ion.
+ * Least of the charged linear problem in one cell, by elimination of dr, dt and rho in turn from the normal equations.
  *
- * @param ratio C/B; null where C may be free
+ * @param reach change of C/B that is charged 1 over `slack`
+ * @param freeIon where given, a beta outside the usual range costs what it costs in the score
  */
-export function boundFor(ion: GroundCase, ratio: number | null): Bound {
-  const cells = cellsOf(ion, ratio);
-  return {
-    add(sums, label, position, variance) {
-      const next = sums ? sums.slice() : new Float64Array(cells.count * sumsACell);
-      const { e, et, er } = cells.transition(label);
-      const weight = 1 / variance;
-      for (let i = 0, at = 0; i < cells.count; i++, at += sumsACell) {
-        const a = e[i]!;
-        const b = et[i]!;
-        const c = er[i]!;
-        const wa = weight * a;
-        const wb = weight * b;
-        const wc = weight * c;
-        next[at]! += wa * a;
-        next[at + 1]! += wa * b;
-        next[at + 2]! += wa * c;
-        next[at + 3]! += wb * b;
-        next[at + 4]! += wb * c;
-        next[at + 5]! += wc * c;
-        next[at + 6]! += wa * position;
-        next[at + 7]! += wb * position;
-        next[at + 8]! += wc * position;
-        next[at + 9]! += weight * position * position;
-      }
-      return next;
-    },
-    least(sums) {
-      if (!sums) return 0;
-      let best = Number.POSITIVE_INFINITY;
-      for (let i = 0, at = 0; i < cells.count; i++, at += sumsACell) {
-        const value = leastInCell(sums, at, cells.halfAngle, cells.halfRatio);
-        if (value < best) best = value;
-      }
-      return Math.max(0, best - (cells.halfRatio > 0 ? 2 : 1) / slack);
-    },
-  };
-}
-
-/** Least of the charged linear problem in one cell, by elimination of the 3 x 3 (or 2 x 2) normal equations. */
-function leastInCell(sums: Float64Array, at: number, halfAngle: number, halfRatio: number): number {
-  const aa = sums[at]!;
-  const av = sums[at + 6]!;
-  const vv = sums[at + 9]!;
+function leastInCell(at: number, cells: Cells, i: number, reach: number, freeIon: FreeIon | null): number {
+  const aa = keptSums[at]!;
+  const av = keptSums[at + 6]!;
+  const vv = keptSums[at + 9]!;
   // A positive scale is needed; its size sets the charge for leaving the cell.
   if (!(aa > 0) || !(av > 0)) return vv;
-  const rho = av / aa;
-  const ab = sums[at + 1]!;
-  const bb = sums[at + 3]! + 1 / (slack * (rho * halfAngle) ** 2);
-  const bv = sums[at + 7]!;
-  const first = av / aa;
-  let least = vv - av * first;
-  const bbLeft = bb - (ab * ab) / aa;
-  const bvLeft = bv - ab * first;
-  least -= (bvLeft * bvLeft) / bbLeft;
+  const { halfAngle, halfRatio } = cells;
+  const perScale = aa / av;
+  const chargeOfOne = (perScale * perScale) / slack;
+  let ab = keptSums[at + 1]!;
+  let bb = keptSums[at + 3]! + chargeOfOne / (halfAngle * halfAngle);
+  let bv = keptSums[at + 7]!;
+  let aaLeft = aa;
+  let avLeft = av;
+  let least = vv;
+  let charge = 1 / slack;
   if (halfRatio > 0) {
-    const ac = sums[at + 2]!;
-    const bc = sums[at + 4]!;
-    const cc = sums[at + 5]! + 1 / (slack * (rho * halfRatio) ** 2);
-    const cv = sums[at + 8]!;
-    const bcLeft = bc - (ab * ac) / aa;
-    const ccLeft = cc - (ac * ac) / aa - (bcLeft * bcLeft) / bbLeft;
-    const cvLeft = cv - ac * first - (bcLeft * bvLeft) / bbLeft;
-    least -= (cvLeft * cvLeft) / ccLeft;
+    const bc = keptSums[at + 4]!;
+    const cv = keptSums[at + 8]!;
+    const inverse = 1 / (keptSums[at + 5]! + chargeOfOne / (reach * reach));
+    const ac = keptSums[at + 2]! * inverse;
+    least -= cv * cv * inverse;
+    ab -= ac * bc;
+    bb -= bc * bc * inverse;
+    bv -= bc * cv * inverse;
+    aaLeft -= ac * keptSums[at + 2]!;
+    avLeft -= ac * cv;
+    charge += 1 / slack;
   }
-  return least;
+  const inverse = 1 / bb;
+  least -= bv * bv * inverse;
+  aaLeft -= ab * ab * inverse;
+  avLeft -= ab * bv * inverse;
+  const variance = 1 / aaLeft;
+  least -= avLeft * avLeft * variance;
+  const ofBeta = freeIon ? leastOfBeta(avLeft * variance, variance, cells.racahB[i]!, cells.spreadB[i]!, freeIon.racahB0) : 0;
+  return Math.max(0, least - charge) + ofBeta;
+}
+
+/** Least of (rho - best)^2 / variance and the penalty on beta, with B = rho b, where b varies by a fraction in the cell. */
+function leastOfBeta(best: number, variance: number, b: number, spread: number, racahB0: number): number {
+  const beta = (best * b) / racahB0;
+  const beyond = Math.max(usualBeta.low - beta * (1 + spread), beta * (1 - spread) - usualBeta.high);
+  if (!(beyond > 0)) return 0;
+  return (beyond * beyond) / (usualBeta.step ** 2 + variance * ((b * (1 + spread)) / racahB0) ** 2);
 }

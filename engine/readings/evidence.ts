@@ -1,8 +1,8 @@
-import { symmetricU } from '../measurement/observation.ts';
 import type { FreeIon } from '../ions/types.ts';
 import type { Band, Measurement } from '../measurement/types.ts';
 import type { Range } from '../quantity/range.ts';
 import { betaPenalty } from './betaPenalty.ts';
+import { misfitOfOne } from './comparedLines.ts';
 import { quadratic } from './covariance.ts';
 import { transitionsAt } from './evaluate.ts';
 import { absorptivityLimits, evidenceWeights, usualAbsorptivities, widthLimits } from './evidenceWeights.ts';
@@ -54,8 +54,7 @@ function misfitOfCompared(assigned: readonly Assigned[], fit: Fit): number {
   return assigned.reduce((sum, { observation }, k) => {
     if (fit.used[k]) return sum;
     const { energy, gradient } = fit.calculated[k]!;
-    const spread = quadratic([gradient.delta, gradient.racahB, gradient.racahC], fit.total);
-    return sum + (observation.position - energy) ** 2 / (symmetricU(observation) ** 2 + fit.floors[k]! ** 2 + spread);
+    return sum + misfitOfOne(observation, fit.floors[k]!, { energy, variance: quadratic([gradient.delta, gradient.racahB, gradient.racahC], fit.total) });
   }, 0);
 }
 
@@ -64,6 +63,13 @@ const parametersOf = { field: 1, 'field, B assumed': 2, 'field, B': 2, 'field, B
 
 const within = (ranges: readonly Range[], position: number): boolean => ranges.some((range) => position >= range.low && position <= range.high);
 
+/** Transitions that are seen as bands where they lie inside what was scanned: the spin-allowed ones; of high-spin d5, which has none, those with one spin turned. */
+export function expectedTransitions(ion: GroundCase): readonly Transition[] {
+  const all = transitionsOf(ion);
+  const allowed = all.filter((t) => t.spinAllowed);
+  return allowed.length > 0 ? allowed : all.filter((t) => t.multiplicity === ion.multiplicity - 2);
+}
+
 /** Transitions that the fit predicts where a band should have been seen. */
 function unseenEvidence(measurement: Measurement, ion: GroundCase, assigned: readonly Assigned[], fit: Fit): Evidence[] {
   const { at, ground } = fit.solutions[0]!;
@@ -71,8 +77,8 @@ function unseenEvidence(measurement: Measurement, ion: GroundCase, assigned: rea
   const lowest = Math.min(...positions);
   const highest = Math.max(...positions);
   const all = transitionsOf(ion);
-  const noneAllowed = all.every((t) => !t.spinAllowed);
-  const expected = (t: Transition): boolean => t.spinAllowed || (noneAllowed && t.multiplicity === ion.multiplicity - 2);
+  const awaited = expectedTransitions(ion);
+  const expected = (t: Transition): boolean => awaited.includes(t);
   const open = all.filter((t) => (expected(t) || t.sameConfiguration) && !assigned.some((one) => one.label === t.label));
   const lines = assigned.filter((one) => !transitionOf(ion, one.label).spinAllowed).map((one) => one.observation.position);
   const looked = [...measurement.scanned, ...measurement.absent];

@@ -1,12 +1,9 @@
 import { evaluatorOf } from './evaluate.ts';
-import { angleScale, gridStep, levelTable } from './table.ts';
+import { angleScale, levelTable } from './table.ts';
 import type { GroundCase } from './transitions.ts';
 
 /** Delta/B up to which a field is looked for; it holds every complex known. */
 const strongestField = 80;
-
-/** Grid points that reach to the strongest field. */
-const lastPoint = Math.ceil(Math.atan(strongestField / angleScale) / gridStep);
 
 /**
  * Every Delta at which a transition lies at a given position, with B and C/B given, ascending.
@@ -16,11 +13,13 @@ const lastPoint = Math.ceil(Math.atan(strongestField / angleScale) / gridStep);
  * @param position cm-1
  */
 export function fieldsForPosition(ion: GroundCase, ground: string, label: string, position: number, racahB: number, ratio: number): number[] {
-  const { energy } = levelTable(ion, ratio).transition(ground, label);
+  const table = levelTable(ion, ratio);
+  const { energy } = table.transition(ground, label);
+  const lastPoint = Math.ceil(Math.atan(strongestField / angleScale) / table.step);
   const { evaluate, energy: exact, delta: slope } = evaluatorOf(ion, ground, [label]);
   const roots: number[] = [];
   for (let i = 0, before = racahB * energy[0]! - position; i < lastPoint; i++) {
-    const after = (racahB * energy[i + 1]!) / Math.cos((i + 1) * gridStep) - position;
+    const after = (racahB * energy[i + 1]!) / Math.cos((i + 1) * table.step) - position;
     if (before < 0 !== after < 0) roots.push(refined(i, before, after));
     before = after;
   }
@@ -28,8 +27,8 @@ export function fieldsForPosition(ion: GroundCase, ground: string, label: string
 
   /** The root between two grid points at which the transition misses the position by `before` and `after`. */
   function refined(i: number, before: number, after: number): number {
-    let low = angleScale * racahB * Math.tan(i * gridStep);
-    let high = angleScale * racahB * Math.tan((i + 1) * gridStep);
+    let low = angleScale * racahB * Math.tan(i * table.step);
+    let high = angleScale * racahB * Math.tan((i + 1) * table.step);
     let delta = low + ((high - low) * before) / (before - after);
     for (let step = 0; step < 60; step++) {
       evaluate(delta, racahB, ratio * racahB);

@@ -164,8 +164,9 @@ function ranked(solutions: readonly Solution[], freeIon: FreeIon | null): Soluti
  * that stays above the policy's ceiling.
  */
 function fitAllThree(task: Task, members: readonly number[]): Fit | 'no solution' | null {
-  if (members.length < 3) return null;
   const labels = labelsOf(task, members);
+  // Two bands may name the d5 pair; they are one transition.
+  if (new Set(labels).size < 3) return null;
   const solutions = ranked(minimaWithFreeRatio(task.ion, labels, targetsOf(task, members)), task.freeIon);
   const best = solutions[0];
   if (!best) return 'no solution';

@@ -6,7 +6,7 @@ import { evaluatorOf } from './evaluate.ts';
 import type { Evaluator } from './evaluate.ts';
 import { roughMinimaOnCurve } from './scan.ts';
 import type { RoughMinimum } from './scan.ts';
-import { levelTable, pointOnCurve } from './table.ts';
+import { coarsePoints, levelTable, pointOnCurve } from './table.ts';
 import type { GroundCase } from './transitions.ts';
 
 /** A local minimum of chi2 in Delta, B and C. */
@@ -37,7 +37,7 @@ interface Start extends FieldParameters {
 /**
  * All local minima of chi2 in Delta, B and C with C/B strictly inside 2 to 9, ascending in chi2.
  *
- * The curve is scanned at fifteen values of C/B. Its minima form valleys; wherever the floor of a valley turns from
+ * The curve is scanned at fifteen values of C/B, a degree a step. Its minima form valleys; wherever the floor of a valley turns from
  * falling to rising between two of them, or ends while it falls, a descent starts that uses exact levels with their
  * first and second derivatives.
  */
@@ -63,7 +63,7 @@ function isSame(a: FreeMinimum, b: FreeMinimum): boolean {
 function startsOf(ion: GroundCase, labels: readonly string[], targets: readonly Target[]): Start[] {
   const columns = columnsOf(targets);
   const rows: RoughMinimum[][] = [];
-  for (let ratio = lowestRatio; ratio <= highestRatio; ratio += ratioStep) rows.push(roughMinimaOnCurve(levelTable(ion, ratio), ion, labels, columns));
+  for (let ratio = lowestRatio; ratio <= highestRatio; ratio += ratioStep) rows.push(roughMinimaOnCurve(levelTable(ion, ratio, coarsePoints), ion, labels, columns));
   return rows.flatMap((row, i) => row.flatMap((minimum) => startsFrom(minimum, lowestRatio + i * ratioStep, rows[i - 1], rows[i + 1])));
 }
 

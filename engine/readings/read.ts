@@ -36,6 +36,8 @@ interface Context {
   readonly policy: Policy;
   readonly freeIon: FreeIon | null;
   readonly rivals: Rivalry;
+  /** A rival is not stressed, its limits stay parabolic, and nothing is looked for that would help it. */
+  readonly isRival: boolean;
 }
 
 /** How the rivals stand to the chosen reading. */
@@ -61,13 +63,13 @@ export function readWithRivals(measurement: Measurement, policy: Policy, freeIon
   if (typeof ion === 'string') return { chosen: unread(measurement, policy, ion), rivals: [] };
   const { chosen, rivals } = contest(measurement, ion, policy, freeIon);
   if (!chosen) return { chosen: unread(measurement, policy, 'no band can be assigned'), rivals: [] };
-  const context: Context = { measurement, policy, freeIon, rivals: rivalry(chosen, rivals, policy) };
+  const context: Context = { measurement, policy, freeIon, rivals: rivalry(chosen, rivals, policy), isRival: false };
   const first = write(context, chosen);
   const fitStands = first.score !== null;
   return {
     chosen: first,
     rivals: rivals.map((rival) => ({
-      ...write({ ...context, rivals: noRivalry }, rival),
+      ...write({ ...context, rivals: noRivalry, isRival: true }, rival),
       ranking: rankingSentence(inWords(rival.evidence, rival.ion), inWords(chosen.evidence, chosen.ion), fitStands ? rival.score - chosen.score : null, policy.rivalMargin),
     })),
   };
@@ -175,17 +177,18 @@ function branchesOf(fit: Fit, firstIsChosen: boolean): readonly Branch[] {
 }
 
 function fitted(context: Context, reading: ScoredReading, fit: Fit, ground: GroundCheck): Reading {
-  const { measurement, policy, freeIon, rivals } = context;
+  const { measurement, policy, freeIon, rivals, isRival } = context;
   const { ion, assigned } = reading;
   const best = fit.solutions[0]!;
-  const parameters = withLimits(ion, assigned, fit, publishParameters(measurement, fit, policy, freeIon));
+  const published = publishParameters(measurement, fit, policy, freeIon);
+  const parameters = isRival ? published : withLimits(ion, assigned, fit, published);
   const bands = readingBands(reading, fit, policy);
   const used = bands.filter((band) => band.used);
   const probability = fit.spare > 0 ? upperTail(best.chi2, fit.spare) : null;
   const resting = restingOn(parameters, fit);
   const verdict = verdictOf(parameters, fit, probability, resting !== null);
   const predicted = predictedBands(measurement, ion, assigned, fit, policy);
-  const helpful = helpfulBands(ion, assigned, fit, parameters, predicted, policy);
+  const helpful = isRival ? [] : helpfulBands(ion, assigned, fit, parameters, predicted, policy);
   const second = fit.solutions[1];
   const secondSolution = second !== undefined && second.chi2 - best.chi2 < equalWithin;
   const reason =
@@ -197,18 +200,18 @@ function fitted(context: Context, reading: ScoredReading, fit: Fit, ground: Grou
   const groundState = groundStateOf(ion, fit);
   const order = doubletOrder(ion, fit, freeIon);
   const ratioText = resting ? resting.assumed.replace('the assumed ', '') : null;
-  const published = parameters[1]!.value !== null && parameters[0]!.value !== null ? deltaOverB(best.at) : null;
+  const ratioShown = parameters[1]!.value !== null && parameters[0]!.value !== null ? deltaOverB(best.at) : null;
   return {
     verdict, reason, assignment: reading.origin, geometry: ion.geometry, multiplicity: ion.multiplicity, ground: best.ground, bands,
-    notFitted: reading.notFitted, branches: branchesOf(fit, true), parameters, correlations: publishedCorrelations(parameters, fit), deltaOverB: published,
+    notFitted: reading.notFitted, branches: branchesOf(fit, true), parameters, correlations: publishedCorrelations(parameters, fit), deltaOverB: ratioShown,
     chi2: best.chi2, bandsUsed: used.length, spareBands: fit.spare,
     rmsResidual: Math.sqrt(used.reduce((sum, band) => sum + band.residual! ** 2, 0) / used.length), ratio: fit.ratio, predicted,
     cautions: spectralCautions(spectralFacts({ measurement, policy, ion, chosen: reading, fit, parameters, ground, predicted, rivals })),
     measureNext: helpful[0]?.sentence ?? null, helpfulBands: helpful, score: Number.isFinite(reading.score) ? reading.score : null,
     evidence: reading.evidence, ranking: null, identifiability: identify(assigned, fit, parameters),
-    stress: stressOf(ion, assigned, fit, policy, freeIon), groundState, doubletOrder: order,
+    stress: isRival ? null : stressOf(ion, assigned, fit, policy, freeIon), groundState, doubletOrder: order,
     remarks: [
-      groundSentence({ ...groundState, deltaOverB: published, ground: shownLabel(best.ground, ion.electrons) }),
+      groundSentence({ ...groundState, deltaOverB: ratioShown, ground: shownLabel(best.ground, ion.electrons) }),
       ...(order ? [doubletSentence(order)] : []),
     ],
     sentence: thesisSentence({

@@ -3,7 +3,7 @@ import { evaluatorOf } from './evaluate.ts';
 import type { Evaluator } from './evaluate.ts';
 import { bestScale, columnsOf, misfitSlope, pointOfCurve } from './misfit.ts';
 import type { Columns, CurvePoint, Target } from './misfit.ts';
-import { gridPoints, gridStep, levelPlace, pointOnCurve, slopeAt } from './table.ts';
+import { levelPlace, pointOnCurve, slopeAt } from './table.ts';
 import type { GridLevel, LevelTable } from './table.ts';
 import type { GroundCase } from './transitions.ts';
 
@@ -27,8 +27,8 @@ const segmentsHeld = new WeakMap<LevelTable, Map<number, readonly Segment[]>>();
 
 /**
  * Where along the curve which level is lowest of the declared multiplicity. For most ions one level is
- * lowest everywhere; the doublets of d3 and d7 and the singlets of d4 change. The outermost quarter of a degree at each end
- * is left out: Delta/B below 0.09 and above 4500 is no ligand field, and at the ends themselves rounding decides.
+ * lowest everywhere; the doublets of d3 and d7 and the singlets of d4 change. The outermost cell at each end is
+ * left out: Delta/B below 0.09 and above 4500 is no ligand field, and at the ends themselves rounding decides.
  */
 function groundSegments(table: LevelTable, multiplicity: number): readonly Segment[] {
   let byMultiplicity = segmentsHeld.get(table);
@@ -53,7 +53,7 @@ function groundSegments(table: LevelTable, multiplicity: number): readonly Segme
   const found: Segment[] = [];
   let first = 1;
   let current = at(1);
-  for (let i = 2; i < gridPoints - 1; i++) {
+  for (let i = 2; i < table.points - 1; i++) {
     const next = at(i);
     if (next === current) continue;
     // Both neighbours cover the cell in which the crossing lies, so no minimum falls between them.
@@ -61,28 +61,27 @@ function groundSegments(table: LevelTable, multiplicity: number): readonly Segme
     first = i - 1;
     current = next;
   }
-  found.push({ ground: lowest[current]!, first, last: gridPoints - 2 });
+  found.push({ ground: lowest[current]!, first, last: table.points - 2 });
   byMultiplicity.set(multiplicity, found);
   return found;
 }
 
-/** Grid points passed over where only rough minima are wanted: half a degree. */
-const coarseStride = 2;
-
 /** Cubic Hermite interpolation in one grid cell: value and derivative by t at fraction s. */
-function interpolate(energy: Float64Array, slope: Float64Array, i: number, s: number, out: [number, number]): void {
+function interpolate(energy: Float64Array, slope: Float64Array, i: number, s: number, step: number, out: [number, number]): void {
   const y0 = energy[i]!;
   const y1 = energy[i + 1]!;
-  const m0 = slope[i]! * gridStep;
-  const m1 = slope[i + 1]! * gridStep;
+  const m0 = slope[i]! * step;
+  const m1 = slope[i + 1]! * step;
   const c = 3 * (y1 - y0) - 2 * m0 - m1;
   const d = m0 + m1 - 2 * (y1 - y0);
   out[0] = y0 + s * (m0 + s * (c + s * d));
-  out[1] = (m0 + s * (2 * c + s * 3 * d)) / gridStep;
+  out[1] = (m0 + s * (2 * c + s * 3 * d)) / step;
 }
 
 /** Targets against the transitions of one segment, with the work space of a scan. */
 interface Curve {
+  /** Distance of grid points. */
+  readonly step: number;
   readonly transitions: readonly GridLevel[];
   readonly columns: Columns;
   /** Transition energies and slopes at the last point asked for, and what came of them. */
@@ -93,7 +92,7 @@ interface Curve {
 
 function curveOf(table: LevelTable, ground: string, labels: readonly string[], columns: Columns): Curve {
   return {
-    transitions: labels.map((label) => table.transition(ground, label)), columns,
+    step: table.step, transitions: labels.map((label) => table.transition(ground, label)), columns,
     energies: new Float64Array(labels.length), slopes: new Float64Array(labels.length), point: { rho: 0, slope: 0 },
   };
 }
@@ -101,20 +100,20 @@ function curveOf(table: LevelTable, ground: string, labels: readonly string[], c
 /** d chi2/dt at a grid point; NaN where no positive scale is best. */
 function slopeOnGrid({ transitions, columns, energies, slopes, point }: Curve, i: number): number {
   for (let k = 0; k < transitions.length; k++) {
-    const { energy, slope } = transitions[k]!;
-    energies[k] = energy[i]!;
-    slopes[k] = slope[i]!;
+    const transition = transitions[k]!;
+    energies[k] = transition.energy[i]!;
+    slopes[k] = transition.slope[i]!;
   }
   pointOfCurve(columns, energies, slopes, point);
   return point.rho > 0 ? point.slope : Number.NaN;
 }
 
 /** d chi2/dt at fraction s of the cell above grid point i. */
-function slopeInCell({ transitions, columns, energies, slopes, point }: Curve, i: number, s: number): number {
+function slopeInCell({ step, transitions, columns, energies, slopes, point }: Curve, i: number, s: number): number {
   const out: [number, number] = [0, 0];
   for (let k = 0; k < transitions.length; k++) {
     const { energy, slope } = transitions[k]!;
-    interpolate(energy, slope, i, s, out);
+    interpolate(energy, slope, i, s, step, out);
     energies[k] = out[0];
     slopes[k] = out[1];
   }
@@ -122,26 +121,53 @@ function slopeInCell({ transitions, columns, energies, slopes, point }: Curve, i
   return point.slope;
 }
 
+/** A stretch of one grid cell over which d chi2/dt turns from falling to rising: fractions of the cell, and the slopes there. */
+interface Turn {
+  readonly cell: number;
+  readonly low: number;
+  readonly high: number;
+  readonly atLow: number;
+  readonly atHigh: number;
+}
+
+/** Points inside a suspect cell at which the interpolated slope is looked at. */
+const insideSamples = 16;
+
 /**
- * Cells of the grid in which d chi2/dt turns from falling to rising, as [grid index, slope at its lower end, at its upper].
- * With a stride the turns are looked for that far apart.
+ * Where d chi2/dt turns from falling to rising. A cell whose ends differ in sign holds a turn; one whose ends do not may
+ * hold two that lie close together, and then the slope comes near zero in it: there, as in every cell that holds
+ * a turn, the interpolant is sampled.
  */
-function turningCells(curve: Curve, { first, last }: Segment, stride: number): [number, number, number][] {
-  const found: [number, number, number][] = [];
-  let before = slopeOnGrid(curve, first);
-  for (let i = first; i < last; i += stride) {
-    const next = Math.min(i + stride, last);
-    const after = slopeOnGrid(curve, next);
-    if (before <= 0 && after > 0 && !(before === 0 && i === first)) found.push(next === i + 1 ? [i, before, after] : halfOf(curve, i, before, after));
+function turningCells(curve: Curve, { first, last }: Segment): Turn[] {
+  // In the outermost cells levels coincide at the end point, and the slope there is rounding or that of another order.
+  const start = Math.max(1, first);
+  const end = Math.min(curve.transitions[0]!.energy.length - 2, last);
+  const found: Turn[] = [];
+  let earlier = Number.POSITIVE_INFINITY;
+  let before = slopeOnGrid(curve, start);
+  let after = start < end ? slopeOnGrid(curve, start + 1) : Number.NaN;
+  for (let i = start; i < end; i++) {
+    const later = i + 2 <= end ? slopeOnGrid(curve, i + 2) : Number.POSITIVE_INFINITY;
+    const turns = before <= 0 && after > 0 && !(before === 0 && i === start);
+    const nearsZero = Math.abs(before) <= Math.abs(earlier) && Math.abs(after) <= Math.abs(later) && before * after > 0;
+    if (turns || nearsZero) addTurns(curve, i, before, after, found);
+    earlier = before;
     before = after;
+    after = later;
   }
   return found;
 }
 
-/** The one of two neighbouring cells in which the slope turns. */
-function halfOf(curve: Curve, i: number, before: number, after: number): [number, number, number] {
-  const middle = slopeOnGrid(curve, i + 1);
-  return middle > 0 ? [i, before, middle] : [i + 1, middle, after];
+function addTurns(curve: Curve, cell: number, before: number, after: number, found: Turn[]): void {
+  let low = 0;
+  let atLow = before;
+  for (let n = 1; n <= insideSamples; n++) {
+    const high = n / insideSamples;
+    const atHigh = n === insideSamples ? after : slopeInCell(curve, cell, high);
+    if (atLow <= 0 && atHigh > 0) found.push({ cell, low, high, atLow, atHigh });
+    low = high;
+    atLow = atHigh;
+  }
 }
 
 /**
@@ -157,19 +183,20 @@ export function minimaOnCurve(table: LevelTable, ion: GroundCase, labels: readon
   const found: Minimum[] = [];
   for (const segment of groundSegments(table, ion.multiplicity)) {
     const curve = curveOf(table, segment.ground, labels, columns);
-    const cells = turningCells(curve, segment, 1);
+    const cells = turningCells(curve, segment);
     if (cells.length === 0) continue;
     const evaluator = evaluatorOf(table.ion, segment.ground, labels);
-    for (const [i, before, after] of cells) {
-      const s = rootOfRising((fraction) => slopeInCell(curve, i, fraction), before, after);
-      const exact = correct(table, evaluator, segment.ground, targets, columns.weights !== null, (i + s) * gridStep, curvatureInCell(curve, i, s));
+    for (const turn of cells) {
+      const i = turn.cell;
+      const s = rootOfRising((fraction) => slopeInCell(curve, i, fraction), turn);
+      const exact = correct(table, evaluator, segment.ground, targets, columns.weights !== null, (i + s) * table.step, curvatureInCell(curve, i, s));
       if (exact && isLowest(table, ion, segment.ground, exact.t)) found.push(exact);
     }
   }
   return found.sort((a, b) => a.chi2 - b.chi2);
 }
 
-/** A local minimum along the curve as the interpolated table has it, good to about 1e-6 in t. */
+/** A local minimum along the curve as the interpolated table has it, good to about 1e-5 in t. */
 export interface RoughMinimum extends Minimum {
   /** d chi2 / d(C/B) with t and rho left to follow. */
   readonly byRatio: number;
@@ -182,16 +209,16 @@ export function roughMinimaOnCurve(table: LevelTable, ion: GroundCase, labels: r
   const found: RoughMinimum[] = [];
   for (const segment of groundSegments(table, ion.multiplicity)) {
     const curve = curveOf(table, segment.ground, labels, columns);
-    for (const [i, before, after] of turningCells(curve, segment, coarseStride)) {
-      const s = rootOfRising((fraction) => slopeInCell(curve, i, fraction), before, after);
-      found.push(roughMinimum(curve, segment.ground, i, s));
+    for (const turn of turningCells(curve, segment)) {
+      const s = rootOfRising((fraction) => slopeInCell(curve, turn.cell, fraction), turn);
+      found.push(roughMinimum(curve, segment.ground, turn.cell, s));
     }
   }
   return found;
 }
 
 function roughMinimum(curve: Curve, ground: string, i: number, s: number): RoughMinimum {
-  const { transitions, columns, energies, slopes, point } = curve;
+  const { step, transitions, columns, energies, slopes, point } = curve;
   const curvature = curvatureInCell(curve, i, s);
   const atMinimum = slopeInCell(curve, i, s);
   const { rho } = point;
@@ -202,11 +229,11 @@ function roughMinimum(curve: Curve, ground: string, i: number, s: number): Rough
   for (let k = 0; k < transitions.length; k++) {
     const { byRatio: rate } = transitions[k]!;
     energies[k]! += smallRatio * rates[k]!;
-    slopes[k]! += (smallRatio * (rate[i + 1]! - rate[i]!)) / gridStep;
+    slopes[k]! += (smallRatio * (rate[i + 1]! - rate[i]!)) / step;
   }
   pointOfCurve(columns, energies, slopes, point);
   const drift = curvature > 0 ? (atMinimum - point.slope) / (smallRatio * curvature) : 0;
-  return { t: (i + s) * gridStep, rho, chi2, ground, byRatio, drift };
+  return { t: (i + s) * step, rho, chi2, ground, byRatio, drift };
 }
 
 /** Change of C/B over which the drift of a minimum is taken. */
@@ -214,7 +241,7 @@ const smallRatio = 1e-3;
 
 /** d2 chi2/dt2 of the interpolant. */
 const curvatureInCell = (curve: Curve, i: number, s: number): number =>
-  (slopeInCell(curve, i, s + nearby) - slopeInCell(curve, i, s - nearby)) / (2 * nearby * gridStep);
+  (slopeInCell(curve, i, s + nearby) - slopeInCell(curve, i, s - nearby)) / (2 * nearby * curve.step);
 
 /** Fraction of a cell over which the curvature is taken. */
 const nearby = 1e-3;
@@ -222,12 +249,9 @@ const nearby = 1e-3;
 /** Fraction of a cell to which the interpolant is solved: it is no truer than this. */
 const fractionTolerance = 1e-7;
 
-/** Root in (0, 1) of a function that is not positive at 0 and positive at 1 (regula falsi, Illinois variant). */
-function rootOfRising(f: (s: number) => number, atZero: number, atOne: number): number {
-  let low = 0;
-  let high = 1;
-  let fLow = atZero;
-  let fHigh = atOne;
+/** Root of a function that is not positive at the low end of a stretch and positive at its high end (regula falsi, Illinois variant). */
+function rootOfRising(f: (s: number) => number, stretch: Turn): number {
+  let { low, high, atLow: fLow, atHigh: fHigh } = stretch;
   let side = 0;
   for (let step = 0; step < 60; step++) {
     const s = (low * fHigh - high * fLow) / (fHigh - fLow);
@@ -277,7 +301,7 @@ function correct(
     if (!(here.rho > 0)) return null;
     const move = curvature > 0 ? -here.slope / curvature : 0;
     // The interpolant is good to 1e-9 of the scale, so a step is tiny; a long one means a flat, undetermined curve.
-    if (Math.abs(move) > gridStep || Math.abs(move) < 1e-14) break;
+    if (Math.abs(move) > table.step || Math.abs(move) < 1e-14) break;
     const next = exactAt(table, evaluator, targets, symmetric, t + move);
     if (Math.abs(next.slope) >= Math.abs(here.slope)) break;
     const secant = (next.slope - here.slope) / move;

@@ -12,25 +12,26 @@ import type { LeftOut, PairAlone, RatioUsed, Stress } from './types.ts';
 const pairsAtMost = 15;
 
 /**
- * Each pair of bands alone, and each band left out, with C/B as in the fit.
+ * Each pair of bands alone, and each band left out.
  *
- * Where C was fitted it is held at the fitted C/B, so that a pair is two equations for two unknowns.
+ * Where C was fitted, a pair holds C/B at the fitted value, so that it is two equations for two unknowns; with one band left
+ * out C is fitted anew.
  */
 export function stressOf(ion: GroundCase, assigned: readonly Assigned[], fit: Fit, policy: Policy, freeIon: FreeIon | null): Stress {
   const used = assigned.filter((_, k) => fit.used[k]);
   if (used.length < 2 || fit.mode === 'field' || fit.mode === 'field, B assumed') return { pairs: [], leftOut: [] };
   const held: RatioUsed = { ...fit.ratio, u: 0 };
   const heldPolicy: Policy = { ...policy, ceilings: { ...policy.ceilings, racahC: 0 } };
-  const solve = (members: readonly Assigned[]): Fit | null => {
-    const outcome = fitAssignment(ion, members, heldPolicy, held, freeIon);
+  const solveBy = (by: Policy) => (members: readonly Assigned[]): Fit | null => {
+    const outcome = fitAssignment(ion, members, by, held, freeIon);
     return isFit(outcome) && outcome.mode !== 'field' && outcome.mode !== 'field, B assumed' && members.every((_, k) => outcome.used[k]) ? outcome : null;
   };
   const pairs: PairAlone[] = [];
   if (used.length > 2)
     for (let i = 0; i < used.length; i++)
       for (let j = i + 1; j < used.length && pairs.length < pairsAtMost; j++)
-        pairs.push({ labels: [used[i]!.label, used[j]!.label], bands: [assigned.indexOf(used[i]!), assigned.indexOf(used[j]!)], at: solve([used[i]!, used[j]!])?.solutions[0]!.at ?? null });
-  const leftOut = used.length < 3 ? [] : used.map((band, k) => leaveOut(ion, band, used.filter((_, i) => i !== k), solve, fit.floors[assigned.indexOf(band)]!));
+        pairs.push({ labels: [used[i]!.label, used[j]!.label], bands: [assigned.indexOf(used[i]!), assigned.indexOf(used[j]!)], at: solveBy(heldPolicy)([used[i]!, used[j]!])?.solutions[0]!.at ?? null });
+  const leftOut = used.length < 3 ? [] : used.map((band, k) => leaveOut(ion, band, used.filter((_, i) => i !== k), solveBy(fit.mode === 'field, B, C' ? policy : heldPolicy), fit.floors[assigned.indexOf(band)]!));
   return { pairs, leftOut };
 }
 

@@ -18,10 +18,9 @@ import type { Block } from '../shell/blocks.ts';
 /** Delta/B at t = 45 degrees. */
 export const angleScale = 20;
 
-/** Grid points over the quarter circle, a quarter of a degree apart. */
-export const gridPoints = 361;
-
-export const gridStep = Math.PI / 2 / (gridPoints - 1);
+/** Grid points over the quarter circle: a quarter of a degree apart where a curve is solved, a degree where only starts are looked for. */
+export const finePoints = 361;
+export const coarsePoints = 91;
 
 export interface FieldCase {
   readonly electrons: number;
@@ -46,6 +45,9 @@ export interface LevelTable {
   readonly ion: FieldCase;
   /** C/B. */
   readonly ratio: number;
+  /** Grid points and their distance; the first is at 0, the last at 90 degrees. */
+  readonly points: number;
+  readonly step: number;
   /** A level by its letter form on the grid, absolute; computed with its block on first use. */
   grid(label: string): GridLevel;
   /** The transition between two levels on the grid. */
@@ -97,23 +99,24 @@ export function slopeAt(t: number, ratio: number, field: number, racahB: number,
   return field * angleScale * Math.cos(t) - (racahB + ratio * racahC) * Math.sin(t);
 }
 
-const emptyLevel = (): GridLevel => ({ energy: new Float64Array(gridPoints), slope: new Float64Array(gridPoints), byRatio: new Float64Array(gridPoints) });
+const emptyLevel = (points: number): GridLevel => ({ energy: new Float64Array(points), slope: new Float64Array(points), byRatio: new Float64Array(points) });
 
 function difference(upper: GridLevel, lower: GridLevel): GridLevel {
   const minus = (a: Float64Array, b: Float64Array): Float64Array => a.map((value, i) => value - b[i]!);
   return { energy: minus(upper.energy, lower.energy), slope: minus(upper.slope, lower.slope), byRatio: minus(upper.byRatio, lower.byRatio) };
 }
 
-function makeTable(ion: FieldCase, ratio: number): LevelTable {
+function makeTable(ion: FieldCase, ratio: number, points: number): LevelTable {
+  const step = Math.PI / 2 / (points - 1);
   const sign = fieldSign(ion.geometry);
   const solved = new Map<Block, GridLevel[]>();
   const known = new Map<string, GridLevel>();
   const transitions = new Map<string, Map<string, GridLevel>>();
 
   function solveOnGrid(block: Block): GridLevel[] {
-    const levels = Array.from({ length: block.size }, emptyLevel);
-    for (let i = 0; i < gridPoints; i++) {
-      const t = i * gridStep;
+    const levels = Array.from({ length: block.size }, () => emptyLevel(points));
+    for (let i = 0; i < points; i++) {
+      const t = i * step;
       const { delta, racahB, racahC } = pointOnCurve(t, ratio);
       const solution = solveBlock(block, sign, delta, racahB, racahC);
       for (let k = 0; k < block.size; k++) {
@@ -143,6 +146,8 @@ function makeTable(ion: FieldCase, ratio: number): LevelTable {
   return {
     ion,
     ratio,
+    points,
+    step,
     grid,
     transition(ground, label) {
       let fromGround = transitions.get(ground);
@@ -167,16 +172,19 @@ function makeTable(ion: FieldCase, ratio: number): LevelTable {
   };
 }
 
-/** Tables are pure functions of ion, geometry and C/B; a collection uses few of them, so the latest are kept. */
+/**
+ * Tables are pure functions of ion, geometry and C/B. A collection uses few policies and so few fine ones; coarse ones go with
+ * the fifteen C/B of a fit with C free, for every ion.
+ */
 const held = new Map<string, LevelTable>();
-const heldAtMost = 200;
+const heldAtMost = 600;
 
 /** The level table of an ion at one C/B; computed once and shared. */
-export function levelTable(ion: FieldCase, ratio: number): LevelTable {
-  const key = `${ion.electrons} ${ion.geometry} ${ratio}`;
+export function levelTable(ion: FieldCase, ratio: number, points = finePoints): LevelTable {
+  const key = `${ion.electrons} ${ion.geometry} ${ratio} ${points}`;
   let table = held.get(key);
   if (!table) {
-    table = makeTable({ electrons: ion.electrons, geometry: ion.geometry }, ratio);
+    table = makeTable({ electrons: ion.electrons, geometry: ion.geometry }, ratio, points);
     if (held.size >= heldAtMost) held.delete(held.keys().next().value!);
     held.set(key, table);
   }

@@ -9,14 +9,16 @@ export interface IndistinguishableGroup {
 }
 
 /**
- * The longest runs of neighbours in a series of which no two can be told apart, each of two members or more, in the order of their
- * first members. Runs may overlap: A may be like B and B like C while A and C differ, so that an order is never read out of them.
+ * The longest runs of neighbours of which every two are `alike`, each of two or more, in the order of their first.
+ * Runs may overlap.
+ *
+ * @param count how many stand in the order
+ * @param alike of two places from 0, the lower first: whether they cannot be told apart
  */
-export function indistinguishableGroups({ members, parameter }: Pick<Comparable, 'members' | 'parameter'>, floor: Policy['differentialFloor']): readonly IndistinguishableGroup[] {
-  const alike = (i: number, j: number): boolean => !(difference(members[i]!, members[j]!, parameter, floor)?.distinguishable ?? true);
+export function runsAlike(count: number, alike: (lower: number, upper: number) => boolean): readonly IndistinguishableGroup[] {
   const groups: IndistinguishableGroup[] = [];
   let first = 0;
-  for (let last = 0; last < members.length; last++) {
+  for (let last = 0; last < count; last++) {
     // The run ending here begins behind the last earlier member that differs from this one.
     let start = last;
     while (start > first && alike(start - 1, last)) start--;
@@ -25,6 +27,14 @@ export function indistinguishableGroups({ members, parameter }: Pick<Comparable,
       first = start;
     }
   }
-  if (members.length - 1 > first) groups.push({ first, last: members.length - 1 });
+  if (count - 1 > first) groups.push({ first, last: count - 1 });
   return groups;
+}
+
+/**
+ * The longest runs of neighbours in a series of which no two can be told apart, each of two members or more, in the order of their
+ * first members. Runs may overlap: A may be like B and B like C while A and C differ, so that an order is never read out of them.
+ */
+export function indistinguishableGroups({ members, parameter }: Pick<Comparable, 'members' | 'parameter'>, floor: Policy['differentialFloor']): readonly IndistinguishableGroup[] {
+  return runsAlike(members.length, (i, j) => !(difference(members[i]!, members[j]!, parameter, floor)?.distinguishable ?? true));
 }

@@ -39,7 +39,7 @@ export function beginLines({ remove, keep, write }: BeginPlan, { content, done, 
     `Settings: licence ${group.licence}, started ${group.started}, address ${group.url}${group.url === placeholderUrl ? ' (change it in group.yaml before you publish)' : ''}.`,
     ...(done ? [
       `Next: copy ${content}/complexes/${exampleId}.yaml, an example with invented readings, to ID.yaml and type your first record over it;`,
-      'delete the example; then "npm run check", and "npm run dev" for the page.',
+      'delete the example and change the description in group.yaml, which speaks of it; then "npm run check", and "npm run dev" for the page.',
     ] : []),
   ];
 }

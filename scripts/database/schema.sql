@@ -272,7 +272,7 @@ CREATE TABLE reading_band (
   used            INTEGER NOT NULL CHECK (used IN (0, 1)),   -- 0: only compared with a prediction
   calculated      REAL,                             -- [cm-1, >= 0] transition energy at the fit
   residual        REAL,                             -- [cm-1] observed - calculated
-  leverage        REAL,                             -- [1, 0 to 1] how much of the fit hangs on it
+  leverage        REAL,                             -- [1, >= 0] how much of the fit hangs on it: from 0 to 1, but for rounding
   gradient_Delta  REAL,                             -- [1] d(transition energy)/d(Delta) at the fit
   gradient_B      REAL,                             -- [1] d(transition energy)/d(B) at the fit
   gradient_C      REAL,                             -- [1] d(transition energy)/d(C) at the fit
@@ -311,8 +311,8 @@ CREATE TABLE branch (
   reading     INTEGER NOT NULL,
   number      INTEGER NOT NULL,                     -- [>= 1] place in the reading
   Delta       REAL NOT NULL,                        -- [cm-1, >= 0] Delta of the solution
-  B           REAL NOT NULL,                        -- [cm-1, > 0] Racah B of the solution
-  C           REAL NOT NULL,                        -- [cm-1, > 0] Racah C of the solution
+  B           REAL NOT NULL,                        -- [cm-1, >= 0] Racah B of the solution; 0 where it does not enter, with one d electron or hole
+  C           REAL NOT NULL,                        -- [cm-1, >= 0] Racah C of the solution; 0 where it does not enter
   chi2        REAL NOT NULL,                        -- [1, >= 0] sum of squared weighted residuals
   chosen      INTEGER NOT NULL CHECK (chosen IN (0, 1)),   -- 1: the solution that the reading reports
   PRIMARY KEY (complex, measurement, reading, number),

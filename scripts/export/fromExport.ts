@@ -8,7 +8,7 @@ import { compareRows } from './compareRows.ts';
 import type { RowComparison } from './compareRows.ts';
 import { readExport } from './readExport.ts';
 
-export interface RebuildOrder extends Pick<RefitOrder, 'database' | 'cache' | 'progress'> {
+export interface RebuildOrder extends Pick<RefitOrder, 'database' | 'progress'> {
   /** Folder of the export. */
   readonly from: string;
 }
@@ -21,14 +21,14 @@ export interface Rebuild {
 }
 
 /**
- * Rebuilds a database from an export alone: what was typed is read from its CSV files, everything is fitted anew, and every cell is
- * compared with what was published.
+ * Rebuilds a database from an export alone: what was typed is read from its CSV files, everything is fitted anew without a cache, and
+ * every cell is compared with what was published.
  */
-export function rebuildFromExport({ from, database, cache, progress }: RebuildOrder): Rebuild {
+export function rebuildFromExport({ from, database, progress }: RebuildOrder): Rebuild {
   const published = readExport(from);
   const collection = collectionFromRows(published.rows);
   const records = collection.complexes.length + collection.ligands.length + collection.sources.length;
-  const { refit, tables } = refitCollection(collection, historyFromRows(published.rows), records, { cache, ...(progress === undefined ? {} : { progress }) });
+  const { refit, tables } = refitCollection(collection, historyFromRows(published.rows), records, { cache: null, ...(progress === undefined ? {} : { progress }) });
   const bytes = databaseBytes(tables);
   replaceFile(database, bytes);
   return {

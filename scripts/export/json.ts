@@ -14,11 +14,12 @@ export function jsonRow({ columns }: TableEntry, row: Row, without: readonly str
   }));
 }
 
-/** collection.json: every row of every table, one row a line. */
-export function collectionJson(tables: readonly TableEntry[], rows: TableRows, about: JsonObject): string {
-  const parts = tables.map((table) => {
+/** collection.json, table by table: every row of every table, one row a line. A large collection is more than one text can hold. */
+export function* collectionJson(tables: readonly TableEntry[], rows: TableRows, about: JsonObject): Generator<string> {
+  yield `{"$schema": "collection.schema.json",\n"about": ${JSON.stringify(about)},\n"tables": {`;
+  for (const [index, table] of tables.entries()) {
     const lines = (rows[table.name] ?? []).map((row) => JSON.stringify(jsonRow(table, row)));
-    return `${JSON.stringify(table.name)}: [${lines.length === 0 ? '' : `\n${lines.join(',\n')}\n`}]`;
-  });
-  return `{"$schema": "collection.schema.json",\n"about": ${JSON.stringify(about)},\n"tables": {\n${parts.join(',\n')}\n}}\n`;
+    yield `${index === 0 ? '' : ','}\n${JSON.stringify(table.name)}: [${lines.length === 0 ? '' : `\n${lines.join(',\n')}\n`}]`;
+  }
+  yield '\n}}\n';
 }

@@ -1,10 +1,7 @@
-import { createHash } from 'node:crypto';
-import { mkdirSync, readFileSync, writeFileSync } from 'node:fs';
-import { dirname, join } from 'node:path';
+import { readFileSync } from 'node:fs';
 import { resultTable } from './columns.ts';
-import { aboutJson, citedRecords, publicationFromRows } from './describe.ts';
+import { aboutJson, citedRecords } from './describe.ts';
 import { dictionaryJson } from './dictionary/show.ts';
-import { databaseTables } from './dictionary/schemaFile.ts';
 import type { TableEntry } from './dictionary/types.ts';
 import { mainFiles, sumsFile, tableFile } from './files.ts';
 import type { DataFile } from './files.ts';
@@ -21,11 +18,13 @@ import { roCrate } from './metadata/roCrate.ts';
 import { linkset } from './metadata/signposting.ts';
 import { sourcesBib } from './metadata/sources.ts';
 import type { SourceCited } from './metadata/sources.ts';
-import { readDatabaseRows } from './readDatabase.ts';
+import { readPublished } from './published.ts';
+import type { Published } from './published.ts';
 import { readResults, resultsCsv, resultsJson } from './results.ts';
 import type { Results } from './results.ts';
 import { tableCsv } from './tableFiles.ts';
 import type { TableRows } from './tableFiles.ts';
+import { written } from './written.ts';
 
 /** Names of the files that commands look for, in the folder data/ of the site. */
 export const exportNames = { database: 'collection.sqlite', csv: 'results.csv', json: 'results.json' } as const;
@@ -35,9 +34,11 @@ const describing: readonly string[] = ['datapackage.json', 'ro-crate-metadata.js
 
 /** Writes the files for download into `folder`, making it where it is missing. They depend on the database alone. */
 export function writeExports(databaseFile: string, folder: string): readonly WrittenFile[] {
-  const tables = databaseTables();
-  const rows = readDatabaseRows(databaseFile, tables);
-  const publication = publicationFromRows(rows);
+  return writeDataFiles(readPublished(databaseFile), folder);
+}
+
+/** The same of a database that is read already. */
+export function writeDataFiles({ databaseFile, tables, rows, publication }: Published, folder: string): readonly WrittenFile[] {
   const texts = dataTexts(tables, rows, readResults(databaseFile), publication);
   const plain = mainFiles.filter(({ name }) => !describing.includes(name)).map((file) =>
     written(folder, file, file.name === exportNames.database ? readFileSync(databaseFile) : texts.get(file.name)!));
@@ -52,9 +53,9 @@ export function writeExports(databaseFile: string, folder: string): readonly Wri
 }
 
 /** The texts of data/ but for the database, the single tables and what describes the files, by name. */
-function dataTexts(tables: readonly TableEntry[], rows: TableRows, results: Results, publication: Publication): ReadonlyMap<string, string> {
+function dataTexts(tables: readonly TableEntry[], rows: TableRows, results: Results, publication: Publication): ReadonlyMap<string, string | Iterable<string>> {
   const formats = [...new Set(mainFiles.map(({ mediaType }) => mediaType))];
-  return new Map([
+  return new Map<string, string | Iterable<string>>([
     ['results.csv', resultsCsv(results)],
     ['results.json', resultsJson(results)],
     ['collection.json', collectionJson(tables, rows, aboutJson(publication, publication.address))],
@@ -74,14 +75,6 @@ function dataTexts(tables: readonly TableEntry[], rows: TableRows, results: Resu
 
 function fileNamed(name: string): DataFile {
   return mainFiles.find((file) => file.name === name)!;
-}
-
-function written(folder: string, file: DataFile, content: string | Buffer): WrittenFile {
-  const path = join(folder, file.name);
-  mkdirSync(dirname(path), { recursive: true });
-  const bytes = typeof content === 'string' ? Buffer.from(content, 'utf8') : content;
-  writeFileSync(path, bytes);
-  return { ...file, bytes: bytes.length, sha256: createHash('sha256').update(bytes).digest('hex') };
 }
 
 function json(value: JsonObject): string {

@@ -2,22 +2,18 @@ import { createHash } from 'node:crypto';
 import { mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { bandsCsv } from './bands.ts';
-import { aboutJson, citedRecords, publicationFromRows } from './describe.ts';
-import { databaseTables } from './dictionary/schemaFile.ts';
+import { aboutJson, citedRecords } from './describe.ts';
 import { citationBibtex, citationRis } from './metadata/cite.ts';
 import { recordAddress } from './metadata/publication.ts';
 import { complexPath } from './paths.ts';
-import { readDatabaseRows } from './readDatabase.ts';
+import type { Published } from './published.ts';
 import { recordJson, rowFinder } from './record.ts';
 
 /**
  * Writes the files beside the page of each complex into the site's folder: record.json, record.yaml, bands.csv, cite.bib, cite.ris.
  * @throws Error where a record was changed after it was fitted: its text would not be that of the numbers
  */
-export function writeRecords(databaseFile: string, content: string, site: string): void {
-  const tables = databaseTables();
-  const rows = readDatabaseRows(databaseFile, tables);
-  const publication = publicationFromRows(rows);
+export function writeRecords({ tables, rows, publication }: Published, content: string, site: string): void {
   const find = rowFinder(tables, rows);
   const complexes = new Map((rows['complex'] ?? []).map((row) => [String(row['id']), row]));
   for (const record of citedRecords(rows)) {

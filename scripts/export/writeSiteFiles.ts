@@ -1,15 +1,12 @@
 import { readdirSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { feedReleases, publicationFromRows } from './describe.ts';
-import { databaseTables } from './dictionary/schemaFile.ts';
+import { feedReleases } from './describe.ts';
 import { changesFeed } from './metadata/atom.ts';
 import { robots, sitemap } from './metadata/siteFiles.ts';
-import { readDatabaseRows } from './readDatabase.ts';
+import type { Published } from './published.ts';
 
 /** Writes sitemap.xml, robots.txt and the feed of changes at the top of a built site; `unlisted` are pages that are no content, as tombstones. */
-export function writeSiteFiles(databaseFile: string, site: string, unlisted: ReadonlySet<string>): void {
-  const rows = readDatabaseRows(databaseFile, databaseTables());
-  const publication = publicationFromRows(rows);
+export function writeSiteFiles({ rows, publication }: Published, site: string, unlisted: ReadonlySet<string>): void {
   const pages = pagesOf(site).filter((page) => !unlisted.has(page));
   writeFileSync(join(site, 'sitemap.xml'), sitemap(publication, pages));
   writeFileSync(join(site, 'robots.txt'), robots(publication));

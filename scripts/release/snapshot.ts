@@ -58,7 +58,7 @@ function finder(tables: Tables): Find {
 
 function complexOf(complex: Row, find: Find): FrozenComplex {
   const id = String(complex['id']);
-  const measurements = [...find('measurement', id)].sort((a, b) => Number(a['number']) - Number(b['number']));
+  const measurements = sorted(find('measurement', id), (row) => String(row['id']));
   return {
     id, formula: String(complex['formula']), ion: String(complex['ion']), geometry: String(complex['geometry']), isomer: String(complex['isomer']),
     measurements: measurements.map((measurement) => measurementOf(complex, measurement, find)),

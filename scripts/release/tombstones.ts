@@ -2,11 +2,9 @@
 
 import { existsSync, mkdirSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { publicationFromRows } from '../export/describe.ts';
-import { databaseTables } from '../export/dictionary/schemaFile.ts';
 import type { Publication } from '../export/metadata/publication.ts';
 import { xmlText } from '../export/metadata/xml.ts';
-import { readDatabaseRows } from '../export/readDatabase.ts';
+import type { Published } from '../export/published.ts';
 import { historyFromRows } from './rows.ts';
 import type { Gone, History } from './types.ts';
 
@@ -14,9 +12,7 @@ import type { Gone, History } from './types.ts';
  * Writes a page for every address that is gone and that the site itself did not draw. Returns the pages of gone addresses.
  * @throws Error where a published address has neither its page nor one of these
  */
-export function writeTombstones(databaseFile: string, site: string): ReadonlySet<string> {
-  const rows = readDatabaseRows(databaseFile, databaseTables());
-  const publication = publicationFromRows(rows);
+export function writeTombstones({ rows, publication }: Published, site: string): ReadonlySet<string> {
   const history = historyFromRows(rows);
   const pages = history.gone.filter(({ address, kind }) => kind !== 'corrected' && address.endsWith('/'));
   for (const gone of pages) {
@@ -33,14 +29,14 @@ function holdPublished({ releases, gone }: History, site: string): void {
   const left = new Set(gone.map(({ address }) => address));
   const published = new Set(releases.flatMap(({ addresses }) => addresses).filter((address) => !address.includes('#')));
   const missing = [...published].filter((address) => !existsSync(join(site, address, address === '' || address.endsWith('/') ? 'index.html' : '')) && !left.has(address));
-  if (missing.length > 0) throw new Error(`the site has nothing at ${missing.slice(0, 5).join(', ')}${missing.length > 5 ? ` and ${missing.length - 5} more` : ''}, published by an earlier release`);
+  if (missing.length > 0) throw new Error(`the site has nothing at ${missing.slice(0, 5).map((address) => (address === '' ? 'its first page' : address)).join(', ')}${missing.length > 5 ? ` and ${missing.length - 5} more` : ''}, published by an earlier release`);
 }
 
 /** A page that says what became of an address. A redirect also takes the reader there at once. */
 export function tombstonePage({ address: base, title, licence }: Publication, { address, kind, target, reason }: Gone): string {
   const path = new URL(base).pathname;
   const link = target === null ? null : `${path}${target}`;
-  const heading = kind === 'redirect' ? 'This record has a new address' : 'This record was taken away';
+  const heading = kind === 'redirect' ? 'This page has a new address' : 'This page was taken away';
   return [
     '<!doctype html>', '<html lang="en-GB">', '<head>', '<meta charset="utf-8">',
     '<meta http-equiv="Content-Security-Policy" content="default-src \'none\'; base-uri \'none\'; form-action \'none\'">',

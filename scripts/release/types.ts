@@ -25,6 +25,7 @@ export interface FrozenComplex {
   readonly ion: string;
   readonly geometry: string;
   readonly isomer: string;
+  /** Ascending by id. */
   readonly measurements: readonly FrozenMeasurement[];
 }
 

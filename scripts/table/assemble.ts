@@ -166,7 +166,10 @@ function setAt(target: Record<string, unknown>, path: readonly string[], value: 
   const last = path.at(-1);
   if (last === undefined) return;
   let inner = target;
-  for (const step of path.slice(0, -1)) inner = (inner[step] ??= {}) as Record<string, unknown>;
+  for (const step of path.slice(0, -1)) {
+    inner[step] ??= {};
+    inner = inner[step] as Record<string, unknown>;
+  }
   inner[last] = value;
 }
 

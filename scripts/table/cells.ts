@@ -16,7 +16,7 @@ const numeric: ReadonlySet<CellKind> = new Set(['energy', 'temperature', 'coeffi
 
 /** The content of a cell without blanks around it, null where it says that nothing is known. */
 export function contentOf(cell: string, { missing }: Pick<Settings, 'missing'>): string | null {
-  const text = cell.trim();
+  const text = cell.replace(/\r\n?/g, '\n').trim();
   return text === '' || missing.includes(text) ? null : text;
 }
 
@@ -81,13 +81,12 @@ export interface PositionCell {
 
 /** "28600 sh" is a shoulder; brackets hold the epsilon where the column says so. */
 export function positionParts(content: string, brackets: Column['brackets']): PositionCell {
-  const sh = /^(.*?)[ ,;]*\(?\bsh\b\.?\)?$/i.exec(content);
-  const rest = (sh?.[1] ?? content).trim();
-  const bracketed = brackets === 'epsilon' ? /^(.*?)\s*[([]([^()[\]]*)[)\]](.*)$/.exec(rest) : null;
-  if (bracketed === null) return { number: rest, shoulder: sh !== null, epsilon: null };
-  const inside = /^(?:ε|e|eps\.?|epsilon)?\s*=?\s*(.*)$/i.exec(bracketed[2]!.trim())![1]!;
-  const isShoulder = /^sh\.?$/i.test(inside);
-  return { number: `${bracketed[1]}${bracketed[3]}`.trim(), shoulder: sh !== null || isShoulder, epsilon: inside === '' || isShoulder ? null : inside };
+  const bracketed = brackets === 'epsilon' ? /^(.*?)\s*[([]([^()[\]]*)[)\]](.*)$/.exec(content) : null;
+  const inside = bracketed === null ? '' : /^(?:ε|e|eps\.?|epsilon)?\s*=?\s*(.*)$/i.exec(bracketed[2]!.trim())![1]!;
+  const rest = bracketed === null ? content : `${bracketed[1]} ${bracketed[3]!.trim()}`.trim();
+  const sh = /^(.*?)[ ,;]*\(?\bsh\b\.?\)?$/i.exec(rest);
+  const shInside = /^sh\.?$/i.test(inside);
+  return { number: (sh?.[1] ?? rest).trim(), shoulder: sh !== null || shInside, epsilon: inside === '' || shInside ? null : inside };
 }
 
 /** A position with the uncertainty of a column of its own, "21550(60) cm-1"; both with points already. */

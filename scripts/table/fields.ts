@@ -66,4 +66,4 @@ export function isField(name: string): boolean {
 /** The word for a column that is not taken over. */
 export const notTaken = 'leave-out';
 
-export const columnFieldNames = [...tableFields.map(({ name }) => name), notTaken] as [string, ...string[]];
+export const columnFieldNames: [string, ...string[]] = [notTaken, ...tableFields.map(({ name }) => name)];

@@ -45,12 +45,15 @@ export function tableRows(records: readonly NamedComplex[], mapping: Mapping): s
   const header = Array.from({ length: width }, (_, index) => mapping.columns.find((column) => column.index === index)?.header ?? '');
   const above = Array.from({ length: mapping.header - 1 }, () => Array.from({ length: width }, () => ''));
   const rows = records.flatMap((record) => {
-    const all = spreads(record).flatMap((spread) => (mapping.rows === 'complex' ? [{ spread, item: null }] : Array.from({ length: Math.max(1, spread.items.length, spread.quoted.length) }, (_, item) => ({ spread, item }))));
+    const all = spreads(record).flatMap((spread): { readonly spread: Spread; readonly item: number | null }[] => {
+      if (mapping.rows === 'complex') return [{ spread, item: null }];
+      return Array.from({ length: Math.max(1, spread.items.length, spread.quoted.length) }, (_, item) => ({ spread, item }));
+    });
     return all.map(({ spread, item }, index) => Array.from({ length: width }, (_, at) => {
       const column = mapping.columns.find((one) => one.index === at);
       if (column === undefined || column.field === notTaken) return '';
       const { level } = fieldNamed(column.field);
-      if (mapping.continued === 'blank' && index > 0 && level === 'complex') return '';
+      if (mapping.continued === 'blank' && index > 0 && (level === 'complex' || (level === 'measurement' && all[index - 1]!.spread === spread))) return '';
       return cellOf(spread, item, column, mapping);
     }));
   });

@@ -36,7 +36,7 @@ export function guessMapping(bytes: Uint8Array): GuessedMapping {
   const perComplex = positions > 1;
   const columns = headers.map((typed, index): Column & { readonly sized: boolean } => {
     const guess = guesses[index]!;
-    const field = guess.field === 'band.notes' && perComplex ? 'measurement.notes' : (guess.field ?? notTaken);
+    const field = guess.field === 'band.notes' && perComplex && guess.number === null ? 'measurement.notes' : (guess.field ?? notTaken);
     const known = field === notTaken ? null : fieldNamed(field);
     const sized = guess.unit === null && known?.kind === 'energy' && cells(index).some(isBareNumber) ? unitBySize(cells(index)) : null;
     const bySize = sized ?? (guess.unit === null && field === 'temperature' && cells(index).some(isBareNumber) ? 'K' : null);

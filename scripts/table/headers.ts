@@ -1,6 +1,7 @@
 // What a column's header seems to say: the field, a unit, which band, a term. Guesses that a person confirms.
 
 import { plainCharacters } from '#engine';
+import { unitTyped } from './cells.ts';
 import { isField } from './fields.ts';
 
 export interface HeaderGuess {
@@ -39,12 +40,12 @@ const words: Readonly<Record<string, string>> = {
   'source.date': 'date, datum, day, measured on',
   'source.cite': 'cite, source, reference, ref, ref., literature, lit., quelle, literatur',
   'source.where': 'where, table, page in source',
-  position: 'position, band, bands, λ, λmax, λ max, λ_max, lambda, lambda max, lambda_max, wavelength, wavenumber, wave number, ν, ν̃, nu, nu bar, energy, max, maximum, absorption, abs., peak, bande, wellenzahl, wellenlänge',
+  position: 'position, band, bands, λ, lambda, wavelength, wavenumber, wave number, ν, nu, nu bar, energy, max, maximum, absorption, abs., peak, bande, wellenzahl, wellenlänge',
   'position.u': 'uncertainty, error, err, err., sigma, σ, ±, u(ν), u(λ), u(position), fehler, unsicherheit, std, esd',
   kind: 'kind, type, band type, art',
   side: 'side',
   width: 'width, fwhm, half-width, half width, halfwidth, δν1/2, δν, bandwidth, halbwertsbreite',
-  epsilon: 'epsilon, ε, εmax, ε max, eps, eps., molar absorptivity, absorptivity, molar absorption coefficient, extinction coefficient, extinction, molar extinction',
+  epsilon: 'epsilon, ε, eps, eps., molar absorptivity, absorptivity, molar absorption coefficient, extinction coefficient, extinction, molar extinction',
   strength: 'strength, intensity, int., int',
   term: 'term, assignment, transition, assigned to, zuordnung, übergang',
   'left-out': 'left out, reason',
@@ -66,13 +67,14 @@ const termPattern = /^(?:[a-c])?[1-6](?:A[12]|E|T[12])g?(?:\([A-Z]\))?$/;
 
 /** Reads one header. A header that is a field's own name, with a number behind it where a row has several, is taken as that. */
 export function readHeader(header: string): HeaderGuess {
-  const plain = plainCharacters(header).replace(/[₀-₉]/g, (digit) => String('₀₁₂₃₄₅₆₇₈₉'.indexOf(digit)));
-  const unit = unitOf(plain);
-  const epsilonInside = /\((?:ε|eps|epsilon)[^)]*\)/i.test(plain);
-  const bare = withoutUnit(plain).replace(/\((?:ε|eps|epsilon)[^)]*\)/i, '').trim();
-  const brackets = epsilonInside ? 'epsilon' : 'uncertainty';
+  // A tilde above the letter says wavenumber; the letter says enough.
+  const plain = plainCharacters(header).normalize('NFKC').replace(/\u0303/g, '').replace(/[₀-₉]/g, (digit) => String('₀₁₂₃₄₅₆₇₈₉'.indexOf(digit)));
+  const withoutEpsilon = plain.replace(/\((?:ε|eps|epsilon)[^)]*\)/i, '').trim();
+  const brackets = withoutEpsilon === plain ? 'uncertainty' : 'epsilon';
+  const unit = unitOf(withoutEpsilon);
+  const bare = withoutUnit(withoutEpsilon);
   if (termPattern.test(bare)) return { field: 'position', unit, number: null, term: bare, brackets };
-  for (const [name, number] of [[bare, null], ...numbered(bare)] as const) {
+  for (const [name, number] of [[bare, null], ...numbered(bare), ...ofMaximum(bare)] as const) {
     const field = isField(name) ? name : (exact[name] ?? byWord.get(name.toLowerCase()) ?? null);
     if (field !== null) return { field, unit: takesUnit(field) ? unit : null, number, term: null, brackets: field === 'position' ? brackets : 'uncertainty' };
   }
@@ -89,9 +91,15 @@ function numbered(text: string): (readonly [string, number])[] {
   return found === null || found[1] === '' ? [] : [[found[1]!.trim(), Number(found[2])]];
 }
 
+/** "λmax", "ν_max", "λ(max)" as the bare word. */
+function ofMaximum(text: string): (readonly [string, null])[] {
+  const found = /^(.+?)[ _]?\(?max\.?\)?$/i.exec(text);
+  return found === null ? [] : [[found[1]!.trim(), null]];
+}
+
 function unitOf(plain: string): string | null {
   const found = new RegExp(String.raw`(?:[([]|\/ ?|, | in | )\(?(${unitPattern})\)?[)\]]?\s*$`).exec(plain);
-  return found === null ? null : found[1]!;
+  return found === null ? null : unitTyped(found[1]!);
 }
 
 function withoutUnit(plain: string): string {

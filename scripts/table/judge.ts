@@ -4,6 +4,7 @@ import { recordText } from '#engine';
 import { checkComplex } from '../content/checks/complex.ts';
 import type { KnownRecords } from '../content/checks/complex.ts';
 import { readDraft } from '../content/draft.ts';
+import type { FaultCode } from '../content/codes.ts';
 import { badId } from '../content/ids.ts';
 import { createReporter } from '../content/report.ts';
 import { complexSchema } from '../content/schema/complex.ts';
@@ -37,12 +38,25 @@ export function judge(assembled: Assembled, known: KnownRecords, names: TableNam
   const wrongId = badId(id, 'an id');
   const idPlace = origin.get('id') ?? { row: rows[0]!, column: null, header: '' };
   if (wrongId !== null) faults.push(tableFault(idPlace, { ...wrongId, found: `"${wrongId.found}"` }, names, 'id'));
+  const badFormula = report.faults.some(({ code }) => code === 'BAD_FORMULA');
   for (const fault of report.faults) {
+    const ofFormula = fault.code === 'MISSING_FIELD' && (fault.field === 'ion' || fault.field === 'ligands');
+    // What a formula that cannot be read does not tell is no second fault.
+    if (ofFormula && badFormula) continue;
     const { place, exact } = placeOf(fault.field, origin);
-    const mend = fault.code === 'MISSING_FIELD' ? `${fault.mend.replace(/^add a line such as +/, 'add a column, or a value such as  ')}  under every-row in the mapping` : fault.mend;
-    faults.push(tableFault(place, { ...fault, code: fault.code as 'MISSING_FIELD', mend }, names, exact ? '' : fault.field));
+    const found = ofFormula ? `${fault.found}, and the formula does not tell: it needs a charge, one metal, and ligands with one record each in ligands/` : fault.found;
+    faults.push(tableFault(place, { ...fault, code: fault.code as FaultCode, found, mend: tableAdvice(fault) }, names, exact ? '' : fault.field));
   }
   return { id, text, assembled, faults };
+}
+
+/** Advice for a record, for a table. */
+function tableAdvice({ code, field, mend }: Fault): string {
+  if (code !== 'MISSING_FIELD') return mend;
+  if (field.endsWith('.source')) return 'add a column for source.notebook or source.cite, or write  source.notebook: "old table, sheet 1"  under every-row in the mapping';
+  if (field === 'ligands') return 'add a column such as  5 ammine + 1 chlorido, or the missing record in ligands/';
+  if (/\.(bands|position)$/.test(field)) return 'add a column for position, or fill in the cell';
+  return `${mend.replace(/^add a line such as +/, 'add a column, or write  ')}  under every-row in the mapping`;
 }
 
 function headingOf({ rows, fromFormula }: Assembled, table: string): string {

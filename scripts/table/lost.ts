@@ -28,14 +28,17 @@ export function lostTexts(records: readonly NamedComplex[], rows: readonly (read
   return lost;
 }
 
-/** Every text of the records by field, with the places that tell records apart left aside but their formula and order. */
+/** Every text of the records by field, each behind the formula of its complex. */
 function textsOf(records: readonly NamedComplex[]): ReadonlyMap<string, string[]> {
   const texts = new Map<string, string[]>();
   const add = (level: string, target: object, about: string): void => {
     for (const field of tableFields) {
       if (field.level !== level || field.name === 'position.u') continue;
       const text = textAt(target, field);
-      if (text !== null) texts.set(field.name, [...(texts.get(field.name) ?? []), `${about} ${text}`]);
+      if (text === null) continue;
+      const list = texts.get(field.name);
+      if (list === undefined) texts.set(field.name, [`${about} ${text}`]);
+      else list.push(`${about} ${text}`);
     }
   };
   for (const { id, complex } of records) {

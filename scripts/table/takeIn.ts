@@ -3,6 +3,7 @@
 import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import type { Collection, Fault } from '../content/types.ts';
+import { UsageError } from '../runCommand.ts';
 import { guessMapping } from './guess.ts';
 import { readMapping } from './mapping.ts';
 import type { Mapping } from './mapping.ts';
@@ -44,11 +45,15 @@ export interface TakeInOrder {
   readonly show: boolean;
 }
 
-/** Writes the guessed mapping where there is none; writes the records where the mapping is confirmed and nothing is at fault. */
+/**
+ * Writes the guessed mapping where there is none; writes the records where the mapping is confirmed and nothing is at fault.
+ * @throws UsageError for a table without any row
+ */
 export function takeIn({ files, names, collection, partly, show }: TakeInOrder): TakenIn {
   const bytes = readFileSync(files.table);
   const guessed = !existsSync(files.mapping);
   const guess = guessed ? guessMapping(bytes) : null;
+  if (guess?.mapping.columns.length === 0) throw new UsageError(`${names.table} holds no row.`);
   if (guess !== null && !show) writeFileSync(files.mapping, mappingText(guess.mapping, names.table.split('/').at(-1)!, guess.remarks), { flag: 'wx' });
   const typed = guess === null ? readMapping(files.mapping, names.mapping) : null;
   if (typed?.ok === false) return { mapping: null, guessed, rows: 0, records: [], faults: typed.faults, written: [], unchanged: [], done: false };

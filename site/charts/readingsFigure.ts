@@ -18,8 +18,11 @@ export interface ReadingLine {
 
 const WIDTH = 760;
 const MARGIN = 62;
-const LINE = 62;
-const AXIS = 30;
+/** Height of a line with names above it, and what names below it add. */
+const LINE = 48;
+const BELOW = 13;
+const GAP = 4;
+const AXIS = 28;
 const SIZE = 11.5;
 const SCALE = energyScale([MARGIN, WIDTH - 8]);
 
@@ -28,17 +31,22 @@ const SCALE = energyScale([MARGIN, WIDTH - 8]);
  * it small triangles where its fit puts them, and named open triangles where it expects more.
  */
 export function readingsFigure(lines: readonly ReadingLine[], dress: { readonly id: string; readonly title: string; readonly description: string }): string {
-  const height = lines.length * LINE + AXIS;
-  return svgElement(dress, WIDTH, height, lines.map((line, index) => readingLine(line, index * LINE)).join('') + axis(lines.length * LINE));
+  let top = 0;
+  const drawn = lines.map((line) => {
+    const markup = readingLine(line, top);
+    top += LINE + (line.expected.some(({ position }) => SCALE.holds(position)) ? BELOW : GAP);
+    return markup;
+  });
+  return svgElement(dress, WIDTH, top + AXIS, drawn.join('') + axis(top));
 }
 
 function readingLine(line: ReadingLine, top: number): string {
-  const place: StripPlace = { scale: SCALE, baseline: top + 40, top: top + 19, bottom: top + 46 };
-  return `<text x="0" y="${top + 37}" font-size="12.5">${line.name}</text>${stripInk(line.strip, place)}`
-    + names(line.named, top + 13, top + 18)
+  const place: StripPlace = { scale: SCALE, baseline: top + 36, top: top + 17, bottom: top + 42 };
+  return `<text x="0" y="${top + 33}" font-size="12.5">${line.name}</text>${stripInk(line.strip, place)}`
+    + names(line.named, top + 11, top + 16)
     + line.calculated.filter(SCALE.holds).map((position) => triangle(position, place.baseline, 'point')).join('')
     + line.expected.filter(({ position }) => SCALE.holds(position)).map(({ position }) => triangle(position, place.baseline, 'calculated')).join('')
-    + names(line.expected, top + 59, null);
+    + names(line.expected, top + 56.5, null);
 }
 
 function names(all: ReadingLine['named'], baseline: number, leaderTo: number | null): string {

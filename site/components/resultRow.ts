@@ -29,14 +29,22 @@ export function partsMarkup(parts: Parts): string {
   }).join('');
 }
 
+/** What a row says beside its numbers in a table that is made in the page. */
+export interface RowNotes {
+  /** Why it was found; null: nothing was looked for. */
+  readonly why: string | null;
+  /** Its number among all rows, where only some are drawn. */
+  readonly index: number | null;
+}
+
 /**
  * A row of the collection's table. The build and the search in the page both call this, so that a row looks the same
  * wherever it was made.
  * @param id unique on the page
  */
-export function resultRow(row: ResultRow, id: string): string {
+export function resultRow(row: ResultRow, id: string, { why, index }: RowNotes = { why: null, index: null }): string {
   const address = url(`complexes/${row.complex}/`);
-  return `<tr><th scope="row"><a class="formula" href="${escapeText(address)}#${escapeText(row.measurement)}">${partsMarkup(row.formula.parts)}</a></th>`
+  return `<tr${index === null ? '' : ` aria-rowindex="${index}"`}><th scope="row"><a class="formula" href="${escapeText(address)}#${escapeText(row.measurement)}">${partsMarkup(row.formula.parts)}</a>${why === null ? '' : `<span class="why">${escapeText(why)}</span>`}</th>`
     + `<td class="strip-cell">${bandStrip(row.strip, row.stripTitle, id)}</td>`
     + `<td>${escapeText(row.conditions)}</td>`
     + number(row.delta) + number(row.racahB) + number(row.beta)

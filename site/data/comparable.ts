@@ -1,5 +1,5 @@
 import {
-  type ComplexIdentity, type Difference, type Geometry, type SeriesNumber, type SeriesParameter, type SeriesResult, type Subject,
+  type ComplexIdentity, type Difference, type Geometry, type SeriesNumber, type SeriesParameter, type SeriesResult, type Subject, type UnlikeKind,
   comparisonCautions, conditionWords, difference, ionKey, ionSubject, ionWords, ligandSubject, parametersByName, temperatureReach, usedTransitions, usualSeries,
 } from '#engine';
 import { groupBy } from './group.ts';
@@ -16,7 +16,7 @@ export interface Compared {
 /** Measurements that may stand in one series, what they share, and what was left out of it and why. */
 export interface Series {
   readonly members: readonly MeasurementNode[];
-  readonly leftOut: readonly { readonly measurement: MeasurementNode; readonly reason: string }[];
+  readonly leftOut: readonly { readonly measurement: MeasurementNode; readonly kind: UnlikeKind; readonly reason: string }[];
   readonly conditions: string;
 }
 
@@ -56,7 +56,7 @@ function series(tree: CollectionTree, nodes: readonly MeasurementNode[], paramet
   const { members, leftOut, frame } = usualSeries([...byResult.keys()], parameter, subject);
   return {
     members: members.map((result) => byResult.get(result)!),
-    leftOut: leftOut.map(({ result, reason }) => ({ measurement: byResult.get(result)!, reason })),
+    leftOut: leftOut.map(({ result, kind, reason }) => ({ measurement: byResult.get(result)!, kind, reason })),
     conditions: conditionWords(frame.phase, frame.temperature.near, temperatureReach, frame.temperature.orNotRecorded),
   };
 }

@@ -3,11 +3,15 @@ import { conditions } from './conditions.ts';
 import { type PlaceOnDiagram, placeOnDiagram } from './diagram.ts';
 import { type MeasurementMeaning, measurementMeaning } from './measurementMeaning.ts';
 import { type MeasurementRead, measurementRead } from './measurementRead.ts';
+import { type Rivals, measurementRivals } from './measurementRivals.ts';
+import { type MeasurementSure, measurementSure } from './measurementSure.ts';
 import { type Neighbours, neighbours } from './neighbours.ts';
-import { complexPath, ionPath, ligandPath } from './paths.ts';
+import { cautionPath, complexPath, ionPath, ligandPath, otherwisePath } from './paths.ts';
+import { type Placements, placements } from './placements.ts';
+import { type Quote, quotes } from './quotes.ts';
 import { groupBy } from './group.ts';
 import { listed, parameterShown } from './show.ts';
-import { type Origin, type Quote, measurementOrigin, quotes } from './origin.ts';
+import { type Origin, measurementOrigin } from './origin.ts';
 import { type Table, column, quantity, rowColumn, soft, words } from './table.ts';
 import type { CollectionTree, ComplexNode, MeasurementNode } from './tree.ts';
 import { type FormulaShown, type Parts, configuration, sentenceShown } from './typeset.ts';
@@ -18,6 +22,10 @@ export interface MeasurementShown {
   readonly sample: string | null;
   readonly read: MeasurementRead;
   readonly meaning: MeasurementMeaning;
+  readonly sure: MeasurementSure;
+  readonly rivals: Rivals | null;
+  /** The compare page opened with these bands; null where the engine does not fit the geometry. */
+  readonly otherwise: string | null;
   readonly origin: Origin;
   readonly notes: string | null;
 }
@@ -27,7 +35,7 @@ export interface ComplexPage {
   readonly formula: FormulaShown;
   readonly name: string;
   readonly description: string;
-  readonly hazards: readonly { readonly code: string; readonly name: string; readonly text: string; readonly foundIn: string | null }[];
+  readonly hazards: readonly { readonly code: string; readonly path: string; readonly name: string; readonly text: string; readonly foundIn: string | null }[];
   /** What all hazard cautions of the complex end with, said once. */
   readonly hazardAdvice: string;
   readonly hazardOverrides: readonly { readonly code: string; readonly reason: string }[];
@@ -39,13 +47,12 @@ export interface ComplexPage {
   readonly summary: Table | null;
   readonly measurements: readonly MeasurementShown[];
   /** Spectral cautions, each once; `where` names the measurements where not all have it. */
-  readonly cautions: readonly { readonly code: string; readonly text: Parts; readonly where: string | null }[];
+  readonly cautions: readonly { readonly code: string; readonly path: string; readonly text: Parts; readonly where: string | null }[];
   readonly neighbours: Neighbours;
+  readonly placements: Placements;
   readonly diagram: PlaceOnDiagram | null;
   readonly quotes: readonly Quote[];
   readonly record: { readonly file: string; readonly hash: string };
-  /** Each measurement's result as one would write it. */
-  readonly sentences: readonly Parts[];
   readonly citation: Parts;
   readonly report: { readonly text: string; readonly address: string | null };
 }
@@ -66,9 +73,8 @@ export function complexPage(tree: CollectionTree, complex: ComplexNode): Complex
     })),
     notes: row.notes, summary: summary(complex),
     measurements: complex.measurements.map((measurement) => measurementShown(tree, measurement)),
-    cautions: cautions(complex), neighbours: neighbours(tree, complex), diagram: placeOnDiagram(tree, complex), quotes: quotes(tree, complex),
+    cautions: cautions(complex), neighbours: neighbours(tree, complex), placements: placements(complex), diagram: placeOnDiagram(tree, complex), quotes: quotes(tree, complex),
     record: { file: row.file, hash: row.hash },
-    sentences: complex.measurements.filter(({ chosen }) => chosen.row.sentence !== '').map(({ chosen }) => sentenceShown(chosen.row.sentence)),
     citation: citation(tree, complex), report: report(tree, complex),
   };
 }
@@ -97,13 +103,13 @@ function hazards({ hazards: rows }: ComplexNode): Pick<ComplexPage, 'hazards' | 
     shared.unshift(sentences[0]!.at(-1)!);
     for (const list of sentences) list.pop();
   }
-  return { hazards: rows.map(({ code, found_in }, index) => ({ code, name: sentences[index]![0] ?? code, text: sentences[index]!.slice(1).join(' '), foundIn: found_in })), hazardAdvice: shared.join(' ') };
+  return { hazards: rows.map(({ code, found_in }, index) => ({ code, path: cautionPath(code), name: sentences[index]![0] ?? code, text: sentences[index]!.slice(1).join(' '), foundIn: found_in })), hazardAdvice: shared.join(' ') };
 }
 
 function cautions({ measurements }: ComplexNode): ComplexPage['cautions'] {
   const each = measurements.flatMap((measurement) => measurement.chosen.cautions.map(({ code, text }) => ({ code, text, id: measurement.row.id })));
   return [...groupBy(each, ({ code, text }) => `${code} ${text}`).values()].map((same) => ({
-    code: same[0]!.code, text: sentenceShown(same[0]!.text), where: same.length === measurements.length ? null : listed(same.map(({ id }) => id)),
+    code: same[0]!.code, path: cautionPath(same[0]!.code), text: sentenceShown(same[0]!.text), where: same.length === measurements.length ? null : listed(same.map(({ id }) => id)),
   }));
 }
 
@@ -125,6 +131,8 @@ function measurementShown(tree: CollectionTree, measurement: MeasurementNode): M
   return {
     id: row.id, heading: conditions(measurement), sample: row.sample, notes: row.notes,
     read: measurementRead(measurement, row.id), meaning: measurementMeaning(measurement, row.id),
+    sure: measurementSure(measurement), rivals: measurementRivals(measurement, row.id),
+    otherwise: measurement.complex.row.fitted === 1 && measurement.bands.length > 0 ? otherwisePath(row.complex, row.id) : null,
     origin: measurementOrigin(tree, measurement),
   };
 }

@@ -19,7 +19,8 @@ export interface FigureShown {
 
 /** A figure that is also published as files, with its numbers at full precision. */
 export interface PublishedFigure extends FigureShown {
-  readonly csv: string;
+  /** null: the numbers stand in the file of another figure, of which this is a further part. */
+  readonly csv: string | null;
 }
 
 /** Id of the picture of a series figure on the series page. */

@@ -1,6 +1,10 @@
-import { type BandKind, freeIonSets, hazardCodes } from '#engine';
+import {
+  type BandKind, disagreesFrom, distinguishableAbove, equalWithin, fewestSpare, freeIonSets, publishedFactorsFromMemory, publishedFactorsSource, reviewAbove, roomTemperature,
+  strainedBelow, temperatureReach, termSource,
+} from '#engine';
 import { bandStrip } from '../charts/strip.ts';
-import { sentenceShown } from './typeset.ts';
+import { absorptivityTable, defaultUncertaintyTable, evidenceTable } from './evidenceTables.ts';
+import { floorFactorTable, overrideTable, policyTable } from './policyTables.ts';
 import { energy, ratio } from './show.ts';
 import { type Cell, type Table, column, longColumn, quantity, rowColumn, soft } from './table.ts';
 import type { CollectionTree } from './tree.ts';
@@ -9,44 +13,51 @@ export interface MethodsPage {
   readonly policyName: string;
   readonly policyId: string;
   readonly policy: Table;
+  readonly overrides: Table | null;
+  readonly floors: Table | null;
+  readonly fewestSpare: number;
+  readonly evidence: Table;
+  readonly absorptivity: Table;
+  readonly defaults: Table;
+  /** Limits that sentences name, as the engine has them. */
+  readonly limits: Readonly<Record<'strained' | 'equal' | 'distinguishable' | 'disagrees' | 'review' | 'temperature' | 'room' | 'margin', string>>;
   readonly freeIonSets: readonly { readonly name: string; readonly version: string; readonly description: string; readonly sources: readonly string[]; readonly inUse: boolean }[];
   readonly freeIons: Table;
   readonly strips: readonly { readonly name: string; readonly svg: string }[];
-  readonly hazardCodes: readonly string[];
-  readonly cautionsMet: Table;
+  readonly factors: { readonly source: string; readonly memory: string };
+  readonly sources: readonly { readonly what: string; readonly source: string }[];
 }
 
 export function methodsPage(tree: CollectionTree): MethodsPage {
   return {
-    policyName: tree.policy.name, policyId: tree.policy.id, policy: policyTable(tree),
+    policyName: tree.policy.name, policyId: tree.policy.id, policy: policyTable(tree), overrides: overrideTable(tree), floors: floorFactorTable(tree), fewestSpare,
+    evidence: evidenceTable(), absorptivity: absorptivityTable(), defaults: defaultUncertaintyTable(tree),
+    limits: {
+      strained: String(strainedBelow), equal: ratio(equalWithin, 0), distinguishable: COUNT[distinguishableAbove] ?? String(distinguishableAbove), disagrees: COUNT[disagreesFrom] ?? String(disagreesFrom),
+      review: COUNT[reviewAbove] ?? String(reviewAbove), temperature: `${temperatureReach} K`, room: `${roomTemperature} K`, margin: ratio(tree.policy.rival_margin, 0),
+    },
     freeIonSets: freeIonSets.map((set) => ({ ...set, inUse: set.name === tree.policy.free_ion_set })), freeIons: freeIonTable(tree),
-    strips: stripLegend(), hazardCodes, cautionsMet: cautionTable(tree),
+    strips: stripLegend(), factors: { source: publishedFactorsSource, memory: publishedFactorsFromMemory }, sources: SOURCES,
   };
 }
 
-function policyTable({ policy }: CollectionTree): Table {
-  const perIon = Object.entries(JSON.parse(policy.C_over_B_per_ion) as Record<string, { value: number; u: number }>);
-  const percent = (fraction: number): string => `${ratio(100 * fraction, Number.isInteger(100 * fraction) ? 0 : 1)} %`;
-  const row = (name: string, value: string): readonly Cell[] => [name, value];
-  return {
-    caption: 'The policy in force', columns: [rowColumn('Choice'), column('Value')],
-    rows: [
-      row('C/B where C is not fitted', energy(policy.C_over_B, policy.C_over_B_u)),
-      ...perIon.map(([ion, { value, u }]) => row(`C/B for ${ion}`, energy(value, u))),
-      row('Model floor, general', `${energy(policy.floor_general, null)} cm⁻¹`), row('Model floor, spin-flip lines', `${energy(policy.floor_spin_flip, null)} cm⁻¹`),
-      row('Model floor, two-electron bands', `${energy(policy.floor_two_electron, null)} cm⁻¹`),
-      row('Ceiling on u/value of Δ, B, C', [policy.ceiling_Delta, policy.ceiling_B, policy.ceiling_C].map(percent).join(', ')),
-      row('Differential floor of Δ, B', `${energy(policy.differential_Delta, null)} cm⁻¹, ${percent(policy.differential_B)}`),
-      row('Free-ion set', policy.free_ion_set), row('Margin within which a rival reading is near', ratio(policy.rival_margin, 0)),
-      row('u assumed for a maximum, a line', `${energy(policy.default_u_maximum, null)} cm⁻¹, ${energy(policy.default_u_line, null)} cm⁻¹`),
-    ],
-  };
-}
+const COUNT: Readonly<Record<number, string>> = { 1: 'one', 2: 'two', 3: 'three' };
+
+const SOURCES: MethodsPage['sources'] = [
+  { what: 'Two-electron integrals and Racah’s A, B, C', source: 'G. Racah, Phys. Rev. 62, 438 (1942); E. U. Condon and G. H. Shortley, The Theory of Atomic Spectra' },
+  { what: 'Printed matrices, held against the derived blocks', source: 'Y. Tanabe and S. Sugano, J. Phys. Soc. Jpn. 9, 753 and 766 (1954)' },
+  { what: 'Free-ion terms of the set “atomic-levels”', source: termSource },
+  { what: 'Average environment, f, g, h and k', source: publishedFactorsSource },
+  { what: 'Uncertainties and their notation', source: 'JCGM 100:2008 (GUM), 4.3.7 (rounded readings), 5.1 and 5.2 (propagation), 7.2.2 and 7.2.6 (concise notation)' },
+  { what: 'Formulas and names', source: 'IUPAC, Nomenclature of Inorganic Chemistry, Recommendations 2005' },
+  { what: 'Default uncertainties, usual absorption coefficients and widths, hazard classes, directions of trends', source: 'common practice, no source' },
+  { what: 'Model floors, evidence weights, ceilings', source: 'our own choice; the floors from fits to published spectra (computed for this project)' },
+];
 
 function freeIonTable(tree: CollectionTree): Table {
   return {
     caption: 'Free ions of this collection',
-    columns: [rowColumn('Ion'), column('Set'), quantity('B₀', 'cm-1'), quantity('C₀', 'cm-1'), column('How obtained')],
+    columns: [rowColumn('Ion'), column('Set'), quantity('B₀', 'cm-1'), quantity('C₀', 'cm-1'), longColumn('How obtained')],
     rows: tree.ions.flatMap(({ name }) => tree.freeIons.filter((row) => row.ion === name)).map((row): readonly Cell[] => [
       row.ion, row.set_name, energy(row.B0, null), row.C0 === null ? soft('none in this set') : energy(row.C0, null), row.kind,
     ]),
@@ -67,17 +78,4 @@ function stripLegend(): MethodsPage['strips'] {
     })),
     { name: 'solid line: scanned; dotted line: not looked at; open bar: looked, and no band', svg: bandStrip({ bands: [], scanned: base.scanned, absent: [{ low: 27000, high: 33000 }] }, 'scanned, not looked at, and empty ranges', 'legend-ranges') },
   ];
-}
-
-/** Spectral cautions that occur in the collection, with how often. */
-function cautionTable(tree: CollectionTree): Table {
-  const met = new Map<string, { count: number; text: string }>();
-  for (const complex of tree.complexes) for (const measurement of complex.measurements) for (const { code, text } of measurement.chosen.cautions) {
-    met.set(code, { count: (met.get(code)?.count ?? 0) + 1, text: met.get(code)?.text ?? text });
-  }
-  return {
-    caption: 'Spectral cautions met in this collection, each with one wording',
-    columns: [rowColumn('Code'), quantity('measurements', null, true), longColumn('As worded once')],
-    rows: [...met].sort(([a], [b]) => (a < b ? -1 : 1)).map(([code, { count, text }]) => [code, ratio(count, 0), { parts: sentenceShown(text) }]),
-  };
 }

@@ -1,7 +1,7 @@
-import { NOT_RECORDED, difference, parameterShown, plainNumber } from './show.ts';
+import { NOT_RECORDED } from './show.ts';
 import type { SourceRow } from './rows.ts';
 import { words } from './table.ts';
-import type { CollectionTree, ComplexNode, MeasurementNode } from './tree.ts';
+import type { CollectionTree, MeasurementNode } from './tree.ts';
 import { type Parts, formulaShown } from './typeset.ts';
 
 export interface Origin {
@@ -39,31 +39,3 @@ export function sourceAddress({ doi, url }: SourceRow): string | undefined {
   if (doi !== null) return `https://doi.org/${doi}`;
   return url !== null && /^https?:\/\//.test(url) ? url : undefined;
 }
-
-/** A parameter as printed elsewhere against the refitted one. */
-export interface Quote {
-  readonly parameter: string;
-  readonly typed: string;
-  readonly refitted: string;
-  readonly difference: string | null;
-  readonly source: string;
-  readonly address: string | undefined;
-}
-
-export function quotes(tree: CollectionTree, { measurements }: ComplexNode): readonly Quote[] {
-  return measurements.flatMap((measurement) => measurement.quoted.map((row): Quote => {
-    const source = tree.sources.get(row.source);
-    const own = row.parameter === 'Dq' ? measurement.chosen.parameters.Delta : measurement.chosen.parameters[row.parameter as 'Delta'];
-    const printed = row.parameter === 'Dq' ? 10 * row.value : row.value;
-    const { total } = parameterShown(own);
-    return {
-      parameter: row.parameter === 'Dq' ? 'Dq (Δ/10)' : SYMBOL[row.parameter] ?? row.parameter, typed: row.typed,
-      refitted: total.text ?? `withheld: ${total.reason}`,
-      difference: own.value === null ? null : row.parameter === 'beta' ? plainNumber(printed - own.value, 2) : difference(printed - own.value),
-      source: `${source?.reference ?? row.source}${row.source_place ? `, ${row.source_place}` : ''}`,
-      address: source === undefined ? undefined : sourceAddress(source),
-    };
-  }));
-}
-
-const SYMBOL: Readonly<Record<string, string>> = { Delta: 'Δ', B: 'B', C: 'C', beta: 'β' };

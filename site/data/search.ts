@@ -1,37 +1,79 @@
-import { type CompactBand, type CompactCollection, KINDS } from '../client/compact.ts';
-import { collectionPage, orderedResults, resultRowOf } from './collection.ts';
-import type { CollectionTree, MeasurementNode } from './tree.ts';
+import { digits, signedDigits } from '../client/collection/digits.ts';
+import { type PackedSearch, bandUnit, deltaUnit, heldLigands, usualFormula } from '../client/collection/packed.ts';
+import { collectionPage, orderedResults } from './collection.ts';
 import { groupBy } from './group.ts';
+import type { CollectionTree, ComplexNode } from './tree.ts';
 
 /** What the search in the page reads, in the order of the book. */
-export function searchData(tree: CollectionTree): CompactCollection {
-  const verdicts = [...new Set(tree.complexes.flatMap((complex) => complex.measurements.map((measurement) => measurement.chosen.row.verdict)))].sort();
+export function searchData(tree: CollectionTree): PackedSearch {
+  const [words, word] = places<string>();
+  const [sets, set] = places<readonly number[]>();
+  const [states, state] = places<PackedSearch['states'][number]>();
+  const [circumstances, circumstance] = places<PackedSearch['circumstances'][number]>();
+  const [outcomes, outcome] = places<PackedSearch['outcomes'][number]>();
   const ionPlace = new Map(tree.ions.map((row, place) => [row.name, place]));
   const ligandPlace = new Map(tree.ligands.map((row, place) => [row.id, place]));
-  const byComplex = groupBy(orderedResults(tree), (measurement) => measurement.complex);
+  const racahB0 = new Map(tree.freeIons.filter((row) => row.set_name === tree.policy.free_ion_set).map((row) => [row.ion, row.B0]));
+  const byComplex = [...groupBy(orderedResults(tree), (measurement) => measurement.complex)];
+  const complexes = byComplex.map(([complex]) => complex);
+  const rows = byComplex.flatMap(([, measurements]) => measurements);
+  const deltas = rows.map(({ chosen }) => Math.round((chosen.parameters.Delta.value ?? 0) / deltaUnit));
+  const ligands = tree.ligands.map((row) => ({
+    name: row.name, formula: row.formula, abbreviation: row.abbreviation, synonyms: JSON.parse(row.synonyms) as string[], donors: JSON.parse(row.donors) as string[], charge: row.charge,
+  }));
+  const kindKey = (complex: ComplexNode): KindKey => {
+    const held = complex.ligands.flatMap(({ row: link }) => [ligandPlace.get(link.ligand)!, link.count]);
+    const usual = usualFormula(complex.ion, heldLigands(held, ligands)) === complex.row.formula;
+    return { set: set(held), isomer: word(complex.row.isomer), tail: complex.row.id.slice(headOf(complex.row.id).length), formula: usual ? null : complex.row.formula.replace(complex.ion.metal, '*') };
+  };
+  const keys = complexes.map(kindKey);
+  const kinds = [...new Map(keys.map((key) => [JSON.stringify(key), key])).entries()].sort(([, a], [, b]) => a.set - b.set || a.isomer - b.isomer || (a.tail < b.tail ? -1 : 1));
+  const kindPlace = new Map(kinds.map(([key], place) => [key, place]));
+  const packed: Pick<PackedSearch, 'kinds' | 'complexes' | 'rows'> = {
+    kinds: {
+      set: digits(kinds.map(([, key]) => key.set)), isomer: digits(kinds.map(([, key]) => key.isomer)), tail: kinds.map(([, key]) => key.tail).join(' '),
+      formula: kinds.flatMap(([, { formula }], place) => formula === null ? [] : [[place, formula] as const]),
+    },
+    complexes: {
+      state: digits(complexes.map(({ row, ion }) => state([ionPlace.get(ion.name)!, word(row.geometry), word(row.spin ?? ''), headOf(row.id)]))),
+      kind: digits(keys.map((key) => kindPlace.get(JSON.stringify(key))!)),
+      rows: digits(byComplex.map(([, measurements]) => measurements.length)),
+      names: complexes.flatMap(({ row }, place) => row.name === null ? [] : [[place, row.name] as const]),
+    },
+    rows: {
+      circumstance: digits(rows.map(({ row }) => circumstance([word(row.id), word(row.phase), word(row.medium ?? row.host ?? '')]))),
+      outcome: digits(rows.map(({ chosen, bands }) => outcome([word(chosen.row.verdict), chosen.parameters.C.standing === 'fitted' ? 1 : 0, chosen.parameters.beta.value === null ? 0 : 1, bands.length]))),
+      deltaStep: signedDigits(deltas.map((delta, place) => delta - (deltas[place - 1] ?? 0))), racahB: digits(rows.map(({ chosen }) => Math.round(chosen.parameters.B.value ?? 0))),
+      bands: digits(rows.flatMap(({ bands }) => bands.map(({ position }) => Math.round(position / bandUnit)))),
+    },
+  };
   return {
-    counts: collectionPage(tree, 1).counts,
-    words: verdicts,
-    ions: tree.ions.map(({ name, metal, oxidation }) => ({ name, metal, oxidation })),
-    ligands: tree.ligands.map((row) => ({
-      name: row.name, formula: row.formula, abbreviation: row.abbreviation, synonyms: JSON.parse(row.synonyms) as string[], donors: JSON.parse(row.donors) as string[],
-    })),
-    complexes: [...byComplex].map(([complex, measurements]) => [
-      complex.row.id, complex.row.formula, complex.row.isomer, complex.row.charge, ionPlace.get(complex.ion.name)!,
-      complex.ligands.map(({ row }) => [ligandPlace.get(row.ligand)!, row.count]),
-      [complex.row.name, complex.row.geometry, complex.row.spin].filter((text) => text !== null),
-      measurements.map((measurement) => compactRow(measurement, verdicts)),
-    ]),
+    counts: collectionPage(tree, 1).counts, ligands, ions: tree.ions.map(({ name, metal, oxidation, electrons }) => ({ name, metal, oxidation, electrons, racahB0: racahB0.get(name) ?? null })),
+    ...packed, words: words(), sets: sets(), states: states(), circumstances: circumstances(), outcomes: outcomes(),
   };
 }
 
-function compactRow(measurement: MeasurementNode, verdicts: readonly string[]): CompactCollection['complexes'][number][7][number] {
-  const row = resultRowOf(measurement);
-  const whole = (ranges: readonly { readonly low: number; readonly high: number }[]): (readonly [number, number])[] => ranges.map(({ low, high }) => [Math.round(low), Math.round(high)]);
-  return [
-    row.measurement, row.conditions, row.delta ?? 0, row.racahB ?? 0, row.beta ?? 0, verdicts.indexOf(row.verdict), whole(row.strip.scanned), whole(row.strip.absent),
-    row.strip.bands.map((band): CompactBand => [
-      Math.round(band.position), KINDS.indexOf(band.kind), band.side === 'higher' ? 1 : band.side === 'lower' ? -1 : 0, band.fitted ? 1 : 0, Math.round(band.width ?? 0),
-    ]),
-  ];
+interface KindKey {
+  readonly set: number;
+  readonly isomer: number;
+  readonly tail: string;
+  readonly formula: string | null;
+}
+
+/** An id up to its first hyphen, which is often the ion. */
+const headOf = (id: string): string => /^[^-]*/.exec(id)![0];
+
+/** A list that grows by each new value, and the place of a value in it. */
+function places<Value>(): readonly [all: () => readonly Value[], place: (value: Value) => number] {
+  const known = new Map<string, number>();
+  const all: Value[] = [];
+  return [() => all, (value) => {
+    const key = JSON.stringify(value);
+    const place = known.get(key) ?? all.length;
+    if (place === all.length) {
+      known.set(key, place);
+      all.push(value);
+    }
+    return place;
+  }];
 }

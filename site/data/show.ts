@@ -47,7 +47,11 @@ export interface ParameterShown {
   readonly unit: string;
   readonly total: Shown;
   readonly own: Shown;
+  /** Limits of one total standard uncertainty where the curve is not parabolic: "503 to 595". */
+  readonly limits: string | null;
   readonly standing: string;
+  /** What a number that is not withheld rests on. */
+  readonly restsOn: string | null;
 }
 
 const SYMBOLS: Readonly<Record<ParameterRow['name'], { readonly text: string; readonly unit: string }>> = {
@@ -58,8 +62,15 @@ export function parameterShown(row: ParameterRow): ParameterShown {
   const { text, unit } = SYMBOLS[row.name];
   return {
     name: row.name, symbol: [{ text, style: 'italic' }], unit, standing: row.standing,
-    total: parameterNumber(row, row.u_total), own: parameterNumber(row, row.u),
+    total: parameterNumber(row, row.u_total), own: parameterNumber(row, row.u), limits: profileLimits(row), restsOn: row.value === null ? null : row.reason,
   };
+}
+
+/** Limits carry the digits that the total uncertainty gives the value. */
+function profileLimits({ name, low, high }: ParameterRow): string | null {
+  if (low === null || high === null) return null;
+  const round = (value: number): string => name === 'beta' ? plain(value, 2, 'page') : plain(Math.abs(value) < 2000 ? value : 10 * Math.round(value / 10), 0, 'page');
+  return `${round(low)} to ${round(high)}`;
 }
 
 function parameterNumber({ value, reason }: ParameterRow, u: number | null): Shown {

@@ -5,7 +5,12 @@ import type { MeasurementNode } from './tree.ts';
 
 /** The measurement as the band strip draws it: bands that no transition of the chosen reading takes have a dotted stem. */
 export function stripRow(measurement: MeasurementNode): StripRow {
-  const assigned = new Set(measurement.chosen.transitions.flatMap((transition) => transition.bands.map((band) => band.number)));
+  return stripRowOf(measurement, measurement.chosen.transitions.flatMap((transition) => transition.bands.map((band) => band.number)));
+}
+
+/** The same for any reading. @param fitted numbers of the bands that the reading takes */
+export function stripRowOf(measurement: MeasurementNode, fitted: readonly number[]): StripRow {
+  const assigned = new Set(fitted);
   return {
     bands: measurement.bands.map((band) => ({
       position: band.position, kind: band.kind as BandKind, side: band.side, width: band.width, fitted: assigned.has(band.number),

@@ -38,22 +38,30 @@ export function configuration(electrons: number): Parts {
   return [{ text: 'd', style: 'plain' }, { text: String(electrons), style: 'super' }];
 }
 
-const INLINE = /(?<![\w[(])([a-j]?[1-6](?:A1|A2|E|T1|T2)g?(?:\/[a-j]?[1-6](?:A1|A2|E|T1|T2)g?)?(?:\([SPDFGHI]'{0,2}\))?)(?![\w])|\b(Delta|beta)\b/g;
+const INLINE = /(?<![\w[])([a-j]?[1-6](?:A1|A2|E|T1|T2)g?(?:\/[a-j]?[1-6](?:A1|A2|E|T1|T2)g?)?(?:\([SPDFGHI]'{0,2}\))?)(?![\w])|\b(Delta|beta)\b|(?<![\w.–−-])([BC])(?=₀?(?:[ ,;:)/]|\.(?: |$)|$))/g;
 const GREEK: Readonly<Record<string, string>> = { Delta: 'Δ', beta: 'β' };
 
-/** A stored sentence with its term labels and symbols typeset. */
-export function sentenceShown(text: string): Parts {
+/** A stored sentence with its term labels and symbols typeset; numbers do not break, nor from their unit. */
+export function sentenceShown(stored: string): Parts {
+  const text = stored.replaceAll('\u2009', '\u202f').replaceAll(' cm⁻¹', '\u00a0cm⁻¹');
   const parts: TextPart[] = [];
   let reached = 0;
   for (const found of text.matchAll(INLINE)) {
     if (found.index > reached) parts.push({ text: text.slice(reached, found.index), style: 'plain' });
-    const [whole, term, symbol = ''] = found;
-    if (term === undefined) parts.push({ text: GREEK[symbol]!, style: 'italic' });
+    const [whole, term, symbol, letter = ''] = found;
+    if (term === undefined) parts.push({ text: symbol === undefined ? letter : GREEK[symbol]!, style: 'italic' });
     else parts.push(...termParts(term));
     reached = found.index + whole.length;
   }
   if (reached < text.length) parts.push({ text: text.slice(reached), style: 'plain' });
   return parts;
+}
+
+/**
+ * A stored sentence as plain text to paste: symbols as letters of their alphabet, term labels in letter form, ordinary spaces.
+ */
+export function sentenceText(text: string): string {
+  return text.replace(/\b(Delta|beta)\b/g, (name) => GREEK[name]!).replace(/[\u2009\u202f\u00a0]/g, ' ');
 }
 
 const LOW: Readonly<Record<string, string>> = Object.fromEntries([...'0123456789'].map((digit, index) => [digit, '₀₁₂₃₄₅₆₇₈₉'[index]!]));

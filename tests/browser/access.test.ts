@@ -96,6 +96,15 @@ test('a complex with one measurement prints on two pages at most', async () => {
   await page.context().close();
 });
 
+test('a complex with more measurements takes at most one sheet more for each', async () => {
+  const { page } = await watchedPage(browser, site);
+  await page.goto(`${site.address}complexes/cr-aq6/`);
+  expect(await page.locator('main > section').count()).toBe(2);
+  const printed = (await page.pdf({ format: 'A4', preferCSSPageSize: true })).toString('latin1');
+  expect(printed.match(/\/Type \/Page\b(?!s)/g)!.length).toBeLessThanOrEqual(3);
+  await page.context().close();
+});
+
 test('the hazard caution stands above the data on screen and on paper', async () => {
   const { page } = await watchedPage(browser, site);
   for (const media of ['screen', 'print'] as const) {

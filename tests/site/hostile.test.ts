@@ -27,9 +27,9 @@ test('hostile text in records stays text in rows drawn at build and in the page'
 test('hostile text stays text in figures and typeset parts', () => {
   for (const complex of tree.complexes) {
     const page = complexPage(tree, complex);
-    for (const { read, meaning } of page.measurements) {
+    for (const { read, meaning, sure } of page.measurements) {
       expect(elements(read.strip!.svg)).toEqual([]);
-      expect(elements(partsMarkup(meaning.reason))).toEqual([]);
+      expect(elements(partsMarkup(sure.reason))).toEqual([]);
       if (meaning.scheme) expect(elements(meaning.scheme.svg)).toEqual([]);
     }
   }

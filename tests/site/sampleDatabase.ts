@@ -2,6 +2,7 @@ import { existsSync, mkdirSync, readFileSync, rmSync } from 'node:fs';
 import { dirname, resolve } from 'node:path';
 import Database from 'better-sqlite3';
 import { type Geometry, levels } from '#engine';
+import { putDetails } from './sampleDetails.ts';
 
 /** One invented measurement of the sample; bands are made from the parameters and lie `shift` above the calculated levels. */
 interface Sample {
@@ -62,6 +63,7 @@ export function writeSampleDatabase(file: string, options: { readonly complexes?
     if (B0 !== null) put('free_ion', { set_name: 'published', ion: name, B0, C0: 4.5 * B0, kind: 'as printed', source: 'Joergensen via Jolly, Modern Inorganic Chemistry' });
   }
   for (const sample of options.complexes === false ? [] : SAMPLES) putComplex(put, sample, hostile);
+  if (options.complexes !== false) putDetails(put, (sql) => { database.exec(sql); });
   put('release', { id: '2026.1', doi: null, licence: 'CC-BY-4.0', policy: 'sample-0123abcd', complexes: SAMPLES.length, measurements: SAMPLES.length + 1 });
   database.close();
   return file;

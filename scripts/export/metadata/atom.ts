@@ -22,7 +22,8 @@ export function changesFeed(publication: Publication, releases: readonly FeedRel
   const page = `${address}changes/`;
   const entries = releases.length === 0
     ? [entry(page, `${page}#started`, 'The collection was started', started, 'No release has been frozen yet.')]
-    : [...releases].reverse().map(({ id, date, who, cause, changes }) => entry(page, `${page}#release-${id}`, `Release ${id}`, date, told(who, cause, changes)));
+    : [...releases].reverse().map(({ id, date, who, cause, changes }, index) =>
+      entry(page, `${page}#release-${id}`, `Release ${id}`, date, told(who, cause, index === releases.length - 1 ? null : changes)));
   return `${xmlStart}${element('feed', { xmlns: 'http://www.w3.org/2005/Atom', 'xml:lang': 'en-GB' }, [
     element('id', {}, page),
     element('title', {}, `Changes: ${title}`),
@@ -43,10 +44,15 @@ function entry(page: string, id: string, title: string, date: string, content: s
   ]);
 }
 
-function told(who: string, cause: string, changes: readonly string[]): string {
+function told(who: string, cause: string, changes: readonly string[] | null): string {
+  if (changes === null) return `${sentence(cause)} Released by ${who}. It is the first release.`;
   const rest = changes.length - mostTold;
   const list = changes.length === 0 ? 'No number changed.' : `${changes.slice(0, mostTold).join(' ')}${rest > 0 ? ` And ${rest} more.` : ''}`;
-  return `${cause} Released by ${who}. ${list}`;
+  return `${sentence(cause)} Released by ${who}. ${list}`;
+}
+
+function sentence(text: string): string {
+  return /[.!?]$/.test(text) ? text : `${text}.`;
 }
 
 function instant(date: string): string {

@@ -23,7 +23,7 @@ export function citationCff(publication: Publication): string {
       return [...lines, ...(orcid === null ? [] : [`orcid: ${quoted(`https://orcid.org/${orcid}`)}`])].map((line, index) => `${index === 0 ? '  - ' : '    '}${line}`);
     }),
     `version: ${quoted(versionCode(publication))}`,
-    `date-released: ${date}`,
+    `date-released: ${quoted(date)}`,
     `license: ${quoted(licence)}`,
     `url: ${quoted(address)}`,
     ...(doi === null ? [] : [`doi: ${quoted(doi)}`]),

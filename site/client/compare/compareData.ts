@@ -49,7 +49,11 @@ const NUMBERS = ['Delta', 'B', 'C', 'beta'] as const;
 /** Packs the results of a collection. */
 export function packResults(results: readonly SeriesResult[], ligands: readonly { readonly id: string }[], ions: readonly Ion[]): Pick<PackedCollection, 'words' | 'complexes' | 'results'> {
   const words = new Map<string, number>();
-  const word = (text: string): number => words.get(text) ?? (words.set(text, words.size), words.size - 1);
+  const word = (text: string): number => {
+    const place = words.get(text) ?? words.size;
+    words.set(text, place);
+    return place;
+  };
   const ligandPlace = new Map(ligands.map(({ id }, place) => [id, place]));
   const ionPlace = new Map(ions.map(({ name }, place) => [name, place]));
   const complexPlace = new Map<string, number>();

@@ -112,7 +112,7 @@ describe('read back by the reader of records', () => {
   it('any text comes back as it was given, whatever marks it holds', () => {
     const marks = fc.constantFrom('#', ' # ', ': ', ':', ',', '{', '}', '[', ']', '"', "'", '\\', '&', '*', '!', '|', '>', '@', '%', '`', '- ', '? ', '~', '\n', '\t', '\u00a0', '\u2028', '\ufeff', '±', '−', 'é', '²', 'null', 'no', '1E3', '---', '...', '<<');
     const text = fc.array(fc.oneof(marks, fc.string({ maxLength: 6 }), fc.string({ unit: 'grapheme', maxLength: 4 })), { minLength: 1, maxLength: 6 })
-      .map((parts) => parts.join('').toWellFormed().trim()).filter((one) => one !== '');
+      .map((parts) => parts.join('').replace(/[\ud800-\udfff]/gu, '').trim()).filter((one) => one !== '');
     const optional = fc.option(text, { nil: undefined });
     const record = fc.record({
       formula: text, name: optional, notes: optional, 'charge-note': optional,

@@ -61,7 +61,7 @@ describe.runIf(isDemonstration(demonstration))('beginning from the demonstration
 
   it('keeps what is not the demonstration as it came, and the sources that it cites', () => {
     writeFileSync(file('complexes/cr-am6.yaml'), text('complexes/cr-am6.yaml').replace('22140(100)', '22150(100)'));
-    writeFileSync(file('complexes/own.yaml'), text('complexes/co3-en3.yaml').replace(/ +quoted:[^]*?(?=  - id|$)/, ''));
+    writeFileSync(file('complexes/own.yaml'), text('complexes/co3-en3.yaml').replace(/ +quoted:[\s\S]*?(?= {2}- id|$)/, ''));
     writeFileSync(file('policy.yaml'), `${text('policy.yaml')}# ours\n`);
     const before = [text('complexes/cr-am6.yaml'), text('complexes/own.yaml'), text('policy.yaml')];
     const { code, stdout } = begin('--group', 'A', '--json');

@@ -43,6 +43,17 @@ describe('a build', { timeout: 120_000 }, () => {
     expect(readFileSync(join(site, 'data/collection.sqlite')).equals(readFileSync(join(first.path, 'a.sqlite')))).toBe(true);
   });
 
+  it('writes what machines look for at the top, and at most eight files a complex', () => {
+    for (const name of ['sitemap.xml', 'robots.txt', 'changes.xml', 'data/datapackage.json', 'data/SHA256SUMS', 'data/csv/band.csv']) expect([name, existsSync(join(site, name))]).toEqual([name, true]);
+    for (const id of readdirSync(join(site, 'complexes'))) {
+      const files = readdirSync(join(site, 'complexes', id));
+      expect(files).toEqual(expect.arrayContaining(['index.html', 'record.json', 'record.yaml', 'bands.csv', 'cite.bib', 'cite.ris']));
+      expect(files.length).toBeLessThanOrEqual(8);
+    }
+    const rebuilt = runScript('refit', ['--from-export', site, '--database', join(first.path, 'rebuilt.sqlite'), '--json']);
+    expect(JSON.parse(rebuilt.stdout)).toMatchObject({ ok: true, differences: [], sameBytes: true });
+  });
+
   it('links under the base path of the group\'s URL', () => {
     const page = readFileSync(join(site, 'complexes/cr-am6/index.html'), 'utf8');
     const links = [...page.matchAll(/\b(?:href|src)="(\/[^"]*)"/g)].map((match) => match[1]!);

@@ -59,7 +59,7 @@ test('the bands stand as typed beside cm-1 and nm; an assumed uncertainty is mar
 });
 
 test('a quoted value stands against the refitted one', () => {
-  expect(complexPage(tree, complex('cr-en3')).quotes).toEqual([expect.objectContaining({ parameter: 'Δ', typed: '21850 cm-1', difference: '\u221250' })]);
+  expect(complexPage(tree, complex('cr-en3')).quotes).toEqual([expect.objectContaining({ typed: '21850 cm-1', difference: '\u221250' })]);
 });
 
 test('the citation names group, collection, release, record and address, and invents no DOI', () => {

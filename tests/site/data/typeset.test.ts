@@ -15,7 +15,7 @@ test('text that is no formula stays as typed', () => {
 
 test('stored sentences get their term labels and symbols typeset and lose nothing', () => {
   expect(marked(sentenceShown('a1T2g, expected 27 400 to 32 200 cm⁻¹, would fix B; Delta and beta follow.')))
-    .toBe('<italic>a</italic><super>1</super>T<sub>2g</sub>, expected 27 400 to 32 200 cm⁻¹, would fix B; <italic>Δ</italic> and <italic>β</italic> follow.');
+    .toBe('<italic>a</italic><super>1</super>T<sub>2g</sub>, expected 27 400 to 32 200\u00a0cm⁻¹, would fix <italic>B</italic>; <italic>Δ</italic> and <italic>β</italic> follow.');
   for (const text of ['', '3A2g', 'no term here', '1Eg lies near 3T1g(P).', 'in K3[Cr(CN)6] at 80 K', 'x4A1g/4Eg y 4A1g/4Eg']) {
     const back = sentenceShown(text).map((part) => part.text).join('');
     expect(back.replaceAll(', ', '/'), text).toBe(text.replaceAll(', ', '/'));

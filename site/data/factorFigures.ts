@@ -1,0 +1,88 @@
+import { type Factor, type FactorFit, type FactorKind, type FactorSeries, type Geometry, type SeriesParameter, factorSeries, publishedFactor } from '#engine';
+import { newDocument } from '../charts/plot.ts';
+import { type SeriesPoint, seriesFigure, seriesRange } from '../charts/seriesFigure.ts';
+import { letterKey } from './diagram.ts';
+import { factorCsv, factorTable } from './factorTables.ts';
+import { type PublishedFigure, figureFiles } from './figure.ts';
+import { ligandName } from './ligandNames.ts';
+import { oncePerCollection } from './memo.ts';
+import { inParts } from './parts.ts';
+import { ROWS_A_FIGURE, bracketSentence, bracketsWithin } from './seriesFigures.ts';
+import { factorFitOf, geometries, seriesLigand } from './seriesFit.ts';
+import { counted } from './show.ts';
+import { type Column, quantity } from './table.ts';
+import type { CollectionTree } from './tree.ts';
+import type { Parts } from './typeset.ts';
+
+/** Letter and head of a factor: f, g, h or k. */
+export const FACTORS: Readonly<Record<SeriesParameter, Readonly<Record<FactorKind, { readonly letter: string; readonly head: Column }>>>> = {
+  Delta: { ligand: { letter: 'f', head: quantity('f', null) }, ion: { letter: 'g', head: quantity('g', 'cm-1') } },
+  beta: { ligand: { letter: 'h', head: quantity('h', null) }, ion: { letter: 'k', head: quantity('k', null) } },
+};
+
+/** Factors of one kind and island with what is printed of them elsewhere. */
+export interface FactorsShown {
+  readonly parameter: SeriesParameter;
+  readonly geometry: Geometry;
+  readonly kind: FactorKind;
+  readonly island: number;
+  readonly figures: readonly PublishedFigure[];
+}
+
+/** "Cr(III) octahedral quartet" without the geometry, which the title names. */
+export const ionWithoutGeometry = (name: string, geometry: Geometry): string => name.replace(` ${geometry}`, '');
+
+/** The printed value that stands beside a factor: of octahedral complexes counted from water alone, as the printed ones are. */
+export function printedBeside(tree: CollectionTree, fit: FactorFit, factor: Factor): number | null {
+  if (fit.islands.find(({ number }) => number === factor.island)?.gaugeIsAqua !== true) return null;
+  return publishedFactor(factor, fit.parameter, tree.ligands.map(seriesLigand));
+}
+
+/** Every figure of factors of the collection. An island of one ion and one ligand has nothing to order. */
+export const factorFigures = oncePerCollection((tree): readonly FactorsShown[] =>
+  geometries.flatMap((geometry) => (['Delta', 'beta'] as const).flatMap((parameter) => {
+    const fit = factorFitOf(tree, parameter, geometry);
+    return factorSeries(fit).filter(({ factors }) => factors.length >= 2).map((series) => shownFactors(tree, fit, series));
+  })));
+
+function shownFactors(tree: CollectionTree, fit: FactorFit, series: FactorSeries): FactorsShown {
+  const { parameter, geometry } = fit;
+  const { kind, island, factors, groups } = series;
+  const { letter, head } = FACTORS[parameter][kind];
+  const id = `factors-${letter}-${geometry}${island === 1 ? '' : `-island-${island}`}`;
+  const title = `${kind === 'ligand' ? 'Ligand' : 'Ion'} factors ${letter} of ${geometry} complexes${fit.islands.length > 1 ? `, island ${island}` : ''}`;
+  const points = factors.map((factor): SeriesPoint => ({
+    label: factorLabel(tree, factor, geometry), value: factor.value!, u: null, uTotal: factor.u, open: !factor.tested, beside: printedBeside(tree, fit, factor), note: String(factor.complexes),
+  }));
+  const letters = factors.map((_, place) => groups.flatMap(({ first, last }, index) => (first <= place && place <= last ? [letterKey(index)] : [])).join(', '));
+  const complexes = fit.islands.find(({ number }) => number === island)!.complexes;
+  const printed = points.filter(({ beside }) => beside != null).length;
+  const range = seriesRange(points);
+  const parts = inParts(factors, ROWS_A_FIGURE);
+  return {
+    parameter, geometry, kind, island,
+    figures: parts.map(({ rows, start }, index): PublishedFigure => {
+      const own = index === 0 ? id : `${id}-part-${index + 1}`;
+      const ownTitle = parts.length === 1 ? `${title}.` : `${title}, part ${index + 1} of ${parts.length}.`;
+      return {
+        id: own, title: ownTitle,
+        svg: seriesFigure(points.slice(start, start + rows.length), head.head, newDocument(), {
+          id: own, title: ownTitle, description: `${counted(rows.length, 'factor')} with error bars, from below in the order of the table under the figure.${printed > 0 ? ' Diamonds are printed values.' : ''}`,
+        }, { brackets: bracketsWithin(groups, start, rows.length), range, noteHead: [{ text: 'n', style: 'italic' }] }),
+        caption: [
+          `${counted(complexes, 'complex', 'complexes')}; n: those behind each factor. Bar: one standard uncertainty.`,
+          ...(points.some(({ open }) => open) ? ['Open circle: no spare complex tests it.'] : []),
+          ...(printed > 0 ? ['Diamond: printed by Jørgensen, drawn beside, never used in the fit.'] : []),
+          bracketSentence(groups),
+        ],
+        source: `This collection, policy ${tree.policy.id}.`,
+        table: factorTable(tree, fit, rows, letters.slice(start, start + rows.length)),
+        files: [figureFiles(own)[0]!, figureFiles(id)[1]!], csv: index === 0 ? factorCsv(tree, fit, series, letters) : null,
+      };
+    }),
+  };
+}
+
+export function factorLabel(tree: CollectionTree, { kind, name }: Pick<Factor, 'kind' | 'name'>, geometry: Geometry): Parts {
+  return [{ text: kind === 'ion' ? ionWithoutGeometry(name, geometry) : ligandName(tree, name), style: 'plain' }];
+}

@@ -1,0 +1,89 @@
+import { readFileSync } from 'node:fs';
+import { Ajv } from 'ajv';
+import { Ajv2020 } from 'ajv/dist/2020.js';
+import type { XmlElement } from './readXml.ts';
+
+function kept(name: string): unknown {
+  return JSON.parse(readFileSync(new URL(name, import.meta.url), 'utf8'));
+}
+
+/** What is wrong with a value under a kept schema, "path: message"; empty where nothing is. */
+export function problemsUnder(name: string, value: unknown): readonly string[] {
+  return problems(new Ajv({ allErrors: true, strict: false }), kept(name) as object, value);
+}
+
+/** The same under a schema of our own (2020-12). */
+export function problemsUnderOwn(schema: object, value: unknown): readonly string[] {
+  return problems(new Ajv2020({ allErrors: true, strict: false, validateFormats: false }), schema, value);
+}
+
+function problems(ajv: Pick<Ajv, 'compile'>, schema: object, value: unknown): readonly string[] {
+  const check = ajv.compile(schema);
+  check(value);
+  return (check.errors ?? []).map(({ instancePath, message }) => `${instancePath}: ${message}`);
+}
+
+interface Vocabulary {
+  readonly [type: string]: { readonly of: string | null; readonly properties: readonly string[]; readonly needs?: readonly string[] };
+}
+
+/** What schema.org, as kept, does not know in a JSON-LD value: types, properties of a type, properties that are missing. */
+export function jsonLdProblems(value: unknown): readonly string[] {
+  return walk(value, kept('schema-org.json') as Vocabulary, '');
+}
+
+function walk(value: unknown, vocabulary: Vocabulary, path: string): string[] {
+  if (Array.isArray(value)) return value.flatMap((item, index) => walk(item, vocabulary, `${path}[${index}]`));
+  if (typeof value !== 'object' || value === null) return value === null ? [`${path}: null`] : [];
+  const { '@type': type, ...rest } = value as Record<string, unknown>;
+  const known = typeof type === 'string' ? vocabulary[type] : undefined;
+  if (known === undefined) return [`${path}: no type "${String(type)}"`];
+  const allowed = new Set<string>();
+  for (let step: string | null = type as string; step !== null; step = vocabulary[step]!.of) for (const property of vocabulary[step]!.properties) allowed.add(property);
+  return [
+    ...(known.needs ?? []).filter((property) => !(property in rest)).map((property) => `${path}: ${String(type)} without ${property}`),
+    ...Object.entries(rest).flatMap(([property, inner]) => property.startsWith('@') ? [] : [
+      ...(allowed.has(property) ? [] : [`${path}: ${String(type)} has no property ${property}`]), ...walk(inner, vocabulary, `${path}.${property}`),
+    ]),
+  ];
+}
+
+interface ElementRule {
+  readonly needs?: readonly string[];
+  readonly may?: readonly string[];
+  readonly once?: boolean;
+  readonly ordered?: boolean;
+  readonly text?: string;
+  readonly attributes?: readonly string[];
+  readonly needsAttributes?: readonly string[];
+  readonly values?: Readonly<Record<string, readonly string[]>>;
+}
+
+/** What is wrong with an XML element under kept rules for elements. */
+export function elementProblems(name: string, root: XmlElement): readonly string[] {
+  const rules = kept(name) as { readonly root: string; readonly namespace: string; readonly elements: Readonly<Record<string, ElementRule>> };
+  const found = root.name === rules.root && root.attributes['xmlns'] === rules.namespace ? [] : [`the root is ${root.name} of ${root.attributes['xmlns']}`];
+  return [...found, ...ofElement(root, rules.elements)];
+}
+
+function ofElement(element: XmlElement, rules: Readonly<Record<string, ElementRule>>): string[] {
+  const rule = rules[element.name];
+  if (rule === undefined) return [`no element ${element.name}`];
+  const allowed = [...(rule.needs ?? []), ...(rule.may ?? [])];
+  const names = element.children.map(({ name }) => name);
+  const say = (what: string): string => `${element.name}: ${what}`;
+  return [
+    ...(rule.needs ?? []).filter((child) => !names.includes(child)).map((child) => say(`no ${child}`)),
+    ...names.filter((child) => !allowed.includes(child)).map((child) => say(`a ${child} within`)),
+    ...(rule.once === true && new Set(names).size !== names.length ? [say('an element twice')] : []),
+    ...(rule.ordered === true && names.some((child, index) => index > 0 && allowed.indexOf(child) < allowed.indexOf(names[index - 1]!)) ? [say('elements out of order')] : []),
+    ...(rule.text !== undefined && !new RegExp(`^(?:${rule.text})$`, 's').test(element.text) ? [say(`"${element.text}"`)] : []),
+    ...(rule.text === undefined && element.text !== '' ? [say('text between elements')] : []),
+    ...(rule.needsAttributes ?? []).filter((attribute) => !(attribute in element.attributes)).map((attribute) => say(`no ${attribute}`)),
+    ...Object.entries(element.attributes).flatMap(([attribute, value]) => [
+      ...((rule.attributes ?? []).includes(attribute) ? [] : [say(`an attribute ${attribute}`)]),
+      ...((rule.values?.[attribute] ?? [value]).includes(value) ? [] : [say(`${attribute} "${value}"`)]),
+    ]),
+    ...element.children.flatMap((child) => ofElement(child, rules)),
+  ];
+}

@@ -1,0 +1,54 @@
+import { afterAll, beforeAll, expect, test } from 'vitest';
+import { type ComparedCollection, measurementId, policyId } from '#engine';
+import { readStoredCollection } from '../../../scripts/compare/collection.ts';
+import { placeRecord } from '../../../scripts/compare/place.ts';
+import { readCollection } from '../../../scripts/content/readCollection.ts';
+import { places } from '../../../scripts/places.ts';
+import { type PackedCollection, unpackCollection } from '../../../site/client/compare/compareData.ts';
+import { readForm } from '../../../site/client/compare/readForm.ts';
+import { createReckoner } from '../../../site/client/compare/reckon.ts';
+import { formOfQuery, formOfRecord, formQuery } from '../../../site/client/compare/typedForm.ts';
+import { comparedCollection, comparedComplex } from '../../../site/data/compare.ts';
+import { readRows } from '../../../site/data/database.ts';
+import { type CollectionTree, collectionTree } from '../../../site/data/tree.ts';
+import { type Refitted, refittedDemonstration } from '../demonstration.ts';
+
+let demonstration: Refitted;
+let tree: CollectionTree;
+let packed: PackedCollection;
+beforeAll(() => {
+  demonstration = refittedDemonstration();
+  tree = collectionTree(readRows(demonstration.database));
+  packed = JSON.parse(JSON.stringify(comparedCollection(tree))) as PackedCollection;
+});
+afterAll(() => demonstration?.remove());
+
+test('the page compares with the very numbers that the command reads from the database', () => {
+  const command: ComparedCollection = readStoredCollection(demonstration.database).compared;
+  expect(unpackCollection(packed)).toEqual(command);
+  expect(packed.policyId).toBe(policyId(packed.policy));
+});
+
+test('every measurement of the collection, opened to be read otherwise, is read and placed to the same bits as by the command', () => {
+  const stored = readStoredCollection(demonstration.database);
+  const reckoner = createReckoner(packed);
+  const read = readCollection(places.content);
+  if (read.collection === null) throw new Error('the demonstration does not check');
+  let compared = 0;
+  for (const record of read.collection.complexes) {
+    const complex = comparedComplex(tree, tree.complexes.find(({ row }) => row.id === record.id)!);
+    const [command] = placeRecord({ ...record, measurements: record.measurements.slice(0, 1) }, stored).measurements;
+    if (command === undefined) continue;
+    // Through the address, as a reader shares it.
+    const form = formOfQuery(new URLSearchParams(formQuery(formOfRecord(complex.typed[0]!)).toString()));
+    const { measurement, identity, faults } = readForm(form, packed);
+    expect(faults, record.id).toEqual([]);
+    if (policyId(command.measurement.policy) !== packed.policyId) continue;
+    const { chosen } = reckoner.read(measurement!);
+    expect(chosen, record.id).toEqual(command.reading);
+    const placement = reckoner.place({ ...identity!, id: record.id, formula: record.formula }, command.measurement.id, measurement!, chosen, measurementId(command.placement.result));
+    expect(placement, record.id).toEqual(command.placement);
+    compared += 1;
+  }
+  expect(compared).toBeGreaterThan(60);
+});
