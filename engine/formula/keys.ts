@@ -52,7 +52,7 @@ function unique(list: readonly string[]): readonly string[] {
 }
 
 function spellings(ligand: SearchedLigand): readonly string[] {
-  const short = ligand.synonyms.filter((synonym) => groupWordOf(synonym) !== null && !/[a-z]{6}/.test(synonym));
+  const short = [...ligand.synonyms, ...otherLigandNames(ligand.name)].filter((synonym) => groupWordOf(synonym) !== null && !/[a-z]{6}/.test(synonym));
   return unique([ligand.formula.replace(/[\s^]*\d*[+\-−]$/, ''), ...(ligand.abbreviation === null ? [] : [ligand.abbreviation]), ...short]);
 }
 
@@ -90,7 +90,7 @@ export function formulaKeys(complex: SearchedComplex): FormulaKeys {
   const spelt = choices(spelled.map((texts, index) => texts.map((text) => numbered(text, ligands[index]?.count ?? 1))))
     .flatMap((row) => orders(row).map((order) => squeezed(metal + order.join(''))));
   const numeral = romanNumeral(complex.oxidation);
-  const ligandNames = ligands.map(({ name }) => [name, ...otherLigandNames(name)]);
+  const ligandNames = ligands.map(({ name, synonyms }) => [...new Set([name, ...otherLigandNames(name), ...synonyms.filter((synonym) => /[a-z]{4}/.test(synonym))])]);
   const names = choices(ligandNames).map((row) => {
     const named = row.map((name, index) => ({ name, count: ligands[index]?.count ?? 1 }));
     return squeezed(additiveName(metal, complex.metalName, numeral, named, complex.charge));

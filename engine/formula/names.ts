@@ -42,7 +42,7 @@ const older: readonly (readonly [string, string])[] = [
   ['fluorido', 'fluoro'], ['chlorido', 'chloro'], ['bromido', 'bromo'], ['iodido', 'iodo'], ['cyanido', 'cyano'],
   ['hydroxido', 'hydroxo'], ['oxido', 'oxo'], ['aqua', 'aquo'], ['aqua', 'water'], ['ammine', 'ammonia'],
   ['fluorido', 'fluoride'], ['chlorido', 'chloride'], ['bromido', 'bromide'], ['iodido', 'iodide'], ['cyanido', 'cyanide'], ['oxido', 'oxide'],
-  ['oxalato', 'oxalate'], ['ethane-1,2-diamine', 'ethylenediamine'], ["2,2'-bipyridine", 'bipyridyl'],
+  ['oxalato', 'oxalate'], ['ethane-1,2-diamine', 'ethylenediamine'], ["2,2'-bipyridine", 'bipyridyl'], ["2,2'-bipyridine", 'bipy'], ["2,2'-bipyridine", 'dipy'],
 ];
 
 /** Other names under which a ligand of this name may be looked for. */

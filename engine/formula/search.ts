@@ -48,6 +48,19 @@ function chargeOff(text: string): { readonly rest: string; readonly charge: numb
   return { rest: plain.slice(0, end.index + (end[1]?.length ?? 0)), charge: end[3] === '+' ? size : -size };
 }
 
+/**
+ * Charge of the complex by what stands outside its brackets, "K3[Fe(CN)6]" 3-, "[Cr(NH3)6]Cl3" 3+; null where nothing or something
+ * else stands there. Water of crystallisation does not count.
+ */
+function chargeByCounterIons(text: string): number | null {
+  const plain = folded(text).replace(/[<>/_{}]|sub|sup/g, '');
+  const before = /^(?:k|na|li|rb|cs|\(?nh4\)?)(\d?)\[/.exec(plain);
+  const after = /\](?:cl|br|i|\(?no3\)?|\(?clo4\)?|\(?bf4\)?|\(?pf6\)?)(\d?)(?:$|[·*.\s])/.exec(plain);
+  if ((before === null) === (after === null)) return null;
+  const count = Number((before ?? after)![1] || 1);
+  return before === null ? count : -count;
+}
+
 const roman = /^(i{1,3}|iv|vi{0,3})$/;
 
 /** Words of free text; a number behind a word is how often it stands there, "nh3 6". */
@@ -79,7 +92,7 @@ export function normaliseQuery(text: string): NormalisedQuery {
       squeezed: squeezed(plainFormula({ isomer: null, parts: [{ multiplier: 1, nodes }], charge: null })),
       formula: true,
       words: entityWords(formula).map((word) => ({ text: word, whole: true })),
-      charge: formula.charge,
+      charge: formula.charge ?? chargeByCounterIons(query),
       isomer: formula.isomer === null ? null : folded(formula.isomer),
     };
   }

@@ -43,8 +43,8 @@ export interface Diagonal {
   readonly vectors: Float64Array;
 }
 
-/** Work space by size of block. */
-const workspaces: Diagonal[] = [];
+/** Work space by size of block; no block has more than ten levels. */
+const workspaces: readonly Diagonal[] = Array.from({ length: 11 }, (_, size) => ({ energy: new Float64Array(size), vectors: new Float64Array(size * size) }));
 
 /**
  * Diagonalises one block for H = sign * delta * field + racahB * B + racahC * C.
@@ -57,7 +57,7 @@ const workspaces: Diagonal[] = [];
  */
 export function diagonalise(block: Block, sign: number, delta: number, racahB: number, racahC: number): Diagonal {
   const { size, field, racahB: matrixB, racahC: matrixC } = block;
-  const diagonal = (workspaces[size] ??= { energy: new Float64Array(size), vectors: new Float64Array(size * size) });
+  const diagonal = workspaces[size]!;
   const { energy, vectors } = diagonal;
   const signed = sign * delta;
   for (let i = 0; i < vectors.length; i++) vectors[i] = signed * field[i]! + racahB * matrixB[i]! + racahC * matrixC[i]!;

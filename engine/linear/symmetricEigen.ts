@@ -42,7 +42,8 @@ export function eigenInPlace(vectors: Float64Array, values: Float64Array, size: 
     vectors[0] = 1;
   } else if (size === 2) twoByTwo(vectors, values);
   else {
-    const beside = (besides[size] ??= new Float64Array(size));
+    besides[size] ??= new Float64Array(size);
+    const beside = besides[size];
     reduceToTridiagonal(vectors, values, beside, size);
     diagonaliseTridiagonal(vectors, values, beside, size);
     // A matrix with NaN looks diagonal to every comparison.

@@ -25,9 +25,17 @@ export const defaultPolicy: Policy = {
  * The name is not part of the digits, so that a renamed policy shows the same digits.
  */
 export function policyId(policy: Policy): string {
-  const { name, ...content } = policy;
-  return `${name}-${fnv1a(stableText(content)).toString(16).padStart(8, '0')}`;
+  let id = known.get(policy);
+  if (id === undefined) {
+    const { name, ...content } = policy;
+    id = `${name}-${fnv1a(stableText(content)).toString(16).padStart(8, '0')}`;
+    known.set(policy, id);
+  }
+  return id;
 }
+
+/** Policies are never changed in place, and every reading names the same one or two. */
+const known = new WeakMap<Policy, string>();
 
 /** JSON with the keys of every object in code-unit order. */
 function stableText(value: unknown): string {

@@ -27,7 +27,7 @@ export interface BoundNode {
   readonly scales: Float64Array;
   /** The same bound of the fits that leave spin-forbidden bands out. */
   readonly valuesOfSome: Float64Array;
-  /** Bands that keep the order, with the positions and transitions they were given. */
+  /** Bands that keep the order, and the transitions they were given. */
   readonly ordered: readonly Placed[];
   /** How many bands. */
   readonly assigned: number;
@@ -41,12 +41,14 @@ export interface BoundNode {
 }
 
 interface Placed {
-  readonly label: string;
   readonly position: number;
+  readonly transition: CellTransition;
 }
 
 /** A band with the transition it is given. */
-export interface Addition extends Placed {
+export interface Addition {
+  readonly label: string;
+  readonly position: number;
   /** u^2 + floor^2, the larger u. */
   readonly variance: number;
   readonly spinAllowed: boolean;
@@ -102,13 +104,13 @@ export function boundFor(ion: GroundCase, ratio: Estimate, forbidden: boolean, a
       const allowed = node.allowed + (band.spinAllowed ? 1 : 0);
       const forgivenSum = node.forgiven + (band.spinAllowed ? band.forgiven : 0);
       const forgiven = allowed <= 2 ? forgivenSum : 0;
-      const order = band.keepsOrder ? node.ordered.filter((one) => one.position !== band.position).map((one) => ({ isBelow: one.position < band.position, transition: cells.transition(one.label) })) : [];
+      const order = band.keepsOrder ? node.ordered : [];
       let count = 0;
       let least = Number.POSITIVE_INFINITY;
       let leastOfAll = Number.POSITIVE_INFINITY;
       for (let n = 0; n < node.cells.length; n++) {
         const i = node.cells[n]!;
-        if (breaksOrder(cells, i, own, order)) continue;
+        if (breaksOrder(cells, i, own, band.position, order)) continue;
         const at = count * stride;
         const atAllowed = at + stride - sumsACell;
         copySums(node.sums, n * stride, at, stride);
@@ -137,7 +139,7 @@ export function boundFor(ion: GroundCase, ratio: Estimate, forbidden: boolean, a
         cells: keptCells.slice(0, count), sums: keptSums.slice(0, count * stride), values: keptValues.slice(0, count),
         valuesOfSome: keptValuesOfSome.slice(0, count), scales: keptScales.slice(0, count),
         least, leastOfAll: forbidden ? leastOfAll : least, assigned: node.assigned + 1, allowed, forgiven: forgivenSum,
-        ordered: band.keepsOrder ? [...node.ordered, { label: band.label, position: band.position }] : node.ordered,
+        ordered: band.keepsOrder ? [...node.ordered, { transition: own, position: band.position }] : node.ordered,
       };
     },
   };
@@ -157,10 +159,10 @@ function copySums(from: Float64Array, start: number, to: number, stride: number)
 }
 
 /** Whether the transition lies on the wrong side of an earlier one everywhere in the cell. */
-function breaksOrder(cells: Cells, i: number, own: CellTransition, order: readonly { readonly isBelow: boolean; readonly transition: CellTransition }[]): boolean {
+function breaksOrder(cells: Cells, i: number, own: CellTransition, at: number, order: readonly Placed[]): boolean {
   for (let k = 0; k < order.length; k++) {
-    const { isBelow, transition } = order[k]!;
-    if (isBelow ? isAbove(cells, i, transition, own) : isAbove(cells, i, own, transition)) return true;
+    const { position, transition } = order[k]!;
+    if (position < at ? isAbove(cells, i, transition, own) : position > at && isAbove(cells, i, own, transition)) return true;
   }
   return false;
 }

@@ -8,7 +8,7 @@ import { concise } from '../quantity/print.ts';
 import { transitionsAt } from './evaluate.ts';
 import type { Assigned, Fit } from './fit.ts';
 import type { GroundCheck } from './groundCheck.ts';
-import type { ScoredReading } from './search.ts';
+import type { ScoredReading } from './scoring.ts';
 import { transitionOf } from './transitions.ts';
 import type { GroundCase } from './transitions.ts';
 import type { Parameter, PredictedBand } from './types.ts';

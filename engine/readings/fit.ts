@@ -107,7 +107,10 @@ const feltHeld = new WeakMap<LevelTable, Map<string, Feels>>();
 function feels(ion: GroundCase, ground: string, label: string, ratio: number): Feels {
   const table = levelTable(ion, ratio);
   let held = feltHeld.get(table);
-  if (!held) feltHeld.set(table, (held = new Map()));
+  if (!held) {
+    held = new Map();
+    feltHeld.set(table, held);
+  }
   const key = `${ground} ${label}`;
   let found = held.get(key);
   if (!found) {

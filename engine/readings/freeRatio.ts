@@ -4,8 +4,8 @@ import { columnsOf } from './misfit.ts';
 import type { Target } from './misfit.ts';
 import { evaluatorOf } from './evaluate.ts';
 import type { Evaluator } from './evaluate.ts';
-import { roughMinimaOnCurve } from './scan.ts';
-import type { RoughMinimum } from './scan.ts';
+import { roughMinimaOnCurve } from './roughMinima.ts';
+import type { RoughMinimum } from './roughMinima.ts';
 import { coarsePoints, levelTable, pointOnCurve } from './table.ts';
 import type { GroundCase } from './transitions.ts';
 
@@ -46,7 +46,10 @@ export function minimaWithFreeRatio(ion: GroundCase, labels: readonly string[], 
   const found: FreeMinimum[] = [];
   for (const { ground, ...start } of startsOf(ion, labels, targets)) {
     let evaluator = evaluators.get(ground);
-    if (!evaluator) evaluators.set(ground, (evaluator = evaluatorOf(ion, ground, labels, true)));
+    if (!evaluator) {
+      evaluator = evaluatorOf(ion, ground, labels, true);
+      evaluators.set(ground, evaluator);
+    }
     const end = descend(evaluator, targets, start, isLost);
     if (!end || !(end.at.racahC > lowestRatio * end.at.racahB && end.at.racahC < highestRatio * end.at.racahB)) continue;
     const minimum = { ...end, ground };

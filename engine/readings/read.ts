@@ -24,7 +24,7 @@ import { helpfulBands } from './measureNext.ts';
 import { predictedBands } from './predicted.ts';
 import { nothingPublished, publishedCorrelations, publishParameters, restingOn } from './publish.ts';
 import { contest } from './rivals.ts';
-import type { ScoredReading } from './search.ts';
+import type { ScoredReading } from './scoring.ts';
 import { stressOf } from './stress.ts';
 import type { GroundCase } from './transitions.ts';
 import type { Branch, Evidence, Parameter, Reading, ReadingBand, ReadMeasurement } from './types.ts';

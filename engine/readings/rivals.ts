@@ -5,7 +5,7 @@ import { rivalCases } from './cases.ts';
 import { isFit, ratioFor } from './fit.ts';
 import { checkGround } from './groundCheck.ts';
 import { keepWithin, searchReadings } from './search.ts';
-import type { ScoredReading } from './search.ts';
+import type { ScoredReading } from './scoring.ts';
 import type { GroundCase } from './transitions.ts';
 
 /** More rivals than this are not kept. */

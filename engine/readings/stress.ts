@@ -29,8 +29,10 @@ export function stressOf(ion: GroundCase, assigned: readonly Assigned[], fit: Fi
   const pairs: PairAlone[] = [];
   if (used.length > 2)
     for (let i = 0; i < used.length; i++)
-      for (let j = i + 1; j < used.length && pairs.length < pairsAtMost; j++)
-        pairs.push({ labels: [used[i]!.label, used[j]!.label], bands: [assigned.indexOf(used[i]!), assigned.indexOf(used[j]!)], at: solveBy(heldPolicy)([used[i]!, used[j]!])?.solutions[0]!.at ?? null });
+      for (let j = i + 1; j < used.length && pairs.length < pairsAtMost; j++) {
+        const alone = solveBy(heldPolicy)([used[i]!, used[j]!]);
+        pairs.push({ labels: [used[i]!.label, used[j]!.label], bands: [assigned.indexOf(used[i]!), assigned.indexOf(used[j]!)], at: alone ? alone.solutions[0]!.at : null });
+      }
   const leftOut = used.length < 3 ? [] : used.map((band, k) => leaveOut(ion, band, used.filter((_, i) => i !== k), solveBy(fit.mode === 'field, B, C' ? policy : heldPolicy), fit.floors[assigned.indexOf(band)]!));
   return { pairs, leftOut };
 }

@@ -151,9 +151,15 @@ function makeTable(ion: FieldCase, ratio: number, points: number): LevelTable {
     grid,
     transition(ground, label) {
       let fromGround = transitions.get(ground);
-      if (!fromGround) transitions.set(ground, (fromGround = new Map()));
+      if (!fromGround) {
+        fromGround = new Map();
+        transitions.set(ground, fromGround);
+      }
       let found = fromGround.get(label);
-      if (!found) fromGround.set(label, (found = difference(grid(label), grid(ground))));
+      if (!found) {
+        found = difference(grid(label), grid(ground));
+        fromGround.set(label, found);
+      }
       return found;
     },
     exact(labels, t) {

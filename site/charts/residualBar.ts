@@ -14,7 +14,7 @@ export function residualBar(residual: number, u: number, reach: number): string 
   const tip = MIDDLE + scale * residual;
   const [low, high] = [MIDDLE - scale * u, MIDDLE + scale * u];
   return `<svg class="drawing residual" aria-hidden="true" viewBox="0 0 ${WIDTH} ${HEIGHT}" width="${WIDTH}" height="${HEIGHT}">`
-    + `<path class="hairline" d="M${c(low)} 2v10M${c(high)} 2v10M${c(low)} 7H${c(high)}"/>`
+    + `<path class="leader" d="M${c(low)} 2v10M${c(high)} 2v10M${c(low)} 7H${c(high)}"/>`
     + `<rect class="point" x="${c(Math.min(MIDDLE, tip))}" y="4.5" width="${c(Math.abs(tip - MIDDLE))}" height="5"/>`
     + `<path class="axis" d="M${MIDDLE} 1v12"/></svg>`;
 }

@@ -91,5 +91,5 @@ export function seriesRange(points: readonly SeriesPoint[], upright?: number): r
   return [low - pad, high + pad];
 }
 
-const HALF = 4.6;
+const HALF = 5.8;
 const diamond = (x: number, y: number): string => `M${c(x - HALF)} ${c(y)}L${c(x)} ${c(y - HALF)}L${c(x + HALF)} ${c(y)}L${c(x)} ${c(y + HALF)}Z`;

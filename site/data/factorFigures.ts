@@ -1,24 +1,16 @@
-import { type Factor, type FactorFit, type FactorKind, type FactorSeries, type Geometry, type SeriesParameter, factorSeries, publishedFactor } from '#engine';
+import { type FactorFit, type FactorKind, type FactorSeries, type Geometry, type SeriesParameter, factorSeries } from '#engine';
 import { newDocument } from '../charts/plot.ts';
 import { type SeriesPoint, seriesFigure, seriesRange } from '../charts/seriesFigure.ts';
 import { letterKey } from './diagram.ts';
+import { FACTORS, factorLabel, printedBeside } from './factorNames.ts';
 import { factorCsv, factorTable } from './factorTables.ts';
 import { type PublishedFigure, figureFiles } from './figure.ts';
-import { ligandName } from './ligandNames.ts';
 import { oncePerCollection } from './memo.ts';
 import { inParts } from './parts.ts';
 import { ROWS_A_FIGURE, bracketSentence, bracketsWithin } from './seriesFigures.ts';
-import { factorFitOf, geometries, seriesLigand } from './seriesFit.ts';
+import { factorFitOf, geometries } from './seriesFit.ts';
 import { counted } from './show.ts';
-import { type Column, quantity } from './table.ts';
 import type { CollectionTree } from './tree.ts';
-import type { Parts } from './typeset.ts';
-
-/** Letter and head of a factor: f, g, h or k. */
-export const FACTORS: Readonly<Record<SeriesParameter, Readonly<Record<FactorKind, { readonly letter: string; readonly head: Column }>>>> = {
-  Delta: { ligand: { letter: 'f', head: quantity('f', null) }, ion: { letter: 'g', head: quantity('g', 'cm-1') } },
-  beta: { ligand: { letter: 'h', head: quantity('h', null) }, ion: { letter: 'k', head: quantity('k', null) } },
-};
 
 /** Factors of one kind and island with what is printed of them elsewhere. */
 export interface FactorsShown {
@@ -27,15 +19,6 @@ export interface FactorsShown {
   readonly kind: FactorKind;
   readonly island: number;
   readonly figures: readonly PublishedFigure[];
-}
-
-/** "Cr(III) octahedral quartet" without the geometry, which the title names. */
-export const ionWithoutGeometry = (name: string, geometry: Geometry): string => name.replace(` ${geometry}`, '');
-
-/** The printed value that stands beside a factor: of octahedral complexes counted from water alone, as the printed ones are. */
-export function printedBeside(tree: CollectionTree, fit: FactorFit, factor: Factor): number | null {
-  if (fit.islands.find(({ number }) => number === factor.island)?.gaugeIsAqua !== true) return null;
-  return publishedFactor(factor, fit.parameter, tree.ligands.map(seriesLigand));
 }
 
 /** Every figure of factors of the collection. An island of one ion and one ligand has nothing to order. */
@@ -81,8 +64,4 @@ function shownFactors(tree: CollectionTree, fit: FactorFit, series: FactorSeries
       };
     }),
   };
-}
-
-export function factorLabel(tree: CollectionTree, { kind, name }: Pick<Factor, 'kind' | 'name'>, geometry: Geometry): Parts {
-  return [{ text: kind === 'ion' ? ionWithoutGeometry(name, geometry) : ligandName(tree, name), style: 'plain' }];
 }

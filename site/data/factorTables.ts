@@ -1,6 +1,6 @@
 import type { Factor, FactorFit, FactorSeries } from '#engine';
 import { csvText } from '../../scripts/export/csv.ts';
-import { FACTORS, factorLabel, printedBeside } from './factorFigures.ts';
+import { FACTORS, factorLabel, printedBeside } from './factorNames.ts';
 import { ionPath, ligandPath } from './paths.ts';
 import { energy, plainNumber, ratio } from './show.ts';
 import { type Cell, type Table, column, longColumn, quantity, rowColumn, soft } from './table.ts';

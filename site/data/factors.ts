@@ -1,5 +1,6 @@
 import { type FactorFit, type Geometry, type SeriesParameter, publishedFactorsFromMemory, publishedFactorsSource, rankAgreement, scatterSentence } from '#engine';
-import { FACTORS, type FactorsShown, factorFigures, factorLabel, printedBeside } from './factorFigures.ts';
+import { type FactorsShown, factorFigures } from './factorFigures.ts';
+import { FACTORS, factorLabel, printedBeside } from './factorNames.ts';
 import { type LeftOutShown, leftOutShown } from './leftOut.ts';
 import { ligandName } from './ligandNames.ts';
 import { oncePerCollection } from './memo.ts';

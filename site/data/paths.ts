@@ -6,6 +6,7 @@ export const ionPath = (ion: string): string => `ions/${ionSlug(ion)}/`;
 export const cautionPath = (code: string, page = 1): string => `cautions/${cautionSlug(code)}/${page === 1 ? '' : `page/${page}/`}`;
 export const cautionSlug = (code: string): string => code.toLowerCase().replaceAll('_', '-');
 export const reviewPath = (page: number): string => page === 1 ? 'review/' : `review/page/${page}/`;
+export const changesPath = (page: number): string => page === 1 ? 'changes/' : `changes/page/${page}/`;
 /** The compare page, opened with the bands of one measurement. */
 export const otherwisePath = (complex: string, measurement: string): string => `compare/?otherwise=${complex}/${measurement}`;
 export const collectionPath = (page: number): string => page === 1 ? '' : `page/${page}/`;

@@ -79,6 +79,12 @@ export interface PlacementRow extends OfMeasurement {
   readonly z: number | null; readonly reason: string | null;
 }
 export interface FloorFactorRow { readonly ion: string; readonly geometry: string; readonly kappa: number; readonly u: number; readonly spare_bands: number }
+export interface FrozenReleaseRow {
+  readonly id: string; readonly number: number; readonly date: string; readonly who: string; readonly cause: string; readonly doi: string | null;
+  readonly complexes: number; readonly measurements: number;
+}
+export interface ChangeRow { readonly number: number; readonly release: string | null; readonly complex: string; readonly measurement: string | null; readonly cause: string; readonly text: string }
+export interface GoneRow { readonly address: string; readonly kind: 'tombstone' | 'redirect' | 'corrected'; readonly target: string | null; readonly reason: string | null }
 export interface ReviewRow extends OfMeasurement { readonly number: number; readonly kind: string; readonly text: string }
 export interface ReadingBandRow extends OfReading {
   readonly number: number; readonly label: string; readonly observed: number; readonly u_minus: number; readonly u_plus: number;
@@ -133,4 +139,7 @@ export interface Rows {
   readonly placement: readonly PlacementRow[];
   readonly floor_factor: readonly FloorFactorRow[];
   readonly review: readonly ReviewRow[];
+  readonly frozen_release: readonly FrozenReleaseRow[];
+  readonly change: readonly ChangeRow[];
+  readonly gone: readonly GoneRow[];
 }

@@ -1,3 +1,5 @@
+import type { Geometry } from '#engine';
+import { lowSpinMultiplicity, possibleMultiplicities } from '../../scripts/content/spin.ts';
 import { digits, signedDigits } from '../client/collection/digits.ts';
 import { type PackedSearch, bandUnit, deltaUnit, heldLigands, usualFormula } from '../client/collection/packed.ts';
 import { collectionPage, orderedResults } from './collection.ts';
@@ -35,7 +37,7 @@ export function searchData(tree: CollectionTree): PackedSearch {
       formula: kinds.flatMap(([, { formula }], place) => formula === null ? [] : [[place, formula] as const]),
     },
     complexes: {
-      state: digits(complexes.map(({ row, ion }) => state([ionPlace.get(ion.name)!, word(row.geometry), word(row.spin ?? ''), headOf(row.id)]))),
+      state: digits(complexes.map(({ row, ion }) => state([ionPlace.get(ion.name)!, word(row.geometry), word(spinText(row, ion.electrons)), headOf(row.id)]))),
       kind: digits(keys.map((key) => kindPlace.get(JSON.stringify(key))!)),
       rows: digits(byComplex.map(([, measurements]) => measurements.length)),
       names: complexes.flatMap(({ row }, place) => row.name === null ? [] : [[place, row.name] as const]),
@@ -58,6 +60,14 @@ interface KindKey {
   readonly isomer: number;
   readonly tail: string;
   readonly formula: string | null;
+}
+
+/** "quartet", or "singlet, low spin" where the ion has a choice in its geometry. */
+export function spinText({ spin, multiplicity, geometry, fitted }: ComplexNode['row'], electrons: number): string {
+  if (spin === null) return '';
+  const low = fitted === 1 ? lowSpinMultiplicity(electrons, geometry as Geometry) : null;
+  if (low === null) return spin;
+  return multiplicity === low ? `${spin}, low spin` : multiplicity === possibleMultiplicities(electrons)[0] ? `${spin}, high spin` : `${spin}, intermediate spin`;
 }
 
 /** An id up to its first hyphen, which is often the ion. */

@@ -1,20 +1,9 @@
 import { compareIons } from './collection.ts';
+import { groupBy } from './group.ts';
 import { ionPath, ligandPath } from './paths.ts';
+import { type SeriesEntry, pictureEntry } from './seriesEntry.ts';
 import { type SeriesShown, ionSeries, ligandSeries } from './seriesFigures.ts';
 import type { CollectionTree } from './tree.ts';
-import { plateId } from './figure.ts';
-import { groupBy } from './group.ts';
-
-/** A figure as it stands on the series page: a picture file with the page that holds it in full. */
-export interface SeriesEntry {
-  readonly title: string;
-  readonly image: string;
-  readonly width: number;
-  readonly height: number;
-  readonly caption: string;
-  readonly page: string;
-  readonly pageName: string;
-}
 
 export interface SeriesPage {
   /** Figures that belong together, Delta and beta of one ion or ligand in one geometry and spin, stand side by side. */
@@ -31,11 +20,8 @@ export function seriesPage(tree: CollectionTree): SeriesPage {
   };
 }
 
+/** The first part of each figure stands for the whole. */
 function paired(series: readonly SeriesShown[], page: string, pageName: string): readonly (readonly SeriesEntry[])[] {
-  return [...groupBy(series, ({ figure }) => figure.id.replace(/-(delta|beta)$/, '')).values()].map((group) => group.map((one) => entry(one, page, pageName)));
-}
-
-function entry({ figure, count }: SeriesShown, page: string, pageName: string): SeriesEntry {
-  const [, width, height] = /viewBox="0 0 ([\d.]+) ([\d.]+)"/.exec(figure.svg) ?? [];
-  return { title: figure.title, image: `figures/${plateId(figure.id)}.svg`, width: Number(width), height: Number(height), caption: `n = ${count}.`, page: `${page}#${figure.id}`, pageName };
+  return [...groupBy(series.filter(({ part }) => part === 1), ({ figure }) => figure.id.replace(/-(delta|beta)$/, '')).values()]
+    .map((group) => group.map(({ figure, count }) => pictureEntry(figure, count, page, pageName)));
 }

@@ -15,7 +15,7 @@ export function stressOfTransitions({ chosen, complex }: MeasurementNode): Table
   const withC = rows.some(({ row }) => row.gradient_C !== null && Math.abs(row.gradient_C) > 5e-4);
   const number = (value: number | null, decimals: number): Cell => value === null ? none : ratio(value, decimals);
   return {
-    caption: `Each band under stress${tried ? ': its weight in the fit, then the fit without it and where that puts it' : ''}`,
+    caption: tried ? 'Each band under stress: its weight in the fit, then the fit without it and where that puts it' : 'Each band’s weight in the fit',
     columns: [rowColumn('To'), quantity('leverage', null, true), derivative('Δ'), derivative('B'), ...(withC ? [derivative('C')] : []),
       ...(tried ? [without('Δ'), without('B'), quantity('put at', 'cm-1', true), quantity('z', null)] : [])],
     rows: rows.map(({ row }): readonly Cell[] => {

@@ -63,6 +63,8 @@ export interface CollectionTree {
   /** What needs a person, most pressing first. */
   readonly review: readonly R.ReviewRow[];
   readonly floorFactors: readonly R.FloorFactorRow[];
+  /** Frozen releases, what changed between them and since the last, and what became of published addresses. */
+  readonly history: { readonly releases: readonly R.FrozenReleaseRow[]; readonly changes: readonly R.ChangeRow[]; readonly gone: readonly R.GoneRow[] };
 }
 
 /**
@@ -116,7 +118,7 @@ export function collectionTree(rows: Rows): CollectionTree {
     meta: new Map(rows.meta.map(({ key, value }) => [key, value])),
     people: rows.person, policies: byKey(rows.policy, (row) => row.id), policy,
     ions: rows.ion, freeIons: rows.free_ion, sources: byKey(rows.source, (row) => row.id), ligands: rows.ligand,
-    abbreviations, complexes, review: rows.review, floorFactors: rows.floor_factor,
+    abbreviations, complexes, review: rows.review, floorFactors: rows.floor_factor, history: { releases: rows.frozen_release, changes: rows.change, gone: rows.gone },
   };
 }
 

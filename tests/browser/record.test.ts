@@ -20,7 +20,7 @@ test('the sentence goes to the clipboard as plain text, and the page says so', a
 test('without JavaScript the sentence stands and no dead button', async () => {
   const { page } = await watchedPage(browser, site, { javaScriptEnabled: false });
   await page.goto(`${site.address}complexes/cr-am6/`);
-  expect(await page.locator('blockquote.sentence').innerText()).toContain('give Δ = 21');
+  expect(await page.locator('blockquote.sentence').textContent()).toContain('give Δ = 21');
   expect(await page.getByRole('button').count()).toBe(0);
   await page.context().close();
 });

@@ -137,8 +137,8 @@ test('a d2 aqua ion with bands at 17 800 and 25 700 has Delta/B about 31, B abou
 });
 
 // The pair (a4T1g, b4T1g) at 24600 and 37800 has a ratio that no Delta and B give: at the closest point Delta and B move both bands alike.
-test('Cr(III) aqua, bands 2-3: one combination of Delta and B is all they fix, so neither is given', () => {
-  expect(resultOf('cr-aqua/bands-2-3')).toMatchObject({ verdict: 'not determinable', Delta: null, B: null });
+test('Cr(III) aqua, bands 2-3: no Delta and B give both, so the reading is refused with the misses of the closest point', () => {
+  expect(resultOf('cr-aqua/bands-2-3')).toMatchObject({ verdict: 'refused', Delta: null, B: null });
 });
 
 test.each(['v-aqua/misread', 'ni-aqua/misread-sharp'])('%s: no parameters give the ratio, so the reading is refused and no number stands', (id) => {

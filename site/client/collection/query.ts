@@ -1,4 +1,4 @@
-import { parseQuantity, parseRange, toWavenumber } from '#engine';
+import { parseQuantity, parseRange, readIonLoosely, toWavenumber } from '#engine';
 
 /** What is looked for in the numbers of a row. Energies in cm-1; beta is a number. */
 export type NumberClause =
@@ -10,6 +10,8 @@ export interface Query {
   readonly text: string;
   readonly numbers: readonly NumberClause[];
   readonly electrons: number | null;
+  /** An ion that stands among other words, "Cr(III)"; one that stands alone is part of the text. */
+  readonly ion: string | null;
 }
 
 /** A band typed without uncertainty is looked for so far to each side, cm-1. */
@@ -51,7 +53,20 @@ export function readQuery(typed: string): Query {
     electrons = Number([...digits].map((sign) => { const raised = '⁰¹²³⁴⁵⁶⁷⁸⁹'.indexOf(sign); return raised < 0 ? sign : String(raised); }).join(''));
     return ' ';
   });
-  return { text: text.replace(/\s+/g, ' ').replace(/^[\s,;]+|[\s,;]+$/g, ''), numbers, electrons };
+  text = text.replace(/\s+/g, ' ').replace(/^[\s,;]+|[\s,;]+$/g, '');
+  const { ion, rest } = takeIon(text);
+  return { text: rest, numbers, electrons, ion };
+}
+
+/** Takes an ion with its oxidation state out of several words. */
+function takeIon(text: string): { readonly ion: string | null; readonly rest: string } {
+  const words = text.split(' ');
+  if (words.length < 2) return { ion: null, rest: text };
+  for (const [place, word] of words.entries()) {
+    const ion = /[+⁺]$|\(?[IVX]+\)?$/i.test(word) ? readIonLoosely(word) : null;
+    if (ion !== null) return { ion: ion.name, rest: words.filter((_, other) => other !== place).join(' ') };
+  }
+  return { ion: null, rest: text };
 }
 
 /** Half-widths of a parameter given by one number: a twentieth of it. */

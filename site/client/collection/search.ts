@@ -1,4 +1,4 @@
-import { type FormulaMatch, type MatchKind, type NormalisedQuery, type QueryWord, normaliseQuery } from '#engine';
+import { type FormulaMatch, type MatchKind, type NormalisedQuery, type QueryWord, normaliseQuery, readIonLoosely } from '#engine';
 import { figures, plainNumber } from '../../data/show.ts';
 import { nearNames } from '../../../scripts/content/nearest.ts';
 import type { FoundCollection, FoundComplex, FoundRow } from './packed.ts';
@@ -33,10 +33,11 @@ function answers(collection: FoundCollection, index: SearchIndex, query: Query):
   const { rows, complexes } = collection;
   const byText = query.text === '' ? null : textHits(collection, index, query.text);
   const candidates: readonly Hit[] = byText ?? rows.map(({ place }) => ({ row: place, score: 0, why: () => '' }));
-  if (query.text === '' && query.numbers.length === 0 && query.electrons === null) return [];
+  if (query.text === '' && query.numbers.length === 0 && query.electrons === null && query.ion === null) return [];
   return candidates.flatMap((hit): Hit[] => {
     const row = rows[hit.row]!;
     let { score } = hit;
+    if (query.ion !== null && complexes[row.complex]!.ion.name !== query.ion) return [];
     if (query.electrons !== null) {
       if (complexes[row.complex]!.ion.electrons !== query.electrons) return [];
       score += 50;
@@ -48,10 +49,10 @@ function answers(collection: FoundCollection, index: SearchIndex, query: Query):
       numbers.push(found);
       score += 60 - 30 * found.off;
     }
-    if (query.electrons === null && numbers.length === 0) return [hit];
+    if (query.electrons === null && query.ion === null && numbers.length === 0) return [hit];
     return [{
       row: hit.row, score,
-      why: () => [...(hit.score === 0 ? [] : [hit.why()]), ...(query.electrons === null ? [] : [`d${query.electrons}`]), ...numbers.map(({ value }, place) => SHOWN[query.numbers[place]!.kind](value))].join(', '),
+      why: () => [...(hit.score === 0 ? [] : [hit.why()]), ...(query.ion === null ? [] : [query.ion]), ...(query.electrons === null ? [] : [`d${query.electrons}`]), ...numbers.map(({ value }, place) => SHOWN[query.numbers[place]!.kind](value))].join(', '),
     }];
   });
 }
@@ -92,7 +93,8 @@ function textHits({ complexes, rows, packed }: FoundCollection, index: SearchInd
   const [id = '', measurement] = text.trim().toLowerCase().split('/');
   const known = index.ids.get(id);
   if (known !== undefined) for (const row of rowsOf(known)) if (measurement === undefined || row.measurement.startsWith(measurement)) add({ row: row.place, score: 120, why: () => 'record id' });
-  for (const [complex, { score, kind }] of matches(index, query)) for (const row of rowsOf(complex)) add({ row: row.place, score, why: () => kind });
+  const alone = readIonLoosely(text) !== null;
+  for (const [complex, { score, kind }] of matches(index, query)) for (const row of rowsOf(complex)) add({ row: row.place, score, why: () => alone && kind === 'ion and ligands' ? 'ion' : kind === 'words' ? 'name or ligand' : kind });
   if (!query.formula && query.words.length > 0) fieldHits({ complexes, rows, packed }, index, query.words, add);
   return [...best.values()];
 }
@@ -172,15 +174,22 @@ function fieldHits({ complexes, rows, packed }: FoundCollection, index: SearchIn
 const NEAREST = 5;
 
 /** What lies nearest where nothing answers: by number, or by the spelling of ids, names, formulas, ligands and metals. */
-function nearest({ rows, complexes }: FoundCollection, index: SearchIndex, query: Query): readonly Hit[] {
+function nearest(collection: FoundCollection, index: SearchIndex, query: Query): readonly Hit[] {
+  const { rows, complexes } = collection;
   const [clause] = query.numbers;
   if (clause !== undefined && query.text === '') {
     return rows.flatMap((row) => { const found = numberFound(row, clause); return found === null ? [] : [{ row: row.place, found }]; })
       .sort((a, b) => a.found.distance - b.found.distance || a.row - b.row).slice(0, NEAREST).map(({ row, found }, place) => ({ row, score: NEAREST - place, why: () => SHOWN[clause.kind](found.value) }));
   }
+  // What answers a part of what was asked.
+  if (query.text !== '' && (query.numbers.length > 0 || query.electrons !== null || query.ion !== null)) {
+    const part = sorted(answers(collection, index, { text: query.text, numbers: [], electrons: null, ion: null }));
+    if (part.length > 0) return part.slice(0, NEAREST);
+  }
   const { squeezed: text } = normaliseQuery(query.text);
   if (text.length < 2) return [];
-  const lists = [[...index.ids.keys()], index.formulas.sorted, index.names.sorted, index.words.sorted.filter((word) => word.length > 2 && !/[:=]/.test(word))];
+  const words = index.words.sorted.filter((word) => word.length > 2 && !/[:=]/.test(word));
+  const lists = [[...index.ids.keys()], ...(/\d/.test(text) ? [index.formulas.sorted, index.names.sorted, words] : [words, index.names.sorted, index.formulas.sorted])];
   // The first letter is seldom mistyped, and looking at all spellings would take too long.
   const alike = (list: readonly string[]): readonly string[] => list.filter((one) => one[0] === text[0]);
   const near = [nearNames(query.text.toLowerCase(), alike(lists[0]!)), ...lists.slice(1).map((list) => nearNames(text, alike(list), 2))].flat();

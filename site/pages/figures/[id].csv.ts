@@ -1,8 +1,7 @@
 import type { APIRoute, GetStaticPaths } from 'astro';
 import { loadCollection } from '../../data/database.ts';
-import { publishedFigures } from '../../data/figures.ts';
+import { numberFiles } from '../../data/figures.ts';
 
-export const getStaticPaths: GetStaticPaths = () => publishedFigures(loadCollection())
-  .filter(({ csv }) => csv !== null).map(({ id, csv }) => ({ params: { id }, props: { csv } }));
+export const getStaticPaths: GetStaticPaths = () => numberFiles(loadCollection()).map(({ id, csv }) => ({ params: { id }, props: { csv } }));
 
 export const GET: APIRoute = ({ props }) => new Response(props['csv'], { headers: { 'content-type': 'text/csv; charset=utf-8' } });

@@ -1,0 +1,63 @@
+import { type Inversion, type SeriesParameter, averageFactor, inversions } from '#engine';
+import { csvText } from '../../scripts/export/csv.ts';
+import { type Kind, kinds, resultOf, seriesOfKind } from './comparable.ts';
+import { departure } from './factorTables.ts';
+import { oncePerCollection } from './memo.ts';
+import { complexPath } from './paths.ts';
+import { factorFitOf, floorOf, nodeOf } from './seriesFit.ts';
+import { energy, plainNumber, ratio } from './show.ts';
+import { type Cell, type Table, column, quantity, rowColumn } from './table.ts';
+import type { CollectionTree } from './tree.ts';
+
+/** Pairs of one ion's series that stand against the pooled order of the ligands. */
+export interface KindInversions {
+  readonly kind: Kind;
+  readonly parameter: SeriesParameter;
+  /** Pairs whose ligands all have factors, so that they could be held against the order. */
+  readonly pairs: number;
+  /** The surest first. */
+  readonly found: readonly Inversion[];
+}
+
+export const inversionsByKind = oncePerCollection((tree): readonly KindInversions[] => kinds(tree).flatMap((kind) => (['Delta', 'beta'] as const).flatMap((parameter) => {
+  const { geometry } = resultOf(tree, kind.measurements[0]!).complex;
+  const { members } = seriesOfKind(tree, kind, parameter);
+  if (geometry === null || members.length < 2) return [];
+  const results = members.map((node) => resultOf(tree, node));
+  const fit = factorFitOf(tree, parameter, geometry);
+  const placed = results.filter(({ complex }) => averageFactor(fit, complex) !== null).length;
+  return placed < 2 ? [] : [{ kind, parameter, pairs: (placed * (placed - 1)) / 2, found: inversions({ members: results, parameter }, fit, floorOf(tree)) }];
+})));
+
+/** Inversions that a page lists; all stand in the CSV file. */
+const MOST_ROWS = 60;
+
+/** Those beyond doubt, the surest first. */
+export function surestInversions(all: readonly KindInversions[], parameter: SeriesParameter): readonly Inversion[] {
+  return all.filter((one) => one.parameter === parameter).flatMap(({ found }) => found).filter(({ difference }) => difference.distinguishable).sort((a, b) => b.difference.z - a.difference.z);
+}
+
+export function inversionTable(tree: CollectionTree, rows: readonly Inversion[], parameter: SeriesParameter): Table {
+  return {
+    caption: `${parameter === 'Delta' ? 'Δ' : 'β'}: pairs against the pooled order, the surest first`,
+    columns: [column('Ion'), rowColumn('Found higher'), column('Found lower'), quantity('difference', parameter === 'Delta' ? 'cm-1' : null, true), quantity('z', null), quantity('by the factors', null, true)],
+    rows: rows.slice(0, MOST_ROWS).map(({ higher, lower, difference, pooled }): readonly Cell[] => {
+      const [above, below] = [nodeOf(tree, higher), nodeOf(tree, lower)];
+      return [
+        above.complex.ion.name, { parts: above.complex.formula.parts, path: complexPath(above.complex.row.id) }, { parts: below.complex.formula.parts, path: complexPath(below.complex.row.id) },
+        energy(difference.value, difference.u), ratio(difference.z, 1), parameter === 'Delta' ? `${departure(-pooled / (1 + pooled))}` : `average h ${plainNumber(pooled, 2)} higher`,
+      ];
+    }),
+  };
+}
+
+export const moreInversions = (rows: readonly Inversion[]): number => Math.max(0, rows.length - MOST_ROWS);
+
+/** Every inversion, also those that cannot be told apart. */
+export function inversionCsv(tree: CollectionTree, all: readonly KindInversions[]): string {
+  return csvText(['parameter', 'ion', 'higher', 'higher_measurement', 'lower', 'lower_measurement', 'difference', 'difference_u', 'z', 'pooled', 'distinguishable'],
+    all.flatMap(({ kind, parameter, found }) => found.map(({ higher, lower, difference, pooled }) => {
+      const [above, below] = [nodeOf(tree, higher), nodeOf(tree, lower)];
+      return [parameter, kind.ion, above.complex.row.id, above.row.id, below.complex.row.id, below.row.id, difference.value, difference.u, difference.z, pooled, difference.distinguishable ? 1 : 0];
+    })));
+}

@@ -1,0 +1,37 @@
+import { inversionTable, inversionsByKind, moreInversions, surestInversions } from './inversionTables.ts';
+import { counted } from './show.ts';
+import type { Table } from './table.ts';
+import type { CollectionTree } from './tree.ts';
+import { type TrendShown, expectationSentences, trends, trendsWithout } from './trendFigures.ts';
+import { type Parts, sentenceShown } from './typeset.ts';
+
+export interface OrdersPage {
+  readonly inversions: readonly { readonly sentence: Parts; readonly table: Table | null; readonly more: number }[];
+  readonly inversionsFile: string;
+  readonly trends: readonly TrendShown[];
+  readonly expectations: readonly Parts[];
+  readonly without: string | null;
+}
+
+/** Name of the file with every inversion. */
+export const INVERSIONS = 'inversions';
+
+export function ordersPage(tree: CollectionTree): OrdersPage {
+  const all = inversionsByKind(tree);
+  const shown = trends(tree);
+  return {
+    inversions: (['Delta', 'beta'] as const).map((parameter) => {
+      const own = all.filter((one) => one.parameter === parameter);
+      const pairs = own.reduce((sum, one) => sum + one.pairs, 0);
+      const found = own.reduce((sum, one) => sum + one.found.length, 0);
+      const rows = surestInversions(all, parameter);
+      return {
+        sentence: sentenceShown(pairs === 0
+          ? `${parameter}: no ion has two comparable complexes whose ligands all have factors.`
+          : `${parameter}: ${counted(pairs, 'pair')} of complexes of one ion, ${found} the other way round than the factors have it; ${rows.length} of these beyond two standard uncertainties of their difference, ${found - rows.length} not distinguishable.`),
+        table: rows.length === 0 ? null : inversionTable(tree, rows, parameter), more: moreInversions(rows),
+      };
+    }),
+    inversionsFile: `figures/${INVERSIONS}.csv`, trends: shown, expectations: expectationSentences, without: trendsWithout(shown),
+  };
+}
