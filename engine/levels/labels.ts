@@ -48,6 +48,18 @@ export function levelNames(electrons: number, geometry: Geometry): readonly stri
 
 /** Letter form of the lowest level of the declared multiplicity (strong field for spins below the highest); null where the ion has none. */
 export function groundLabel(electrons: number, geometry: Geometry, multiplicity: number | null): string | null {
+  const key = `${electrons} ${geometry} ${multiplicity}`;
+  let label = groundsHeld.get(key);
+  if (label === undefined) {
+    label = findGround(electrons, geometry, multiplicity);
+    groundsHeld.set(key, label);
+  }
+  return label;
+}
+
+const groundsHeld = new Map<string, string | null>();
+
+function findGround(electrons: number, geometry: Geometry, multiplicity: number | null): string | null {
   const blocks = shellBlocks(electrons);
   const spin = multiplicity ?? blocks[0]!.multiplicity;
   let lowest: { label: string; energy: number } | null = null;

@@ -1,4 +1,5 @@
 import { degeneratePair, groundLabel } from '../levels/labels.ts';
+import type { Geometry } from '../ions/types.ts';
 import type { FloorClass, Policy } from '../policy/types.ts';
 import { levelTable } from './table.ts';
 import type { FieldCase } from './table.ts';
@@ -37,18 +38,33 @@ export interface GroundCase extends FieldCase {
   readonly multiplicity: number;
 }
 
-const known = new Map<string, readonly Transition[]>();
+interface Transitions {
+  readonly ascending: readonly Transition[];
+  readonly byLabel: ReadonlyMap<string, Transition>;
+}
+
+/** By geometry, number of electrons and multiplicity, so that no key has to be built on the hot path. */
+const known: Record<Geometry, Transitions[][]> = { octahedral: [], tetrahedral: [] };
+
+function held({ electrons, geometry, multiplicity }: GroundCase): Transitions {
+  known[geometry][electrons] ??= [];
+  const bySpin = known[geometry][electrons];
+  if (!bySpin[multiplicity]) {
+    const ascending = findTransitions({ electrons, geometry, multiplicity });
+    bySpin[multiplicity] = { ascending, byLabel: new Map(ascending.map((transition) => [transition.label, transition])) };
+  }
+  return bySpin[multiplicity];
+}
 
 /** All transitions from the ground level of the declared multiplicity, ascending at Delta/B = 20. */
-export function transitionsOf(ion: GroundCase): readonly Transition[] {
-  const key = `${ion.electrons} ${ion.geometry} ${ion.multiplicity}`;
-  const earlier = known.get(key);
-  if (earlier) return earlier;
+export const transitionsOf = (ion: GroundCase): readonly Transition[] => held(ion).ascending;
+
+function findTransitions(ion: GroundCase): readonly Transition[] {
   const ground = groundLabel(ion.electrons, ion.geometry, ion.multiplicity);
   const pair = degeneratePair(ion.electrons, ion.geometry);
   const table = levelTable(ion, compareRatio);
   const groundSlope = ground ? table.exact([ground], compareAt)[0]!.gradient.delta : 0;
-  const found = levelNames(ion.electrons, ion.geometry)
+  return levelNames(ion.electrons, ion.geometry)
     .filter((label) => label !== ground && label !== pair?.members[1])
     .map((label) => {
       const level = table.exact([label], compareAt)[0]!;
@@ -61,12 +77,10 @@ export function transitionsOf(ion: GroundCase): readonly Transition[] {
     })
     .sort((a, b) => a.energy - b.energy)
     .map((entry) => entry.transition);
-  known.set(key, found);
-  return found;
 }
 
 export function transitionOf(ion: GroundCase, label: string): Transition {
-  const found = transitionsOf(ion).find((transition) => transition.label === label);
+  const found = held(ion).byLabel.get(label);
   if (!found) throw new RangeError(`label: "${label}" is no transition of d${ion.electrons} ${ion.geometry}`);
   return found;
 }

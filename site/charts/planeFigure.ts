@@ -19,7 +19,7 @@ export interface CoefficientShown {
 
 const WIDTH = 560;
 const PLANE = 360;
-const MARGIN = { left: 58, right: 16, top: 12, bottom: 46 };
+const MARGIN = { left: 72, right: 16, top: 12, bottom: 46 };
 const SCALE = 74;
 
 /**

@@ -9,6 +9,7 @@ import { oncePerCollection } from './memo.ts';
 import { complexPath, ionSlug } from './paths.ts';
 import { nodeOf } from './seriesFit.ts';
 import { energy, plainNumber, ratio } from './show.ts';
+import { slanted } from './slanted.ts';
 import { type Cell, type Table, column, quantity, rowColumn } from './table.ts';
 import type { CollectionTree } from './tree.ts';
 
@@ -49,7 +50,7 @@ function correlationFigure(tree: CollectionTree, kind: Kind, correlation: PlaneC
   const keyed = points.length <= MOST_KEYS;
   const keys = points.map((_, index) => (keyed ? letterKey(index) : ''));
   return {
-    id, title,
+    id, title, titleParts: slanted(title, ''),
     svg: planeFigure(points.map((point, index) => ({ x: point.beta, y: point.delta, ux: point.uBeta, uy: point.uDelta, correlation: point.correlation, key: keys[index]! })), {
       x: quantity('β', null).head, y: quantity('Δ', 'cm-1').head,
     }, correlation, newDocument(), {

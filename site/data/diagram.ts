@@ -135,16 +135,20 @@ function describe({ diagram, ceiling }: IonDiagram): string {
   return `${counted(diagram.curves.length, 'level')} drawn over Δ/B from 0 to ${diagram.reach} and E/B from 0 to ${ceiling}. Ground level: ${diagram.grounds.map((range) => range.label).join(', then ')}.`;
 }
 
+/** Rows of the diagram's table on a page. */
+const MOST_ROWS = 200;
+
 function markTable({ marked, electrons }: IonDiagram): Table {
   const keyed = marked.some(({ key }) => key !== '');
+  const rows = marked.flatMap(({ key, measurement, mark }) => measurement.chosen.transitions.map(({ row }, index): readonly Cell[] => [
+    ...(keyed ? [key] : []), { parts: measurement.complex.formula.parts, path: complexPath(measurement.complex.row.id) },
+    measurement.row.id, figures(mark.x, 4), { parts: termShown(row.label, electrons) }, energy(row.observed, null), figures(mark.bands[index]!.y, 4),
+    row.residual === null ? { parts: words('none'), soft: true } : difference(row.residual),
+  ]));
   return {
-    caption: 'Readings on the diagram',
+    caption: rows.length > MOST_ROWS ? `Readings on the diagram, the first ${MOST_ROWS} rows of ${rows.length}; all stand in the CSV file` : 'Readings on the diagram',
     columns: [...(keyed ? [column('Key')] : []), rowColumn('Complex'), column('Measurement'), quantity('Δ/B', null), column('Transition'), quantity('ν̃', 'cm-1'), quantity('E/B', null), quantity('residual', 'cm-1', true)],
-    rows: marked.flatMap(({ key, measurement, mark }) => measurement.chosen.transitions.map(({ row }, index): readonly Cell[] => [
-      ...(keyed ? [key] : []), { parts: measurement.complex.formula.parts, path: complexPath(measurement.complex.row.id) },
-      measurement.row.id, figures(mark.x, 4), { parts: termShown(row.label, electrons) }, energy(row.observed, null), figures(mark.bands[index]!.y, 4),
-      row.residual === null ? { parts: words('none'), soft: true } : difference(row.residual),
-    ])),
+    rows: rows.slice(0, MOST_ROWS),
   };
 }
 

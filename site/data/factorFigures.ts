@@ -10,6 +10,7 @@ import { inParts } from './parts.ts';
 import { ROWS_A_FIGURE, bracketSentence, bracketsWithin } from './seriesFigures.ts';
 import { factorFitOf, geometries } from './seriesFit.ts';
 import { counted } from './show.ts';
+import { slanted } from './slanted.ts';
 import type { CollectionTree } from './tree.ts';
 
 /** Factors of one kind and island with what is printed of them elsewhere. */
@@ -48,7 +49,7 @@ function shownFactors(tree: CollectionTree, fit: FactorFit, series: FactorSeries
       const own = index === 0 ? id : `${id}-part-${index + 1}`;
       const ownTitle = parts.length === 1 ? `${title}.` : `${title}, part ${index + 1} of ${parts.length}.`;
       return {
-        id: own, title: ownTitle,
+        id: own, title: ownTitle, titleParts: slanted(ownTitle, letter),
         svg: seriesFigure(points.slice(start, start + rows.length), head.head, newDocument(), {
           id: own, title: ownTitle, description: `${counted(rows.length, 'factor')} with error bars, from below in the order of the table under the figure.${printed > 0 ? ' Diamonds are printed values.' : ''}`,
         }, { brackets: bracketsWithin(groups, start, rows.length), range, noteHead: [{ text: 'n', style: 'italic' }] }),

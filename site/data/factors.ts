@@ -1,4 +1,4 @@
-import { type FactorFit, type Geometry, type SeriesParameter, publishedFactorsFromMemory, publishedFactorsSource, rankAgreement, scatterSentence } from '#engine';
+import { type FactorFit, publishedFactorsFromMemory, publishedFactorsSource, rankAgreement, scatterSentence } from '#engine';
 import { type FactorsShown, factorFigures } from './factorFigures.ts';
 import { FACTORS, factorLabel, printedBeside } from './factorNames.ts';
 import { type LeftOutShown, leftOutShown } from './leftOut.ts';
@@ -6,6 +6,7 @@ import { ligandName } from './ligandNames.ts';
 import { oncePerCollection } from './memo.ts';
 import { factorFitOf, geometries, nodeOf } from './seriesFit.ts';
 import { counted, listed, plainNumber } from './show.ts';
+import { slanted } from './slanted.ts';
 import type { CollectionTree } from './tree.ts';
 import { type Parts, sentenceShown } from './typeset.ts';
 
@@ -44,7 +45,7 @@ function factorSection(tree: CollectionTree, fit: FactorFit): FactorSection {
     sentences: [
       `${counted(fit.complexes.length, 'complex', 'complexes')}. ${scatterSentence(parameter, scatter.value, scatter.standing, scatter.spare)}`,
       ...gaugeSentences(tree, fit), ...agreementSentences(tree, fit),
-    ].map(sentenceShown),
+    ].map((sentence) => slanted(sentence, 'fghk')),
     shown: figures,
     without: fit.factors.filter(({ value }) => value === null).map((factor) => ({ name: factorLabel(tree, factor, geometry), reason: sentenceShown(factor.reason!) })),
     leftOut: leftOutShown(fit.leftOut.map(({ result, kind, reason }) => ({ measurement: nodeOf(tree, result), kind, reason }))),
@@ -76,12 +77,4 @@ function agreementSentences(tree: CollectionTree, fit: FactorFit): readonly stri
     const number = (value: number): string => plainNumber(value, 2);
     return [`Order of ${FACTORS[fit.parameter][kind].letter} against the printed order: Kendall’s τ-b ${number(tau)}, ${number(low)} to ${number(high)} for 95 of 100 orders drawn within the uncertainties, ${pairs.length} ${kind === 'ion' ? 'ions' : 'ligands'}.`];
   });
-}
-
-/** Own factors of one ligand or ion, for its page. */
-export function factorsOf(tree: CollectionTree, matches: (kind: 'ligand' | 'ion', name: string) => boolean): readonly { readonly fit: FactorFit; readonly factor: FactorFit['factors'][number] }[] {
-  return geometries.flatMap((geometry: Geometry) => (['Delta', 'beta'] as const).flatMap((parameter: SeriesParameter) => {
-    const fit = factorFitOf(tree, parameter, geometry);
-    return fit.factors.filter(({ kind, name }) => matches(kind, name)).map((factor) => ({ fit, factor }));
-  }));
 }

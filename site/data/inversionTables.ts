@@ -1,7 +1,6 @@
 import { type Inversion, type SeriesParameter, averageFactor, inversions } from '#engine';
 import { csvText } from '../../scripts/export/csv.ts';
 import { type Kind, kinds, resultOf, seriesOfKind } from './comparable.ts';
-import { departure } from './factorTables.ts';
 import { oncePerCollection } from './memo.ts';
 import { complexPath } from './paths.ts';
 import { factorFitOf, floorOf, nodeOf } from './seriesFit.ts';
@@ -40,12 +39,12 @@ export function surestInversions(all: readonly KindInversions[], parameter: Seri
 export function inversionTable(tree: CollectionTree, rows: readonly Inversion[], parameter: SeriesParameter): Table {
   return {
     caption: `${parameter === 'Delta' ? 'Δ' : 'β'}: pairs against the pooled order, the surest first`,
-    columns: [column('Ion'), rowColumn('Found higher'), column('Found lower'), quantity('difference', parameter === 'Delta' ? 'cm-1' : null, true), quantity('z', null), quantity('by the factors', null, true)],
+    columns: [column('Ion'), rowColumn('Found higher'), column('Found lower'), quantity('difference', parameter === 'Delta' ? 'cm-1' : null, true), quantity('z', null), quantity(parameter === 'Delta' ? 'by the factors lower / %' : 'by the factors h higher', null, true)],
     rows: rows.slice(0, MOST_ROWS).map(({ higher, lower, difference, pooled }): readonly Cell[] => {
       const [above, below] = [nodeOf(tree, higher), nodeOf(tree, lower)];
       return [
         above.complex.ion.name, { parts: above.complex.formula.parts, path: complexPath(above.complex.row.id) }, { parts: below.complex.formula.parts, path: complexPath(below.complex.row.id) },
-        energy(difference.value, difference.u), ratio(difference.z, 1), parameter === 'Delta' ? `${departure(-pooled / (1 + pooled))}` : `average h ${plainNumber(pooled, 2)} higher`,
+        energy(difference.value, difference.u), ratio(difference.z, 1), parameter === 'Delta' ? plainNumber((100 * pooled) / (1 + pooled), 1) : plainNumber(pooled, 2),
       ];
     }),
   };

@@ -1,4 +1,7 @@
 import { elementName } from '#engine';
+import { correlations } from './correlationFigures.ts';
+import { ownFactors } from './ownFactors.ts';
+import { type ListPage, listPage, mapped, seriesOnPage } from './listPages.ts';
 import { compareIons, resultRowOf, orderedResults } from './collection.ts';
 import type { ResultRow } from '../components/resultRow.ts';
 import { ionDiagramFigures } from './diagram.ts';
@@ -7,9 +10,10 @@ import { ionPath } from './paths.ts';
 import { counted, energy, ratio } from './show.ts';
 import { type SeriesShown, ionSeries } from './seriesFigures.ts';
 import { type Cell, type Table, column, longColumn, quantity, rowColumn, soft } from './table.ts';
-import type { CollectionTree } from './tree.ts';
+import type { CollectionTree, MeasurementNode } from './tree.ts';
 import { type Parts, configuration } from './typeset.ts';
 import { groupBy } from './group.ts';
+import { oncePerCollection } from './memo.ts';
 
 export interface IonPage {
   readonly name: string;
@@ -19,19 +23,31 @@ export interface IonPage {
   readonly sentence: string;
   readonly freeIon: Table | null;
   readonly diagrams: readonly PublishedFigure[];
+  /** g and k of its states. */
+  readonly factors: Table | null;
   readonly series: readonly SeriesShown[];
-  readonly rows: readonly ResultRow[];
+  /** Delta against beta of its states. */
+  readonly planes: readonly PublishedFigure[];
+  readonly list: ListPage<ResultRow>;
 }
 
-export function ionPage(tree: CollectionTree, name: string): IonPage {
+/** Results of one ion in the order of the book. */
+export const ionResults = oncePerCollection((tree, name): readonly MeasurementNode[] => orderedResults(tree).filter(({ complex }) => complex.ion.name === name));
+
+/** What belongs to the ion as a whole stands on its first page; further pages go on with its complexes and series. */
+export function ionPage(tree: CollectionTree, name: string, number = 1): IonPage {
   const ion = tree.ions.find((row) => row.name === name)!;
-  const results = orderedResults(tree).filter((measurement) => measurement.complex.ion.name === name);
+  const results = ionResults(tree, name);
+  const first = number === 1;
   const complexes = new Set(results.map((measurement) => measurement.complex.row.id)).size;
   return {
     name, elementName: elementName(ion.metal) ?? ion.metal, configuration: configuration(ion.electrons),
     description: `${name}: energy levels, complexes and series of the collection.`,
     sentence: `${counted(complexes, 'complex', 'complexes')}, ${counted(results.length, 'measurement')}.`,
-    freeIon: freeIonTable(tree, name), diagrams: ionDiagramFigures(tree, name), series: ionSeries(tree, name), rows: results.map(resultRowOf),
+    freeIon: first ? freeIonTable(tree, name) : null, diagrams: first ? ionDiagramFigures(tree, name) : [],
+    factors: first ? ownFactors(tree, 'ion', (factor) => factor.startsWith(`${name} `)) : null,
+    series: seriesOnPage(ionSeries(tree, name), number), planes: first ? correlations(tree).filter(({ ion: own }) => own === name).map(({ figure }) => figure) : [],
+    list: mapped(listPage(results, number, ionPath(name)), resultRowOf),
   };
 }
 

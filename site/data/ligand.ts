@@ -1,11 +1,14 @@
 import { resultRowOf, orderedResults } from './collection.ts';
+import { type ListPage, listPage, mapped, seriesOnPage } from './listPages.ts';
+import { oncePerCollection } from './memo.ts';
+import { ownFactors } from './ownFactors.ts';
 import type { ResultRow } from '../components/resultRow.ts';
 import { ligandPath } from './paths.ts';
 import { counted, listed, ratio } from './show.ts';
 import { type SeriesShown, ligandSeries } from './seriesFigures.ts';
 import type { LigandRow } from './rows.ts';
 import { type Cell, type Table, column, quantity, rowColumn } from './table.ts';
-import type { CollectionTree } from './tree.ts';
+import type { CollectionTree, MeasurementNode } from './tree.ts';
 import { type FormulaShown, formulaShown } from './typeset.ts';
 
 export interface LigandPage {
@@ -16,15 +19,21 @@ export interface LigandPage {
   readonly facts: readonly { readonly name: string; readonly value: string }[];
   readonly notes: string | null;
   readonly sentence: string;
+  /** f and h. */
+  readonly factors: Table | null;
   readonly series: readonly SeriesShown[];
-  readonly rows: readonly ResultRow[];
+  readonly list: ListPage<ResultRow>;
 }
 
 const list = (json: string): readonly string[] => JSON.parse(json) as readonly string[];
 
-export function ligandPage(tree: CollectionTree, id: string): LigandPage {
+/** Results with one ligand in the order of the book. */
+export const ligandResults = oncePerCollection((tree, id): readonly MeasurementNode[] => orderedResults(tree).filter(({ complex }) => complex.ligands.some(({ ligand }) => ligand.id === id)));
+
+/** What belongs to the ligand as a whole stands on its first page; further pages go on with its complexes and series. */
+export function ligandPage(tree: CollectionTree, id: string, number = 1): LigandPage {
   const row = tree.ligands.find((ligand) => ligand.id === id)!;
-  const results = orderedResults(tree).filter((measurement) => measurement.complex.ligands.some(({ ligand }) => ligand.id === id));
+  const results = ligandResults(tree, id);
   const complexes = new Set(results.map((measurement) => measurement.complex.row.id)).size;
   const synonyms = list(row.synonyms);
   return {
@@ -39,7 +48,8 @@ export function ligandPage(tree: CollectionTree, id: string): LigandPage {
       { name: 'Record', value: row.id },
     ],
     sentence: results.length === 0 ? 'No complex of the collection holds this ligand.' : `${counted(complexes, 'complex', 'complexes')}, ${counted(results.length, 'measurement')}.`,
-    series: ligandSeries(tree, id), rows: results.map(resultRowOf),
+    factors: number === 1 ? ownFactors(tree, 'ligand', (factor) => factor === id) : null,
+    series: seriesOnPage(ligandSeries(tree, id), number), list: mapped(listPage(results, number, ligandPath(id)), resultRowOf),
   };
 }
 

@@ -9,6 +9,7 @@ import { inParts } from './parts.ts';
 import { factorFitOf, geometries, nodeOf } from './seriesFit.ts';
 import { complexPath, ionPath } from './paths.ts';
 import { energy, parameterShown, plainNumber } from './show.ts';
+import { slanted } from './slanted.ts';
 import { type Cell, type Table, rowColumn, soft, words } from './table.ts';
 import type { CollectionTree } from './tree.ts';
 
@@ -44,14 +45,14 @@ function shownMap(tree: CollectionTree, fit: FactorFit): MapShown {
       const ownTitle = parts.length === 1 ? `${title}.` : `${title}, part ${index + 1} of ${parts.length}.`;
       const within = rows.map((row) => row.slice(start, start + columns.length));
       return {
-        id: own, title: ownTitle,
+        id: own, title: ownTitle, titleParts: slanted(ownTitle, ''),
         svg: mapFigure(ions.map((ion, place) => ({ label: words(ionWithoutGeometry(ion, geometry)), cells: within[place]!.map((cell) => markOf(cell, parameter)) })), columns.map((ligand) => ligandSymbol(tree, ligand)), {
           id: own, title: ownTitle, description: `${ions.length} ions in rows, ${columns.length} ligands in columns, each in the order of its factor. The numbers stand in the table under the figure.`,
         }),
         caption: [
           `${parameter === 'Delta' ? 'In 1000 cm⁻¹. ' : ''}Framed: measured, n = ${found}. Slanted: not measured, predicted by the factors of the collection, ${predicted}. Dot: neither, ${cells.length - found - predicted}.`,
           `Triangle at the upper right: found above what the other complexes predict by more than ${distinguishableAbove} combined standard uncertainties; at the lower right: below; full: by more than ${reviewAbove}.`,
-          'Ions and ligands in the order of their factors; complexes with several kinds of ligand are in the fit but have no cell.',
+          'Ions and ligands in the order of their factors; complexes with several kinds of ligand are in the fit but have no cell. The rule knows nothing of spin: a prediction does not say that the complex would have the spin of its row.',
         ],
         source: `This collection, policy ${tree.policy.id}; conditions as for the factors.`,
         table: mapTable(tree, parameter, geometry, columns, within),

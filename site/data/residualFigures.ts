@@ -8,6 +8,7 @@ import { oncePerCollection } from './memo.ts';
 import { complexPath } from './paths.ts';
 import { factorFitOf, geometries, nodeOf } from './seriesFit.ts';
 import { counted, energy, parameterShown, plainNumber, ratio } from './show.ts';
+import { slanted } from './slanted.ts';
 import { type Cell, type Column, type Table, column, quantity, rowColumn } from './table.ts';
 import type { CollectionTree } from './tree.ts';
 import type { Parts } from './typeset.ts';
@@ -66,7 +67,7 @@ function residualFigure(tree: CollectionTree, fit: FactorFit, predicted: readonl
   const symbol = parameter === 'Delta' ? 'Δ' : 'β';
   const title = `${symbol} found against predicted by the other ${geometry} complexes${predicted.length > shown.length ? `, the ${shown.length} furthest` : ''}.`;
   return {
-    id, title,
+    id, title, titleParts: slanted(title, ''),
     svg: seriesFigure(points, axisOf(parameter), newDocument(), { id, title, description: `${counted(points.length, 'complex', 'complexes')} with error bars about an upright at 0, from below in the order of the table under the figure.` },
       { upright: 0, noteHead: [{ text: 'z', style: 'italic' }] }),
     caption: [

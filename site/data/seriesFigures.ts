@@ -13,6 +13,7 @@ import { ionSlug } from './paths.ts';
 import { floorOf } from './seriesFit.ts';
 import { seriesCsv, seriesTable } from './seriesTables.ts';
 import { counted } from './show.ts';
+import { slanted } from './slanted.ts';
 import { type Column, quantity } from './table.ts';
 import type { CollectionTree, MeasurementNode } from './tree.ts';
 import type { Parts } from './typeset.ts';
@@ -68,7 +69,7 @@ function shownSeries(tree: CollectionTree, series: Series, name: Name, id: strin
     const own = index === 0 ? id : `${id}-part-${index + 1}`;
     const ownTitle = parts.length === 1 ? `${title}.` : `${title}, part ${index + 1} of ${parts.length}.`;
     const figure: PublishedFigure = {
-      id: own, title: ownTitle,
+      id: own, title: ownTitle, titleParts: slanted(ownTitle, ''),
       svg: seriesFigure(points.slice(start, start + rows.length), SYMBOL[name].column.head, newDocument(), {
         id: own, title: ownTitle, description: `${counted(rows.length, 'value')} with error bars, from below in the order of the table under the figure. ${bracketSentence(groups)}`,
       }, { brackets: bracketsWithin(groups, start, rows.length), range }),
@@ -94,7 +95,7 @@ function caption(tree: CollectionTree, { members, conditions, leftOut }: Series,
 /** What brackets beside a figure mean, or that there are none. */
 export function bracketSentence(groups: readonly IndistinguishableGroup[]): string {
   if (groups.length === 0) return 'All neighbours can be told apart.';
-  const which = groups.length === 1 ? 'Bracket a' : `Brackets a to ${letterKey(groups.length - 1)}`;
+  const which = groups.length === 1 ? 'Bracket a' : `Brackets a ${groups.length === 2 ? 'and' : 'to'} ${letterKey(groups.length - 1)}`;
   return `${which}: not distinguishable, no two within one differ by more than two standard uncertainties of their difference.`;
 }
 

@@ -8,6 +8,7 @@ import { oncePerCollection } from './memo.ts';
 import { complexPath } from './paths.ts';
 import { factorFitOf, floorOf, geometries, nodeOf } from './seriesFit.ts';
 import { counted, energy, listed, parameterShown, plainNumber } from './show.ts';
+import { slanted } from './slanted.ts';
 import { type Cell, type Table, column, quantity, rowColumn } from './table.ts';
 import type { CollectionTree } from './tree.ts';
 import { type Parts, sentenceShown } from './typeset.ts';
@@ -69,7 +70,7 @@ function trendFigure(tree: CollectionTree, geometry: Geometry, expectation: Expe
   const title = `${symbol} ${PLACE[trend]}, ${geometry} complexes of the same ligands.`;
   const upright = parameter === 'Delta' ? 1 : 0;
   return {
-    id, title,
+    id, title, titleParts: slanted(title, ''),
     svg: seriesFigure(points, axisOf(parameter), newDocument(), { id, title, description: `${counted(points.length, 'step')} with error bars about an upright at ${upright}, from below in the order of the table under the figure.` }, { upright }),
     caption: [
       `n = ${rows.length}${rows.length < steps.length ? ` of ${steps.length}, those against the expectation first, then by |z|` : ''}. Expected to lie ${direction === 'rises' ? 'right' : 'left'} of the dotted line (${expectation.basis}).`,

@@ -76,9 +76,10 @@ describe('bands that are typed', () => {
     expect(await label(page, 'Formula').getAttribute('placeholder')).toBe('[Cr(H2O)2(NH3)4]3+');
     await sameDigits(page, await commandOn(page));
     // The address holds it all: opened anew, the same answer stands there.
-    const before = bare((await page.locator('#typed').textContent())!);
+    const answer = async (): Promise<string> => bare((await page.locator('#typed > [data-place]').allTextContents()).join(' '));
+    const before = await answer();
     await page.goto(page.url());
-    await expect.poll(async () => bare((await page.locator('#typed').textContent())!)).toBe(before);
+    await expect.poll(answer).toBe(before);
     expect(trouble).toEqual([]);
     await page.context().close();
   });

@@ -149,6 +149,8 @@ function showRecord(place: HTMLElement, id: string, text: string): void {
   const summary = document.createElement('summary');
   summary.textContent = 'The record';
   const pre = document.createElement('pre');
+  // Long lines scroll within it, by keyboard too.
+  pre.tabIndex = 0;
   pre.textContent = text;
   details.append(summary, pre);
   place.replaceChildren(about, details);
