@@ -30,7 +30,10 @@ function limits(left: string, right: string, text: string): readonly [Quantity, 
   const fault = !low.ok && (high.ok || high.code === low.code || low.code !== 'NO_UNIT') ? low : (high as QuantityFault);
   const leftMended = low.ok ? left : low.corrected;
   const shown = leftMended !== null && !low.ok && !hasUnit ? leftMended.slice(0, leftMended.length - unit.length) : leftMended;
-  const corrected = shown === null || rightMended === null ? null : `${shown} - ${rightMended}`;
+  const lowMended = low.ok ? low : parseQuantity(leftMended ?? '', 'energy');
+  // Two limits that mend to one place are no range: then there is nothing to offer.
+  const one = lowMended.ok && mended.ok && toWavenumber(lowMended.quantity).position === toWavenumber(mended.quantity).position;
+  const corrected = shown === null || rightMended === null || one ? null : `${shown} - ${rightMended}`;
   const remark = / \([^()]*\)$/.exec(fault.mend)?.[0] ?? '';
   return { ...fault, found: clip(text), expected, corrected, mend: corrected === null ? fault.mend : `write ${corrected}${remark}` };
 }

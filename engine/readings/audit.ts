@@ -91,13 +91,18 @@ function byOtherPair({ reading, parameter, quoted }: Suspect): CauseFacts | null
 }
 
 function byOtherRatio(suspect: Suspect): CauseFacts | null {
-  if (suspect.reading.ratio?.origin === 'fitted') return null;
-  for (const value of [4, 4.5, 5, 3.5, 5.5, 6]) {
+  const inForce = suspect.reading.ratio;
+  const fitted = suspect.reading.parameters.find((one) => one.name === suspect.parameter)?.value;
+  if (!inForce || inForce.origin === 'fitted' || fitted == null) return null;
+  const gap = Math.abs(suspect.quoted - fitted);
+  const attempts = [3.5, 4, 4.5, 5, 5.5, 6].filter((value) => Math.abs(value - inForce.value) > 1e-9).map((value) => {
     const policy: Policy = { ...suspect.policy, cOverB: { general: { value, u: 0 }, perIon: {} } };
     const found = refit({ ...suspect, policy })?.[suspect.parameter];
-    if (found !== undefined && close(found, suspect.quoted)) return { kind: 'ratio', value };
-  }
-  return null;
+    return { value, left: found === undefined ? Number.POSITIVE_INFINITY : Math.abs(found - suspect.quoted) };
+  });
+  const best = attempts.reduce((a, b) => (b.left < a.left ? b : a));
+  // Where C/B hardly moves the number, no C/B explains it.
+  return best.left <= reproduced * Math.abs(suspect.quoted) && best.left < gap / 4 ? { kind: 'ratio', value: best.value } : null;
 }
 
 function byOtherFreeIon({ reading, parameter, quoted, measurement, policy }: Suspect): CauseFacts | null {

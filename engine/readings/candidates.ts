@@ -1,7 +1,7 @@
 import { readLabel } from '../levels/labels.ts';
 import { mergedBands, setAside, singleBand } from '../measurement/observation.ts';
 import type { Observation } from '../measurement/observation.ts';
-import type { Band, Measurement } from '../measurement/types.ts';
+import type { Band, BandRole, Measurement } from '../measurement/types.ts';
 import type { Policy } from '../policy/types.ts';
 import { isStrong, looksNarrow, looksWeak } from './evidence.ts';
 import { transitionsOf } from './transitions.ts';
@@ -65,9 +65,15 @@ function typedCandidates(band: Band, ion: GroundCase, parentRatio: number): read
   return [...new Set(labels)];
 }
 
+/** Words of a term list that name no level. */
+const roleWords: readonly string[] = ['CT', 'ligand', 'vibration', 'impurity'] satisfies readonly BandRole[];
+
 function itemOf(observation: Observation, band: Band, ion: GroundCase, parentRatio: number, freedom: Freedom): Item | string {
   const typed = band.terms.length > 0 && freedom === 'as typed';
-  const leaveOut = typed ? null : isStrong(band) ? { reason: 'as strong as charge transfer', counts: false } : { reason: 'no transition is left for it', counts: true };
+  // A list such as [4T1g(F), CT] lets the band be no d-d transition at all.
+  const maybeOther = typed && band.terms.some((term) => roleWords.includes(term));
+  const other = { reason: `may be ${band.terms.find((term) => roleWords.includes(term))}, as typed`, counts: !isStrong(band) };
+  const leaveOut = maybeOther ? other : typed ? null : isStrong(band) ? { reason: 'as strong as charge transfer', counts: false } : { reason: 'no transition is left for it', counts: true };
   const candidates = typed ? typedCandidates(band, ion, parentRatio) : candidatesByLooks(ion, band);
   if (typed && candidates.length === 0) return `no transition of this ion is named ${band.terms.join(' or ')}`;
   return { observation, candidates, leaveOut, typed };
@@ -94,7 +100,8 @@ export function gatherItems(measurement: Measurement, ion: GroundCase, policy: P
     else if (band.kind !== 'component') take(singleBand(measurement, index, policy), band);
     else if (band.degeneracy === null) notFitted.push({ band: index, reason: 'a component without its degeneracy cannot enter a barycentre' });
     else {
-      const key = [...band.terms].sort().join('|');
+      // One term under two spellings, 4T1g(F) and a4T1g, is one group.
+      const key = [...typedCandidates(band, ion, parentRatio)].sort().join('|');
       components.set(key, [...(components.get(key) ?? []), index]);
     }
   });

@@ -54,7 +54,7 @@ export function publishParameters(measurement: Measurement, fit: Fit, policy: Po
   const racahC =
     fit.mode === 'field, B, C'
       ? published('C', at.racahC, u[2]!, uTotal[2]!, 'fitted')
-      : withheld('C', `no spin-flip bands fix it; ${ratioText} was assumed`);
+      : withheld('C', `${whyNoC(fit, policy)}; ${ratioText} was assumed`);
 
   const beta = ((): Parameter => {
     if (racahB.value === null) return withheld('beta', 'B is withheld');
@@ -65,6 +65,12 @@ export function publishParameters(measurement: Measurement, fit: Fit, policy: Po
   })();
 
   return [delta, racahB, racahC, beta];
+}
+
+/** Why C was not fitted. */
+function whyNoC(fit: Fit, policy: Policy): string {
+  if (fit.used.every(Boolean)) return 'no spin-flip bands fix it';
+  return policy.cFitted ? 'the spin-flip bands do not fix it under the policy\'s ceiling' : 'the policy assumes C always';
 }
 
 /** Published numbers that rest on an assumed value, and that value in words; null where none does. */

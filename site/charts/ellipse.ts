@@ -10,19 +10,20 @@ export interface Ellipse {
   readonly correlation: number;
 }
 
-const STEPS = 36;
+/** Four cubic pieces follow a circle to 0.03 % of its radius with their inner points at this share of it. */
+const HANDLE = (4 / 3) * (Math.SQRT2 - 1);
 
 /**
  * The ellipse of one standard uncertainty: its shadow on each axis is the value with its u. Points (cos t, rho cos t + sqrt(1 - rho^2) sin t).
+ * The scales must be linear.
  * @param scale from data to drawing
  */
 export function ellipsePath({ x, y, ux, uy, correlation }: Ellipse, scale: { readonly x: (value: number) => number; readonly y: (value: number) => number }): string {
   const across = Math.sqrt(Math.max(0, 1 - correlation ** 2));
-  const points = Array.from({ length: STEPS }, (_, step) => {
-    const t = (2 * Math.PI * step) / STEPS;
-    return `${c(scale.x(x + ux * Math.cos(t)))} ${c(scale.y(y + uy * (correlation * Math.cos(t) + across * Math.sin(t))))}`;
-  });
-  return `M${points.join('L')}Z`;
+  // A point of the unit circle carried to the ellipse; inner points go with it, because the map is linear.
+  const at = (a: number, b: number): string => `${c(scale.x(x + ux * a))} ${c(scale.y(y + uy * (correlation * a + across * b)))}`;
+  const piece = ([a, b]: readonly [number, number]): string => `C${at(a - HANDLE * b, b + HANDLE * a)} ${at(HANDLE * a - b, HANDLE * b + a)} ${at(-b, a)}`;
+  return `M${at(1, 0)}${([[1, 0], [0, 1], [-1, 0], [0, -1]] as const).map(piece).join('')}Z`;
 }
 
 /** Where the letter of a point stands; far ones want a line to their point. */

@@ -43,6 +43,9 @@ export const correlationVerdict = ({ withinNull }: PlaneCorrelation): string => 
   ? 'within the null band: the errors of the fits alone would show as much'
   : 'outside the null band: more than the errors of the fits alone would show';
 
+/** Rows of the table on a page. */
+const MOST_ROWS = 100;
+
 function correlationFigure(tree: CollectionTree, kind: Kind, correlation: PlaneCorrelation, conditions: string): PublishedFigure {
   const { points, r, interval, leaveOneOut, nullBand } = correlation;
   const id = `${ionSlug(kind.key)}-correlation`;
@@ -50,7 +53,7 @@ function correlationFigure(tree: CollectionTree, kind: Kind, correlation: PlaneC
   const keyed = points.length <= MOST_KEYS;
   const keys = points.map((_, index) => (keyed ? letterKey(index) : ''));
   return {
-    id, title, titleParts: slanted(title, ''),
+    id, title, titleParts: slanted(title, ''), asPicture: !keyed,
     svg: planeFigure(points.map((point, index) => ({ x: point.beta, y: point.delta, ux: point.uBeta, uy: point.uDelta, correlation: point.correlation, key: keys[index]! })), {
       x: quantity('β', null).head, y: quantity('Δ', 'cm-1').head,
     }, correlation, newDocument(), {
@@ -73,9 +76,9 @@ function correlationFigure(tree: CollectionTree, kind: Kind, correlation: PlaneC
 function correlationTable(tree: CollectionTree, { points }: PlaneCorrelation, keys: readonly string[]): Table {
   const keyed = keys.some((key) => key !== '');
   return {
-    caption: 'Points of the figure, u in total',
+    caption: points.length > MOST_ROWS ? `Points of the figure, the first ${MOST_ROWS} of ${points.length}, u in total; all stand in the CSV file` : 'Points of the figure, u in total',
     columns: [...(keyed ? [column('Key')] : []), rowColumn('Complex'), column('Measurement'), quantity('Δ', 'cm-1'), quantity('β', null), quantity('correlation', null, true)],
-    rows: points.map(({ result, delta, uDelta, beta, uBeta, correlation }, index): readonly Cell[] => {
+    rows: points.slice(0, MOST_ROWS).map(({ result, delta, uDelta, beta, uBeta, correlation }, index): readonly Cell[] => {
       const { complex, row } = nodeOf(tree, result);
       return [...(keyed ? [keys[index]!] : []), { parts: complex.formula.parts, path: complexPath(complex.row.id) }, row.id, energy(delta, uDelta), energy(beta, uBeta), ratio(correlation, 2)];
     }),

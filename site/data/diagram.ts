@@ -85,7 +85,7 @@ function diagramFigure(one: IonDiagram): PublishedFigure {
   const ratioText = ratio(diagram.cOverB, 2);
   const crossings = diagram.grounds.slice(1).map((range) => figures(range.from, 3));
   return {
-    id, title, titleParts: [...words(`Energy levels of ${geometry} ${ion}, `), ...configuration(electrons), ...words(', as a Tanabe-Sugano diagram.')],
+    id, title, asPicture: marked.some(({ key }) => key === ''), titleParts: [...words(`Energy levels of ${geometry} ${ion}, `), ...configuration(electrons), ...words(', as a Tanabe-Sugano diagram.')],
     svg: levelDiagramFigure(diagram, one.ceiling, marked.map(({ mark }) => mark), newDocument(), { id, title, description: describe(one) }),
     caption: [
       `E/B against Δ/B at C/B = ${ratioText}. Solid: the ground level's multiplicity; thin and dashed: other multiplicities.`,
@@ -136,7 +136,7 @@ function describe({ diagram, ceiling }: IonDiagram): string {
 }
 
 /** Rows of the diagram's table on a page. */
-const MOST_ROWS = 200;
+const MOST_ROWS = 100;
 
 function markTable({ marked, electrons }: IonDiagram): Table {
   const keyed = marked.some(({ key }) => key !== '');

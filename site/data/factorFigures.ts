@@ -54,7 +54,7 @@ function shownFactors(tree: CollectionTree, fit: FactorFit, series: FactorSeries
           id: own, title: ownTitle, description: `${counted(rows.length, 'factor')} with error bars, from below in the order of the table under the figure.${printed > 0 ? ' Diamonds are printed values.' : ''}`,
         }, { brackets: bracketsWithin(groups, start, rows.length), range, noteHead: [{ text: 'n', style: 'italic' }] }),
         caption: [
-          `${counted(complexes, 'complex', 'complexes')}; n: those behind each factor. Bar: one standard uncertainty.`,
+          `n = ${complexes}; the column n: complexes behind each factor. Bar: one standard uncertainty.`,
           ...(points.some(({ open }) => open) ? ['Open circle: no spare complex tests it.'] : []),
           ...(printed > 0 ? ['Diamond: printed by Jørgensen, drawn beside, never used in the fit.'] : []),
           bracketSentence(groups),

@@ -5,6 +5,8 @@ import type { Parts } from './typeset.ts';
 export interface FigureShown {
   readonly id: string;
   readonly svg: string;
+  /** Too heavy to stand in a page: shown there as a picture file, `plateId`, without a name or a place for each mark. */
+  readonly asPicture?: boolean;
   readonly title: string;
   /** The title typeset, where it holds a formula. */
   readonly titleParts?: Parts;
@@ -23,8 +25,17 @@ export interface PublishedFigure extends FigureShown {
   readonly csv: string | null;
 }
 
-/** Id of the picture of a series figure on the series page. */
+/** Id of the picture that stands for a figure where the figure itself does not. */
 export const plateId = (id: string): string => `${id}-plate`;
+
+/** Width and height of a drawing. */
+export function drawingSize(svg: string): { readonly width: number; readonly height: number } {
+  const [, width, height] = /viewBox="0 0 ([\d.]+) ([\d.]+)"/.exec(svg) ?? [];
+  return { width: Number(width), height: Number(height) };
+}
+
+/** Path of the picture that stands for a figure. */
+export const platePath = (id: string): string => `figures/${plateId(id)}.svg`;
 
 export function figureFiles(id: string): FigureShown['files'] {
   return [{ name: 'SVG', path: `figures/${id}.svg` }, { name: 'CSV', path: `figures/${id}.csv` }];

@@ -36,6 +36,7 @@ export function pictures(tree: CollectionTree): readonly { readonly id: string; 
   return [
     ...ionDiagrams(tree).map((one) => ({ id: `${one.id}-background`, svg: diagramBackground(one) })),
     ...[...series, ...correlations(tree)].map(({ figure }) => ({ id: plateId(figure.id), svg: figure.svg })),
+    ...tree.ions.flatMap(({ name }) => ionDiagramFigures(tree, name)).filter(({ asPicture }) => asPicture).map(({ id, svg }) => ({ id: plateId(id), svg })),
   ];
 }
 

@@ -47,7 +47,7 @@ export function ionPage(tree: CollectionTree, name: string, number = 1): IonPage
     freeIon: first ? freeIonTable(tree, name) : null, diagrams: first ? ionDiagramFigures(tree, name) : [],
     factors: first ? ownFactors(tree, 'ion', (factor) => factor.startsWith(`${name} `)) : null,
     series: seriesOnPage(ionSeries(tree, name), number), planes: first ? correlations(tree).filter(({ ion: own }) => own === name).map(({ figure }) => figure) : [],
-    list: mapped(listPage(results, number, ionPath(name)), resultRowOf),
+    list: mapped(listPage(results, ionSeries(tree, name), number, ionPath(name)), resultRowOf),
   };
 }
 

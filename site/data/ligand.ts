@@ -49,7 +49,7 @@ export function ligandPage(tree: CollectionTree, id: string, number = 1): Ligand
     ],
     sentence: results.length === 0 ? 'No complex of the collection holds this ligand.' : `${counted(complexes, 'complex', 'complexes')}, ${counted(results.length, 'measurement')}.`,
     factors: number === 1 ? ownFactors(tree, 'ligand', (factor) => factor === id) : null,
-    series: seriesOnPage(ligandSeries(tree, id), number), list: mapped(listPage(results, number, ligandPath(id)), resultRowOf),
+    series: seriesOnPage(ligandSeries(tree, id), number), list: mapped(listPage(results, ligandSeries(tree, id), number, ligandPath(id)), resultRowOf),
   };
 }
 

@@ -1,4 +1,4 @@
-import { type FactorFit, type Geometry, type MapCell, type SeriesParameter, distinguishableAbove, factorMap, isPrediction, reviewAbove } from '#engine';
+import { type FactorFit, type FactorPrediction, type Geometry, type MapCell, type Predicted, type SeriesParameter, distinguishableAbove, factorMap, isPrediction, reviewAbove } from '#engine';
 import { csvText } from '../../scripts/export/csv.ts';
 import { type MapMark, mapFigure } from '../charts/mapFigure.ts';
 import { ionWithoutGeometry } from './factorNames.ts';
@@ -36,7 +36,7 @@ function shownMap(tree: CollectionTree, fit: FactorFit): MapShown {
   const title = `${parameter === 'Delta' ? 'Δ' : 'β'} of ${geometry} complexes with one kind of ligand`;
   const cells = rows.flat();
   const found = cells.filter((cell) => cell.found !== null).length;
-  const predicted = cells.filter((cell) => cell.found === null && isPrediction(cell.predicted)).length;
+  const predicted = cells.filter((cell) => cell.found === null && isPossible(cell.predicted)).length;
   const parts = inParts(ligands, COLUMNS);
   return {
     parameter, geometry,
@@ -62,9 +62,12 @@ function shownMap(tree: CollectionTree, fit: FactorFit): MapShown {
   };
 }
 
+/** A prediction that can be a number of its kind: the rule also gives β below 0 where factors from few complexes are carried far. */
+const isPossible = (predicted: Predicted): predicted is FactorPrediction => isPrediction(predicted) && predicted.predicted > 0;
+
 function markOf({ found, predicted }: MapCell, parameter: SeriesParameter): MapMark {
   const text = (value: number): string => (parameter === 'Delta' ? plainNumber(value / 1000, 1) : plainNumber(value, 2));
-  if (found === null) return isPrediction(predicted) ? { form: 'slanted', text: text(predicted.predicted), flag: null } : { form: 'dot', text: '', flag: null };
+  if (found === null) return isPossible(predicted) ? { form: 'slanted', text: text(predicted.predicted), flag: null } : { form: 'dot', text: '', flag: null };
   return { form: 'framed', text: text(found.result.parameters[parameter].value!), flag: flagOf(found.leftOut?.z ?? 0) };
 }
 
@@ -81,7 +84,7 @@ function mapTable(tree: CollectionTree, parameter: SeriesParameter, geometry: Ge
     rows: rows.map((cells): readonly Cell[] => [
       { parts: words(ionWithoutGeometry(cells[0]!.ion, geometry)), path: ionPath(cells[0]!.ion.split(' ')[0]!) },
       ...cells.map(({ found, predicted }): Cell => {
-        if (found === null) return isPrediction(predicted) ? soft(`p ${energy(predicted.predicted, predicted.u)}`) : soft('–');
+        if (found === null) return isPossible(predicted) ? soft(`p ${energy(predicted.predicted, predicted.u)}`) : soft(isPrediction(predicted) ? 'p below 0' : '–');
         const node = nodeOf(tree, found.result);
         return { parts: words(parameterShown(node.chosen.parameters[parameter]).total.text!), path: complexPath(node.complex.row.id) };
       }),

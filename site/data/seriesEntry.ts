@@ -1,4 +1,4 @@
-import { type PublishedFigure, plateId } from './figure.ts';
+import { type PublishedFigure, drawingSize, platePath } from './figure.ts';
 
 /** A figure as a page of series shows it: a picture file, with the page that holds it in full. */
 export interface SeriesEntry {
@@ -12,6 +12,5 @@ export interface SeriesEntry {
 }
 
 export function pictureEntry({ id, title, svg }: PublishedFigure, count: number, page: string, pageName: string): SeriesEntry {
-  const [, width, height] = /viewBox="0 0 ([\d.]+) ([\d.]+)"/.exec(svg) ?? [];
-  return { title, image: `figures/${plateId(id)}.svg`, width: Number(width), height: Number(height), caption: `n = ${count}.`, page: `${page}#${id}`, pageName };
+  return { title, image: platePath(id), ...drawingSize(svg), caption: `n = ${count}.`, page: `${page}#${id}`, pageName };
 }

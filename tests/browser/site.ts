@@ -66,4 +66,4 @@ export function builtPages(site: ServedSite): readonly { readonly path: string; 
 }
 
 /** One page of each kind. */
-export const PAGE_KINDS = ['', 'complexes/cr-am6/', 'complexes/cr-aq6/', 'complexes/ti-aq6/', 'ions/', 'ions/cr-iii/', 'ligands/', 'ligands/ammine/', 'series/', 'methods/', 'review/', 'cautions/', 'cautions/perchlorate/', 'changes/', 'compare/', 'predict/', 'data/', '404.html'] as const;
+export const PAGE_KINDS = ['', 'complexes/cr-am6/', 'complexes/cr-aq6/', 'complexes/ti-aq6/', 'ions/', 'ions/cr-iii/', 'ligands/', 'ligands/ammine/', 'series/', 'series/factors/', 'series/predictions/', 'series/orders/', 'series/correlation/', 'methods/', 'review/', 'cautions/', 'cautions/perchlorate/', 'changes/', 'compare/', 'predict/', 'data/', '404.html'] as const;

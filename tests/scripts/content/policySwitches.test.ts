@@ -20,7 +20,7 @@ interface TypedRecord {
 
 const cobaltic: TypedRecord = { head: 'formula: "[Co(NH3)6]3+"\nion: Co(III)\nspin: low', bands: '{ position: 21050(100) cm-1, term: a1T1g }, { position: 29500(100) cm-1, term: a1T2g }' };
 
-const records: Readonly<{ [id: string]: Record }> = {
+const records: Readonly<Record<string, TypedRecord>> = {
   'cobaltic-ammine': cobaltic,
   'rhodium-ammine': { head: 'formula: "[Rh(NH3)6]3+"\nion: Rh(III)\nspin: low', bands: '{ position: 32700(100) cm-1, term: a1T1g }, { position: 39100(100) cm-1, term: a1T2g }' },
   // The line makes C determinable.
@@ -33,11 +33,16 @@ const records: Readonly<{ [id: string]: Record }> = {
   'chromium-near': { head: 'formula: "[Cr(NH3)6]3+"\nion: Cr(III)', bands: '{ position: 26700(100) cm-1, term: 4T2g }, { position: 30500(100) cm-1, term: 4T1g(F) }' },
 };
 
-let made = 0;
+/** What came out, by the id of the record. */
+interface Read {
+  readonly readings: ReadonlyMap<string, Reading>;
+  readonly rivals: ReadonlyMap<string, readonly Reading[]>;
+  readonly policies: ReadonlyMap<string, Policy>;
+}
 
 /** Reads all records under a typed policy; `override` is a line of the measurement of the record it names. */
-function readUnder(policyText: string, override: { readonly of: string; readonly line: string } | null = null): { readonly readings: ReadonlyMap<string, Reading>; readonly rivals: ReadonlyMap<string, readonly Reading[]>; readonly policies: ReadonlyMap<string, Policy> } {
-  const content = join(folder, String((made += 1)));
+function readUnder(policyText: string, override: { readonly of: string; readonly line: string } | null = null): Read {
+  const content = mkdtempSync(join(folder, 'content-'));
   mkdirSync(join(content, 'complexes'), { recursive: true });
   mkdirSync(join(content, 'ligands'));
   cpSync(join(cases, 'bands', 'group.yaml'), join(content, 'group.yaml'));
@@ -64,11 +69,11 @@ function readUnder(policyText: string, override: { readonly of: string; readonly
 const usual = readUnder('');
 
 /** Ids of the records of which any of the four parameters differs from that under the default policy. */
-function changed({ readings }: { readonly readings: ReadonlyMap<string, Reading> }): readonly string[] {
+function changed({ readings }: Read): readonly string[] {
   return [...readings].filter(([id, reading]) => JSON.stringify(reading.parameters) !== JSON.stringify(usual.readings.get(id)!.parameters)).map(([id]) => id).toSorted();
 }
 
-function of(read: { readonly readings: ReadonlyMap<string, Reading> }, id: string, name: Parameter['name']): Parameter {
+function of(read: Read, id: string, name: Parameter['name']): Parameter {
   return read.readings.get(id)!.parameters.find((one) => one.name === name)!;
 }
 

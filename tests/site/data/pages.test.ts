@@ -98,7 +98,7 @@ test('neighbours closer than two uncertainties of the difference are not disting
 test('an ion page holds the free ion, its diagram with the complexes on it, and its series', () => {
   const page = ionPage(tree, 'Cr(III)');
   expect(page.elementName).toBe('chromium');
-  expect(page.rows).toHaveLength(5);
+  expect(page.list.rows).toHaveLength(5);
   expect(page.diagrams.map(({ id }) => id)).toEqual(['cr-iii-octahedral-levels']);
   expect(page.diagrams[0]!.caption.join(' ')).toContain('n = 5');
   expect(page.diagrams[0]!.table!.rows.length).toBeGreaterThan(8);
@@ -114,14 +114,14 @@ test('every published figure has title, caption with n, source, data table, SVG 
     if (figure.table!.rows.length > 0) expect(figure.caption.join(' '), figure.id).toMatch(/n = \d/);
     expect(figure.source, figure.id).not.toBe('');
     expect(figure.svg, figure.id).toMatch(/^<svg/);
-    expect(figure.csv.split('\r\n').length, figure.id).toBeGreaterThan(2);
+    expect(figure.csv!.split('\r\n').length, figure.id).toBeGreaterThan(2);
     expect(figure.files.map(({ path }) => path), figure.id).toEqual([`figures/${figure.id}.svg`, `figures/${figure.id}.csv`]);
   }
 });
 
 test('a ligand page lists its complexes, and metals of those that hold it alone', () => {
   const page = ligandPage(tree, 'ammine');
-  expect(page.rows.map(({ complex: id }) => id)).toEqual(['cr-am6', 'ni-am6']);
+  expect(page.list.rows.map(({ complex: id }) => id)).toEqual(['cr-am6', 'ni-am6']);
   expect(page.series.map(({ figure }) => figure.id)).toEqual(['ligand-ammine-octahedral-delta', 'ligand-ammine-octahedral-beta']);
   expect(ligandPage(tree, 'chlorido').facts).toContainEqual({ name: 'Charge', value: '\u22121' });
   expect(ligandList(tree).rows).toHaveLength(4);
