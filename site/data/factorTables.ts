@@ -14,7 +14,7 @@ export function factorTable(tree: CollectionTree, fit: FactorFit, factors: reado
     caption: 'Factors in the figure, lowest first',
     columns: [
       rowColumn(kind === 'ligand' ? 'Ligand' : 'Ion'), FACTORS[fit.parameter][kind].head, quantity('n', null),
-      ...(printed ? [quantity('printed', null, true), quantity('own − printed', null, true)] : []), column('Bracket'), longColumn('Remark'),
+      ...(printed ? [quantity('printed', null, true), quantity('from the printed', null, true)] : []), column('Bracket'), longColumn('Remark'),
     ],
     rows: factors.map((factor, place): readonly Cell[] => {
       const beside = printedBeside(tree, fit, factor);

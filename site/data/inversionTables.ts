@@ -28,7 +28,7 @@ export const inversionsByKind = oncePerCollection((tree): readonly KindInversion
   return placed < 2 ? [] : [{ kind, parameter, pairs: (placed * (placed - 1)) / 2, found: inversions({ members: results, parameter }, fit, floorOf(tree)) }];
 })));
 
-/** Inversions that a page lists; all stand in the CSV file. */
+/** Inversions that a page lists. */
 const MOST_ROWS = 60;
 
 /** Those beyond doubt, the surest first. */
@@ -52,11 +52,16 @@ export function inversionTable(tree: CollectionTree, rows: readonly Inversion[],
 
 export const moreInversions = (rows: readonly Inversion[]): number => Math.max(0, rows.length - MOST_ROWS);
 
-/** Every inversion, also those that cannot be told apart. */
+/** Pairs grow with the square of the complexes: the file keeps so many. */
+export const MOST_IN_FILE = 5000;
+
+/** Inversions of both parameters, the surest first, also those that cannot be told apart. */
 export function inversionCsv(tree: CollectionTree, all: readonly KindInversions[]): string {
+  const rows = all.flatMap(({ kind, parameter, found }) => found.map((inversion) => ({ kind, parameter, inversion })))
+    .sort((a, b) => b.inversion.difference.z - a.inversion.difference.z).slice(0, MOST_IN_FILE);
   return csvText(['parameter', 'ion', 'higher', 'higher_measurement', 'lower', 'lower_measurement', 'difference', 'difference_u', 'z', 'pooled', 'distinguishable'],
-    all.flatMap(({ kind, parameter, found }) => found.map(({ higher, lower, difference, pooled }) => {
+    rows.map(({ kind, parameter, inversion: { higher, lower, difference, pooled } }) => {
       const [above, below] = [nodeOf(tree, higher), nodeOf(tree, lower)];
       return [parameter, kind.ion, above.complex.row.id, above.row.id, below.complex.row.id, below.row.id, difference.value, difference.u, difference.z, pooled, difference.distinguishable ? 1 : 0];
-    })));
+    }));
 }

@@ -1,5 +1,5 @@
-import { inversionTable, inversionsByKind, moreInversions, surestInversions } from './inversionTables.ts';
-import { counted } from './show.ts';
+import { MOST_IN_FILE, inversionTable, inversionsByKind, moreInversions, surestInversions } from './inversionTables.ts';
+import { counted, plainNumber } from './show.ts';
 import type { Table } from './table.ts';
 import type { CollectionTree } from './tree.ts';
 import { type TrendShown, expectationSentences, trends, trendsWithout } from './trendFigures.ts';
@@ -7,7 +7,7 @@ import { type Parts, sentenceShown } from './typeset.ts';
 
 export interface OrdersPage {
   readonly inversions: readonly { readonly sentence: Parts; readonly table: Table | null; readonly more: number }[];
-  readonly inversionsFile: string;
+  readonly inversionsFile: { readonly path: string; readonly text: string };
   readonly trends: readonly TrendShown[];
   readonly expectations: readonly Parts[];
   readonly without: string | null;
@@ -19,6 +19,7 @@ export const INVERSIONS = 'inversions';
 export function ordersPage(tree: CollectionTree): OrdersPage {
   const all = inversionsByKind(tree);
   const shown = trends(tree);
+  const every = all.reduce((sum, { found }) => sum + found.length, 0);
   return {
     inversions: (['Delta', 'beta'] as const).map((parameter) => {
       const own = all.filter((one) => one.parameter === parameter);
@@ -32,6 +33,6 @@ export function ordersPage(tree: CollectionTree): OrdersPage {
         table: rows.length === 0 ? null : inversionTable(tree, rows, parameter), more: moreInversions(rows),
       };
     }),
-    inversionsFile: `figures/${INVERSIONS}.csv`, trends: shown, expectations: expectationSentences, without: trendsWithout(shown),
+    inversionsFile: { path: `figures/${INVERSIONS}.csv`, text: every > MOST_IN_FILE ? `The ${plainNumber(MOST_IN_FILE, 0)} surest pairs as CSV` : 'All these pairs as CSV' }, trends: shown, expectations: expectationSentences, without: trendsWithout(shown),
   };
 }

@@ -13,7 +13,7 @@ const VERDICTS = ['tested', 'untested', 'assumed', 'strained', 'not determinable
 
 /** Rows sorted by a column's value; what is missing stands last either way, ties keep the order in which they came. */
 export function ordered(collection: FoundCollection, rows: readonly number[], { key, descending }: Sorting): readonly number[] {
-  const value = valueOf(collection, key);
+  const value = valueReader(collection, key);
   const sign = descending ? -1 : 1;
   return rows.map((row, place) => ({ row, place, value: value(collection.rows[row]!) })).sort((a, b) => {
     if (a.value === null || b.value === null) return a.value === b.value ? a.place - b.place : a.value === null ? 1 : -1;
@@ -21,7 +21,7 @@ export function ordered(collection: FoundCollection, rows: readonly number[], { 
   }).map(({ row }) => row);
 }
 
-function valueOf({ complexes }: FoundCollection, key: SortKey): (row: FoundRow) => number | string | null {
+function valueReader({ complexes }: FoundCollection, key: SortKey): (row: FoundRow) => number | string | null {
   switch (key) {
     case 'complex': return ({ complex }) => complexes[complex]!.formula.replace(/[^A-Za-z0-9]/g, '');
     case 'Delta': return ({ delta }) => delta;
