@@ -11,6 +11,9 @@ export default defineConfig({
     exclude: [...configDefaults.exclude, ...(withoutBrowser ? ['tests/browser/**'] : [])],
     // A test left focused would hide the others.
     allowOnly: false,
+    globalSetup: ['tests/run/folder.ts'],
+    // Modules are evaluated once a worker: half the time, and a test that leaves something behind in a module shows up.
+    isolate: false,
     testTimeout: 60_000,
     hookTimeout: 180_000,
   },

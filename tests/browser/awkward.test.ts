@@ -1,6 +1,6 @@
 import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
-import { builtPages, openBrowser, servedSite, watchedPage } from './site.ts';
+import { builtPages, openBrowser, servedSample, watchedPage } from './site.ts';
 
 let browser: Browser;
 beforeAll(async () => { browser = await openBrowser(); });
@@ -8,7 +8,7 @@ afterAll(async () => { await browser?.close(); });
 
 test('hostile text in every field is shown as text and runs nothing', async () => {
   const hostile = '"><img src=x onerror=alert(1)><script>alert(2)</script>';
-  const site = await servedSite('/', { hostile });
+  const site = await servedSample('/', { hostile });
   try {
     const { page, trouble } = await watchedPage(browser, site);
     for (const { path } of builtPages(site)) await page.goto(site.address + path);
@@ -25,7 +25,7 @@ test('hostile text in every field is shown as text and runs nothing', async () =
 });
 
 test('a collection without records is a friendly site with the next step', async () => {
-  const site = await servedSite('/bands/', { complexes: false });
+  const site = await servedSample('/bands/', { complexes: false });
   try {
     const { page, trouble } = await watchedPage(browser, site);
     for (const { path } of builtPages(site)) await page.goto(site.address + path);

@@ -1,11 +1,13 @@
-import { mkdirSync, mkdtempSync, readFileSync, readdirSync, rmSync } from 'node:fs';
+import { mkdtempSync, readFileSync, readdirSync } from 'node:fs';
 import type { AddressInfo } from 'node:net';
-import { join, resolve } from 'node:path';
+import { join } from 'node:path';
 import { type Browser, type BrowserContextOptions, type Page, chromium } from 'playwright-core';
+import { inject } from 'vitest';
 import { writeExports } from '../../scripts/export/writeExports.ts';
 import { buildPages } from '../../scripts/publish/pages.ts';
 import { createSiteServer } from '../../scripts/publish/staticServer.ts';
 import { findChromium } from '../../scripts/test/chromium.ts';
+import { sharedFolder } from '../run/shared.ts';
 import { writeSampleDatabase } from '../site/sampleDatabase.ts';
 
 /** The sample collection built and served, as a visitor finds it. */
@@ -16,21 +18,34 @@ export interface ServedSite {
   readonly close: () => Promise<void>;
 }
 
-/** Builds the sample under a base path and serves it. Each build has a folder of its own inside the project, because the page builder shares one outside it. */
-export async function servedSite(base: string, options: Parameters<typeof writeSampleDatabase>[1] = {}): Promise<ServedSite> {
-  mkdirSync(resolve('.cache'), { recursive: true });
-  const work = mkdtempSync(resolve('.cache', 'browser-'));
-  const folder = join(work, 'dist');
-  const database = writeSampleDatabase(join(work, 'collection.sqlite'), options);
-  await buildPages(database, { origin: 'https://example.org', base }, folder);
-  writeExports(database, join(folder, 'data'));
-  const server = createSiteServer(folder, base);
+/** The sample built under a base path, once a run, and served. */
+export async function servedSite(base: string): Promise<ServedSite> {
+  const folder = await sharedFolder(`sample-${base.replaceAll('/', '') || 'root'}`, (made) => buildSite(made, base, {}));
+  return serve(folder, base);
+}
+
+/** A sample of one test's own: other text in it, or no complexes. */
+export async function servedSample(base: string, options: NonNullable<Parameters<typeof writeSampleDatabase>[1]>): Promise<ServedSite> {
+  const folder = mkdtempSync(join(inject('runFolder'), 'own-'));
+  await buildSite(folder, base, options);
+  return serve(folder, base);
+}
+
+async function buildSite(folder: string, base: string, options: NonNullable<Parameters<typeof writeSampleDatabase>[1]>): Promise<void> {
+  const database = writeSampleDatabase(join(folder, 'collection.sqlite'), options);
+  await buildPages(database, { origin: 'https://example.org', base }, join(folder, 'dist'));
+  writeExports(database, join(folder, 'dist', 'data'));
+}
+
+/** Serves `folder`/dist under the base path. */
+export async function serve(folder: string, base: string): Promise<ServedSite> {
+  const dist = join(folder, 'dist');
+  const server = createSiteServer(dist, base);
   await new Promise<void>((done) => { server.listen(0, '127.0.0.1', done); });
   return {
-    address: `http://127.0.0.1:${(server.address() as AddressInfo).port}${base}`, folder,
+    address: `http://127.0.0.1:${(server.address() as AddressInfo).port}${base}`, folder: dist,
     close: async () => {
       await new Promise((done) => { server.close(done); server.closeAllConnections(); });
-      rmSync(work, { recursive: true, force: true });
     },
   };
 }

@@ -1,4 +1,4 @@
-import { afterAll, beforeAll, expect, test } from 'vitest';
+import { beforeAll, expect, test } from 'vitest';
 import { type ComparedCollection, measurementId, policyId } from '#engine';
 import { readStoredCollection } from '../../../scripts/compare/collection.ts';
 import { placeRecord } from '../../../scripts/compare/place.ts';
@@ -11,26 +11,25 @@ import { formOfQuery, formOfRecord, formQuery } from '../../../site/client/compa
 import { comparedCollection, comparedComplex } from '../../../site/data/compare.ts';
 import { readRows } from '../../../site/data/database.ts';
 import { type CollectionTree, collectionTree } from '../../../site/data/tree.ts';
-import { type Refitted, refittedDemonstration } from '../demonstration.ts';
+import { refittedDemonstration } from '../demonstration.ts';
 
-let demonstration: Refitted;
+let demonstration: string;
 let tree: CollectionTree;
 let packed: PackedCollection;
-beforeAll(() => {
-  demonstration = refittedDemonstration();
-  tree = collectionTree(readRows(demonstration.database));
+beforeAll(async () => {
+  demonstration = await refittedDemonstration();
+  tree = collectionTree(readRows(demonstration));
   packed = JSON.parse(JSON.stringify(comparedCollection(tree))) as PackedCollection;
 });
-afterAll(() => demonstration?.remove());
 
 test('the page compares with the very numbers that the command reads from the database', () => {
-  const command: ComparedCollection = readStoredCollection(demonstration.database).compared;
+  const command: ComparedCollection = readStoredCollection(demonstration).compared;
   expect(unpackCollection(packed)).toEqual(command);
   expect(packed.policyId).toBe(policyId(packed.policy));
 });
 
 test('every measurement of the collection, opened to be read otherwise, is read and placed to the same bits as by the command', () => {
-  const stored = readStoredCollection(demonstration.database);
+  const stored = readStoredCollection(demonstration);
   const reckoner = createReckoner(packed);
   const read = readCollection(places.content);
   if (read.collection === null) throw new Error('the demonstration does not check');

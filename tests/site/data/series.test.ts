@@ -16,20 +16,19 @@ import { bracketSentence, bracketsWithin, ionSeries } from '../../../site/data/s
 import { factorFitOf, geometries } from '../../../site/data/seriesFit.ts';
 import { slanted } from '../../../site/data/slanted.ts';
 import { type CollectionTree, collectionTree } from '../../../site/data/tree.ts';
-import { type Refitted, refittedDemonstration } from '../demonstration.ts';
+import { refittedDemonstration } from '../demonstration.ts';
 import { sampleTree } from '../sample.ts';
 
 const text = (parts: readonly { readonly text: string }[]): string => parts.map((part) => part.text).join('');
 
-let refitted: Refitted;
 let tree: CollectionTree;
 let database: Database.Database;
-beforeAll(() => {
-  refitted = refittedDemonstration();
-  tree = collectionTree(readRows(refitted.database));
-  database = new Database(refitted.database, { readonly: true });
+beforeAll(async () => {
+  const refitted = await refittedDemonstration();
+  tree = collectionTree(readRows(refitted));
+  database = new Database(refitted, { readonly: true });
 });
-afterAll(() => { database.close(); refitted.remove(); });
+afterAll(() => { database?.close(); });
 
 describe('the factors of the pages are those of the database', () => {
   test('every factor, its uncertainty, its island and its reason', () => {

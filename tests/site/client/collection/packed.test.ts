@@ -1,5 +1,5 @@
 import { gzipSync } from 'node:zlib';
-import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { beforeAll, describe, expect, test } from 'vitest';
 import fc from 'fast-check';
 import { digits, ofDigits, ofSignedDigits, signedDigits } from '../../../../site/client/collection/digits.ts';
 import { type PackedSearch, bandUnit, deltaUnit, unpackSearch } from '../../../../site/client/collection/packed.ts';
@@ -10,15 +10,12 @@ import { readRows } from '../../../../site/data/database.ts';
 import { rowSlice, rowSlices } from '../../../../site/data/rowSlices.ts';
 import { searchData, spinText } from '../../../../site/data/search.ts';
 import { type CollectionTree, collectionTree } from '../../../../site/data/tree.ts';
-import { type Refitted, refittedDemonstration } from '../../demonstration.ts';
+import { refittedDemonstration } from '../../demonstration.ts';
 
-let demonstration: Refitted;
 let tree: CollectionTree;
-beforeAll(() => {
-  demonstration = refittedDemonstration();
-  tree = collectionTree(readRows(demonstration.database));
+beforeAll(async () => {
+  tree = collectionTree(readRows(await refittedDemonstration()));
 });
-afterAll(() => demonstration?.remove());
 
 // Through JSON, as the page gets it.
 const throughJson = <T>(value: T): T => JSON.parse(JSON.stringify(value)) as T;

@@ -1,4 +1,4 @@
-import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { beforeAll, describe, expect, test } from 'vitest';
 import { normaliseQuery, searchMatch } from '#engine';
 import { type FoundCollection, type PackedSearch, unpackSearch } from '../../../../site/client/collection/packed.ts';
 import { readQuery } from '../../../../site/client/collection/query.ts';
@@ -7,17 +7,14 @@ import { type SearchIndex, buildIndex } from '../../../../site/client/collection
 import { readRows } from '../../../../site/data/database.ts';
 import { searchData } from '../../../../site/data/search.ts';
 import { collectionTree } from '../../../../site/data/tree.ts';
-import { type Refitted, refittedDemonstration } from '../../demonstration.ts';
+import { refittedDemonstration } from '../../demonstration.ts';
 
-let demonstration: Refitted;
 let collection: FoundCollection;
 let index: SearchIndex;
 beforeAll(async () => {
-  demonstration = refittedDemonstration();
-  collection = unpackSearch(JSON.parse(JSON.stringify(searchData(collectionTree(readRows(demonstration.database))))) as PackedSearch);
+  collection = unpackSearch(JSON.parse(JSON.stringify(searchData(collectionTree(readRows(await refittedDemonstration()))))) as PackedSearch);
   index = await buildIndex(collection, async () => {});
 });
-afterAll(() => demonstration?.remove());
 
 const idOf = (row: number): string => collection.complexes[collection.rows[row]!.complex]!.id;
 const found = (query: string) => search(collection, index, query);
