@@ -24,6 +24,7 @@ export type { Range } from './quantity/range.ts';
 export { cautionMeanings } from './cautions/catalogue.ts';
 export { complexCautions } from './cautions/ofComplex.ts';
 export { evidenceHeading, evidenceWords } from './words/ranking.ts';
+export { pairsCaption, stressCaption } from './words/stress.ts';
 export type { ComplexFacts, MeasurementFacts } from './cautions/ofComplex.ts';
 export type { CautionMeaning, CautionSubject } from './cautions/catalogue.ts';
 export type { Caution } from './cautions/types.ts';

@@ -14,31 +14,35 @@ const pairsAtMost = 15;
 /**
  * Each pair of bands alone, and each band left out.
  *
- * Where C was fitted, a pair holds C/B at the fitted value, so that it is two equations for two unknowns; with one band left
- * out C is fitted anew.
+ * Where C was fitted, a pair holds C/B at the fitted value, so that it is two equations for two unknowns. With one band left
+ * out the others must fix the same numbers as before: C is fitted anew where it was fitted, for a C/B that the band itself
+ * helped to find would only give the band back.
  */
 export function stressOf(ion: GroundCase, assigned: readonly Assigned[], fit: Fit, policy: Policy, freeIon: FreeIon | null): Stress {
   const used = assigned.filter((_, k) => fit.used[k]);
   if (used.length < 2 || fit.mode === 'field' || fit.mode === 'field, B assumed') return { pairs: [], leftOut: [] };
   const held: RatioUsed = { ...fit.ratio, u: 0 };
   const heldPolicy: Policy = { ...policy, ceilings: { ...policy.ceilings, racahC: 0 } };
-  const solveBy = (by: Policy) => (members: readonly Assigned[]): Fit | null => {
-    const outcome = fitAssignment(ion, members, by, held, freeIon);
+  const solve = (members: readonly Assigned[], by: Policy, ratio: RatioUsed): Fit | null => {
+    const outcome = fitAssignment(ion, members, by, ratio, freeIon);
     return isFit(outcome) && outcome.mode !== 'field' && outcome.mode !== 'field, B assumed' && members.every((_, k) => outcome.used[k]) ? outcome : null;
   };
   const pairs: PairAlone[] = [];
   if (used.length > 2)
     for (let i = 0; i < used.length; i++)
       for (let j = i + 1; j < used.length && pairs.length < pairsAtMost; j++) {
-        const alone = solveBy(heldPolicy)([used[i]!, used[j]!]);
+        const alone = solve([used[i]!, used[j]!], heldPolicy, held);
         pairs.push({ labels: [used[i]!.label, used[j]!.label], bands: [assigned.indexOf(used[i]!), assigned.indexOf(used[j]!)], at: alone ? alone.solutions[0]!.at : null });
       }
-  const leftOut = used.length < 3 ? [] : used.map((band, k) => leaveOut(ion, band, used.filter((_, i) => i !== k), solveBy(fit.mode === 'field, B, C' ? policy : heldPolicy), fit.floors[assigned.indexOf(band)]!));
+  const without = (band: Assigned): Fit | null => {
+    const others = solve(used.filter((one) => one !== band), fit.mode === 'field, B, C' ? policy : heldPolicy, fit.ratio);
+    return others?.mode === fit.mode ? others : null;
+  };
+  const leftOut = used.length < 3 ? [] : used.map((band) => leaveOut(ion, band, without(band), fit.floors[assigned.indexOf(band)]!));
   return { pairs, leftOut };
 }
 
-function leaveOut(ion: GroundCase, band: Assigned, others: readonly Assigned[], solve: (members: readonly Assigned[]) => Fit | null, floor: number): LeftOut {
-  const fit = solve(others);
+function leaveOut(ion: GroundCase, band: Assigned, fit: Fit | null, floor: number): LeftOut {
   if (!fit) return { label: band.label, at: null, predicted: null, z: null };
   const { at, ground } = fit.solutions[0]!;
   const { energy, gradient } = transitionsAt(ion, ground, [band.label], at)[0]!;

@@ -38,8 +38,10 @@ export function verdictSentence(facts: VerdictFacts): string {
   }
 }
 
+// Below 0.01 a reading is strained: what lies there is cut, not rounded up to a figure that would be no strain.
 function probabilityShown(p: number): string {
-  return p < 0.001 ? 'below 0.001' : p.toFixed(p < 0.1 ? 3 : 2);
+  if (p < 0.001) return 'below 0.001';
+  return p < 0.01 ? (Math.floor(p * 1e4) / 1e4).toFixed(4) : p.toFixed(p < 0.1 ? 3 : 2);
 }
 
 /** Why a parameter stays above its ceiling. */

@@ -3,6 +3,7 @@ import type { Band, HazardCaution, Parameter, Reading } from '#engine';
 import type { ComplexRecord, MeasurementRecord } from '../content/types.ts';
 import { spinWord } from '../database/rows/spin.ts';
 import { aligned } from '../report/columns.ts';
+import { stressLines } from './stressLines.ts';
 
 export interface Story {
   readonly complex: ComplexRecord;
@@ -39,9 +40,11 @@ export function storyLines({ complex, measurement, readings, hazards }: Story): 
     ...correlations(reading),
     '',
     verdictLine(reading),
-    ...(reading.measureNext === null ? [] : [`To measure next: ${reading.measureNext}`]),
+    ...(reading.identifiability?.combination === null || reading.identifiability === null ? [] : [reading.identifiability.combination]),
     ...reading.remarks,
+    ...stressLines(reading, electrons),
     ...predictions(reading, electrons),
+    ...helpful(reading),
     ...evidence(reading, electrons),
     ...rivalLines(reading, rivals, electrons),
     '',
@@ -139,6 +142,11 @@ function predictions(reading: Reading, electrons: number): string[] {
       shownLabel(band.label, electrons), `${concise(band.position, band.u)} cm-1`, band.spinAllowed ? 'spin-allowed' : 'spin-forbidden', looked[band.looked],
     ])),
   ];
+}
+
+// The rows of one band differ only in the number that they would help.
+function helpful({ helpfulBands }: Reading): string[] {
+  return helpfulBands.length === 0 ? [] : ['To measure next, most helpful first', ...[...new Set(helpfulBands.map(({ sentence }) => sentence))].map((sentence) => `  ${sentence}`)];
 }
 
 function evidence(reading: Reading, electrons: number): string[] {

@@ -1,3 +1,4 @@
+import { pairsCaption, stressCaption } from '#engine';
 import { figures, ratio } from './show.ts';
 import { type Cell, type Column, type Table, quantity, rowColumn, soft, words } from './table.ts';
 import type { MeasurementNode } from './tree.ts';
@@ -15,7 +16,7 @@ export function stressOfTransitions({ chosen, complex }: MeasurementNode): Table
   const withC = rows.some(({ row }) => row.gradient_C !== null && Math.abs(row.gradient_C) > 5e-4);
   const number = (value: number | null, decimals: number): Cell => value === null ? none : ratio(value, decimals);
   return {
-    caption: tried ? 'Each band under stress: its weight in the fit, then the fit without it and where that puts it' : 'Each band’s weight in the fit',
+    caption: stressCaption(tried),
     columns: [rowColumn('To'), quantity('leverage', null, true), derivative('Δ'), derivative('B'), ...(withC ? [derivative('C')] : []),
       ...(tried ? [without('Δ'), without('B'), quantity('put at', 'cm-1', true), quantity('z', null)] : [])],
     rows: rows.map(({ row }): readonly Cell[] => {
@@ -39,7 +40,7 @@ export function stressOfPairs({ chosen, complex }: MeasurementNode): Table | nul
     return pair.Delta === null || pair.B === null ? none : `${ratio(pair.Delta, 0)}; ${figures(pair.B, 3)}`;
   };
   return {
-    caption: 'Each pair alone: Δ; B, in cm⁻¹',
+    caption: pairsCaption,
     columns: [rowColumn('From'), ...places.slice(1).map((place): Column => ({ figure: true, head: [...words('and '), ...label(place)] }))],
     rows: places.slice(0, -1).map((first) => [{ parts: label(first) }, ...places.slice(1).map((second) => cell(first, second))]),
   };

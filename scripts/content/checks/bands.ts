@@ -4,9 +4,14 @@ import { toWavenumber, widthToWavenumber } from '#engine';
 import { typedText } from '../report.ts';
 import type { Reporter } from '../report.ts';
 import { highestBand, lowestBand } from '../schema/physical.ts';
+import type { TypedRanges } from '../schema/leaves.ts';
 import type { MeasurementDraft } from './complex.ts';
 
-export function checkBands({ bands }: MeasurementDraft, path: readonly (string | number)[], report: Reporter): void {
+/** How far beyond the typed end of a scan a band may be read: ends are round numbers, and the foot of a band shows its middle. */
+const beyondScan = 0.05;
+
+export function checkBands({ bands, scanned }: MeasurementDraft, path: readonly (string | number)[], report: Reporter): void {
+  const looked = rangesScanned(scanned);
   const absent: { readonly low: number; readonly high: number; readonly typed: string; readonly index: number }[] = [];
   bands?.forEach((band, index) => {
     if (band === undefined || !('absent' in band) || band.absent === undefined) return;
@@ -32,6 +37,12 @@ export function checkBands({ bands }: MeasurementDraft, path: readonly (string |
         report.at(at('width'), { code: 'BAND_WIDTH', found: typedText(band.width.typed), expected: `a width smaller than the position, ${band.position.typed}`, mend: 'check the number and its unit' });
       }
     }
+    if (looked.length > 0 && /cm|nm/.test(band.position.typed) && !wasScanned(position, looked) && wasScanned(1e7 / position, looked)) {
+      report.at(at('position'), {
+        code: 'BAND_UNIT', found: `${typedText(band.position.typed)}, scanned ${looked.map(({ typed }) => typed).join('; ')}`, expected: 'a position inside what was scanned',
+        mend: 'check the unit: the same number in the other one, nm or cm-1, lies inside',
+      });
+    }
     const inside = absent.find(({ low, high }) => position > low && position < high);
     if (inside !== undefined) {
       report.at([...path, 'bands', inside.index, 'absent'], {
@@ -40,4 +51,14 @@ export function checkBands({ bands }: MeasurementDraft, path: readonly (string |
       });
     }
   });
+}
+
+/** All that was scanned; none where a part of it cannot be read. */
+function rangesScanned(scanned: MeasurementDraft['scanned']): readonly TypedRanges[] {
+  const all = scanned === undefined ? [] : 'ranges' in scanned ? [scanned] : scanned;
+  return all.some((one) => one === undefined) ? [] : all.filter((one) => one !== undefined);
+}
+
+function wasScanned(position: number, looked: readonly TypedRanges[]): boolean {
+  return looked.flatMap(({ ranges }) => ranges).some(({ low, high }) => position > low * (1 - beyondScan) && position < high * (1 + beyondScan));
 }

@@ -17,10 +17,12 @@ describe('each verdict begins with its own word and says why', () => {
       .toBe('Strained: 4 bands with 2 spare disagree by more than readings and model allow (chi-square 31.4, probability below 0.001).');
   });
 
-  test('a small probability keeps three decimals, so that 0.009 is told from 0.012', () => {
+  test('a small probability keeps its figures: what is below 0.01, where strain begins, never reads 0.01', () => {
     const shown = (probability: number) => verdictSentence(facts({ verdict: 'tested', bandsUsed: 3, spareBands: 1, probability }));
     expect(shown(0.012)).toContain('probability 0.012');
-    expect(shown(0.009)).toContain('probability 0.009');
+    expect(shown(0.009)).toContain('probability 0.0090)');
+    expect(shown(0.00999)).toContain('probability 0.0099)');
+    expect(shown(0.0101)).toContain('probability 0.010)');
   });
 
   test('untested: no test possible, for one band and for several', () => {
