@@ -95,9 +95,9 @@ describe('refit --explain', { timeout: 60_000 }, () => {
   it('tells how the fit stands without each band, what each pair gives alone and which bands would help most', () => {
     const { stdout } = runScript('refit', ['--content', content, '--explain', 'cr-am6/aq-295']);
     expect(stdout).toContain('Each band under stress: its weight in the fit, then the fit without it and where that puts it');
-    expect(stdout).toMatch(/\n {2}to +leverage +d\/dDelta +d\/dB.*\n {2}4T2g +[01]\.\d\d +1\.00 /);
+    expect(stdout).toMatch(/\n {2}to +leverage +d\/dDelta +d\/dB.*\n(?:.*\n)? {2}4T2g +1\.00 +1\.00 /);
     expect(stdout).toMatch(/Each pair alone: Δ; B, in cm⁻¹\n {2}\S+ and \S+ +(?:none|\d+; \d+)/);
-    expect(stdout).toMatch(/To measure next, most helpful first\n {2}\S+, expected \d/);
+    expect(runScript('refit', ['--content', content, '--explain', 'co2-cl4']).stdout).toMatch(/To measure next, most helpful first\n {2}\S+, expected \d/);
   });
 
   it('tells every measurement of a complex', () => {
