@@ -45,8 +45,14 @@ function slopeOnGrid({ transitions, columns, energies, slopes, point }: Curve, i
   return point.rho > 0 ? point.slope : Number.NaN;
 }
 
-/** d chi2/dt at fraction s of the cell above grid point i. */
-export function slopeInCell({ step, transitions, columns, energies, slopes, point }: Curve, i: number, s: number): number {
+/** d chi2/dt at fraction s of the cell above grid point i, whatever the sign of the scale. */
+export function slopeInCell(curve: Curve, i: number, s: number): number {
+  pointInCell(curve, i, s);
+  return curve.point.slope;
+}
+
+/** Energies, slopes and the best scale at fraction s of the cell above grid point i. */
+function pointInCell({ step, transitions, columns, energies, slopes, point }: Curve, i: number, s: number): void {
   const out: [number, number] = [0, 0];
   for (let k = 0; k < transitions.length; k++) {
     const { energy, slope } = transitions[k]!;
@@ -55,7 +61,6 @@ export function slopeInCell({ step, transitions, columns, energies, slopes, poin
     slopes[k] = out[1];
   }
   pointOfCurve(columns, energies, slopes, point);
-  return point.slope;
 }
 
 /** A stretch of one grid cell over which d chi2/dt turns from falling to rising: fractions of the cell, and the slopes there. */
@@ -73,9 +78,10 @@ const insideSamples = 16;
 /**
  * Where d chi2/dt turns from falling to rising. A cell whose ends differ in sign holds a turn; one whose ends do not may
  * hold two that lie close together, and then the slope comes near zero in it: there, as in every cell that holds
- * a turn, the interpolant is sampled.
+ * a turn, the interpolant is sampled. Where the ground level changes a transition goes through zero, and the ratios of the
+ * transitions run through all values within a part of a cell: there the cell is cut by ratios instead.
  */
-export function turningCells(curve: Curve, { first: start, last: end }: Segment): Turn[] {
+export function turningCells(curve: Curve, { first: start, last: end, crossings }: Segment): Turn[] {
   const found: Turn[] = [];
   let earlier = Number.POSITIVE_INFINITY;
   let before = slopeOnGrid(curve, start);
@@ -84,12 +90,46 @@ export function turningCells(curve: Curve, { first: start, last: end }: Segment)
     const later = i + 2 <= end ? slopeOnGrid(curve, i + 2) : Number.POSITIVE_INFINITY;
     const turns = before <= 0 && after > 0 && !(before === 0 && i === start);
     const nearsZero = Math.abs(before) <= Math.abs(earlier) && Math.abs(after) <= Math.abs(later) && before * after > 0;
-    if (turns || nearsZero) addTurns(curve, i, before, after, found);
+    if (crossings.includes(i)) addTurnsByRatios(curve, i, found);
+    else if (turns || nearsZero) addTurns(curve, i, before, after, found);
     earlier = before;
     before = after;
     after = later;
   }
   return found;
+}
+
+/** Ratios of the transitions turn by no more than this between two points of a cell that are compared, rad. */
+const turnAtMost = 0.05;
+/** A stretch this short, as a fraction of a cell, is not cut again: the interpolant is no truer. */
+const shortest = 1e-9;
+
+/** A point of a cell: its fraction, d chi2/dt there (NaN where no positive scale is best) and the direction of energy over observed position. */
+interface Cut {
+  readonly s: number;
+  readonly slope: number;
+  readonly direction: Float64Array;
+}
+
+function cutAt(curve: Curve, cell: number, s: number): Cut {
+  pointInCell(curve, cell, s);
+  const { energies, columns: { observed }, point } = curve;
+  const direction = energies.map((energy, k) => energy / observed[k]!);
+  const length = Math.hypot(...direction);
+  return { s, slope: point.rho > 0 ? point.slope : Number.NaN, direction: direction.map((part) => part / length) };
+}
+
+function addTurnsByRatios(curve: Curve, cell: number, found: Turn[]): void {
+  const between = (low: Cut, high: Cut): void => {
+    const cosine = low.direction.reduce((sum, part, k) => sum + part * high.direction[k]!, 0);
+    if (high.s - low.s > shortest && !(cosine > Math.cos(turnAtMost))) {
+      const middle = cutAt(curve, cell, (low.s + high.s) / 2);
+      between(low, middle);
+      between(middle, high);
+    } else if (low.slope <= 0 && high.slope > 0) found.push({ cell, low: low.s, high: high.s, atLow: low.slope, atHigh: high.slope });
+  };
+  const cuts = Array.from({ length: insideSamples + 1 }, (_, n) => cutAt(curve, cell, n / insideSamples));
+  for (let n = 0; n < insideSamples; n++) between(cuts[n]!, cuts[n + 1]!);
 }
 
 function addTurns(curve: Curve, cell: number, before: number, after: number, found: Turn[]): void {

@@ -3,7 +3,7 @@ import type { Columns } from './misfit.ts';
 import { curvatureInCell, curveOf, rootOfRising, slopeInCell, turningCells } from './curve.ts';
 import type { Curve } from './curve.ts';
 import type { Minimum } from './scan.ts';
-import { groundSegments } from './segments.ts';
+import { segmentsOf } from './segments.ts';
 import type { LevelTable } from './table.ts';
 import type { GroundCase } from './transitions.ts';
 
@@ -18,7 +18,7 @@ export interface RoughMinimum extends Minimum {
 /** As `minimaOnCurve`, from the table alone: starts for a search over C/B. In no order. */
 export function roughMinimaOnCurve(table: LevelTable, ion: GroundCase, labels: readonly string[], columns: Columns): RoughMinimum[] {
   const found: RoughMinimum[] = [];
-  for (const segment of groundSegments(table, ion.multiplicity)) {
+  for (const segment of segmentsOf(table, ion.multiplicity, labels)) {
     const curve = curveOf(table, segment.ground, labels, columns);
     for (const turn of turningCells(curve, segment)) {
       const s = rootOfRising((fraction) => slopeInCell(curve, turn.cell, fraction), turn);

@@ -3,7 +3,7 @@ import { evaluatorOf } from './evaluate.ts';
 import type { Evaluator } from './evaluate.ts';
 import { bestScale, columnsOf, misfitSlope } from './misfit.ts';
 import type { CurvePoint, Target } from './misfit.ts';
-import { groundSegments } from './segments.ts';
+import { groundSegments, segmentsOf } from './segments.ts';
 import { pointOnCurve, slopeAt } from './table.ts';
 import type { LevelTable } from './table.ts';
 import type { GroundCase } from './transitions.ts';
@@ -28,7 +28,7 @@ export interface Minimum {
 export function minimaOnCurve(table: LevelTable, ion: GroundCase, labels: readonly string[], targets: readonly Target[]): Minimum[] {
   const columns = columnsOf(targets);
   const found: Minimum[] = [];
-  for (const segment of groundSegments(table, ion.multiplicity)) {
+  for (const segment of segmentsOf(table, ion.multiplicity, labels)) {
     const curve = curveOf(table, segment.ground, labels, columns);
     const cells = turningCells(curve, segment);
     if (cells.length === 0) continue;

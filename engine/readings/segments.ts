@@ -7,9 +7,17 @@ export interface Segment {
   readonly ground: string;
   readonly first: number;
   readonly last: number;
+  /** Cells, by their lower grid index, in which another level becomes lowest: at most the first and the last of the segment. */
+  readonly crossings: readonly number[];
 }
 
 const segmentsHeld = new WeakMap<LevelTable, Map<number, readonly Segment[]>>();
+
+/** The segments on which none of the transitions leads from the ground level to itself: that is no transition, and no band lies at zero. */
+export function segmentsOf(table: LevelTable, multiplicity: number, labels: readonly string[]): readonly Segment[] {
+  const all = groundSegments(table, multiplicity);
+  return all.length === 1 ? all : all.filter(({ ground }) => !labels.includes(ground));
+}
 
 /**
  * Where along the curve which level is lowest of the declared multiplicity. For most ions one level is
@@ -43,11 +51,11 @@ export function groundSegments(table: LevelTable, multiplicity: number): readonl
     const next = at(i);
     if (next === current) continue;
     // Both neighbours cover the cell in which the crossing lies, so no minimum falls between them.
-    found.push({ ground: lowest[current]!, first, last: i });
+    found.push({ ground: lowest[current]!, first, last: i, crossings: first === 1 ? [i - 1] : [first, i - 1] });
     first = i - 1;
     current = next;
   }
-  found.push({ ground: lowest[current]!, first, last: table.points - 2 });
+  found.push({ ground: lowest[current]!, first, last: table.points - 2, crossings: first === 1 ? [] : [first] });
   byMultiplicity.set(multiplicity, found);
   return found;
 }

@@ -3,7 +3,7 @@ import { minimaOnCurve } from '../../../engine/readings/scan.ts';
 import { levelTable } from '../../../engine/readings/table.ts';
 import type { BranchCase, Configuration } from './branchCases.ts';
 import { branchCases, configurations, furtherConfigurations, kinds } from './branchCases.ts';
-import { energyAt, fineCurve, finePieces, lowestAt, misfitAt, roundingOf, trialMinima, trialMisfits } from './bruteForce.ts';
+import { cancellationAt, energyAt, fineCurve, finePieces, inOneValley, lowestAt, misfitAt, roundingOf, trialMinima, trialMisfits } from './bruteForce.ts';
 import type { FineCurve } from './bruteForce.ts';
 
 const long = process.env['BANDSTEAD_LONG'] === '1';
@@ -26,18 +26,21 @@ interface Comparison {
 /** Minima found by trial and not by the scan, and the other way round. */
 function compare(curve: FineCurve, { kind, labels, targets }: BranchCase): Comparison {
   const found = minimaOnCurve(levelTable(curve.ion, curve.ratio), curve.ion, labels, targets);
-  const rounding = roundingOf(targets);
+  const roundingAt = (i: number): number => roundingOf(targets, cancellationAt(curve, labels, Math.round(i)));
   const faults: string[] = [];
   const story = `${kind}: ${labels.map((label, k) => `${label} ${targets[k]!.observed.toFixed(1)}(-${(targets[k]!.weightBelow ** -0.5).toFixed(0)}+${(targets[k]!.weightAbove ** -0.5).toFixed(0)})`).join(', ')}`;
-  const tried = trialMinima(curve, trialMisfits(curve, labels, targets, work), 10 * rounding).filter((i) => i > outermost && i < finePieces - outermost);
+  const least = 10 * roundingOf(targets);
+  const tried = trialMinima(curve, trialMisfits(curve, labels, targets, work), least).filter((i) => i > outermost && i < finePieces - outermost);
   for (const i of tried) {
-    const own = found.find((minimum) => Math.abs(minimum.t - i * curve.step) < 2 * curve.step);
+    // Two solutions with less than rounding between them are one to any trial.
+    const own = found.find((minimum) => Math.abs(minimum.t - i * curve.step) < 2 * curve.step) ?? found.find((minimum) => inOneValley(work, i, Math.round(minimum.t / curve.step), least));
     if (!own) faults.push(`${story}\n    missed at ${degrees(i * curve.step)}, chi2 ${work[i]}`);
     else if (own.ground !== curve.lowestLabel(i)) faults.push(`${story}\n    ground ${own.ground} for ${curve.lowestLabel(i)} at ${degrees(own.t)}`);
-    else if (own.chi2 > work[i]! + rounding) faults.push(`${story}\n    chi2 ${own.chi2} above a tried ${work[i]} at ${degrees(own.t)}`);
+    else if (own.chi2 > work[i]! + roundingAt(i)) faults.push(`${story}\n    chi2 ${own.chi2} above a tried ${work[i]} at ${degrees(own.t)}`);
   }
   found.forEach((minimum, n) => {
     const { t, ground } = minimum;
+    const rounding = roundingAt(t / curve.step);
     const here = misfitAt(curve, ground, labels, targets, t);
     const where = `at ${degrees(t)}, chi2 ${minimum.chi2}`;
     if (!(t > 0 && t < Math.PI / 2 && minimum.rho > 0)) faults.push(`${story}\n    not inside the curve, ${where}`);

@@ -106,14 +106,32 @@ export function trialMisfits(curve: FineCurve, labels: readonly string[], target
   for (let i = 0; i <= finePieces; i++) {
     for (let k = 0; k < levels.length; k++) energies[k] = levels[k]![i]! - curve.lowest[i]!;
     const rho = bestByNewton(columns, energies);
-    into[i] = rho > 0 ? misfitOf(columns, energies, rho) : Number.NaN;
+    // From the ground level to itself there is no transition.
+    into[i] = rho > 0 && !labels.includes(curve.lowestLabel(i)) ? misfitOf(columns, energies, rho) : Number.NaN;
   }
   return into;
 }
 
-/** Size of the rounding in a chi2 that is a sum of squares of differences of these readings. */
-export function roundingOf(targets: readonly Target[]): number {
-  return 1e-12 * targets.reduce((sum, { observed, weightBelow, weightAbove }) => sum + Math.max(weightBelow, weightAbove) * observed ** 2, 0);
+/**
+ * Size of the rounding in a chi2 that is a sum of squares of differences of these readings. A transition is a difference of two
+ * levels: where it is small against them, `cancellation` times, it has lost as many figures.
+ */
+export function roundingOf(targets: readonly Target[], cancellation = 1): number {
+  return (1e-12 + 8 * Number.EPSILON * cancellation) * targets.reduce((sum, { observed, weightBelow, weightAbove }) => sum + Math.max(weightBelow, weightAbove) * observed ** 2, 0);
+}
+
+/** How many times larger than the smallest transition the levels at a grid point are. */
+export function cancellationAt(curve: FineCurve, labels: readonly string[], i: number): number {
+  return Math.max(...labels.map((label) => {
+    const energy = curve.energies.get(label)![i]!;
+    return (Math.abs(energy) + Math.abs(curve.lowest[i]!)) / Math.abs(energy - curve.lowest[i]!);
+  }));
+}
+
+/** Whether tried values between two grid points nowhere rise above the first by more than `least`: they lie in one valley as far as can be told. */
+export function inOneValley(misfits: Float64Array, from: number, to: number, least: number): boolean {
+  for (let i = Math.min(from, to); i <= Math.max(from, to); i++) if (!(misfits[i]! - misfits[from]! <= least)) return false;
+  return true;
 }
 
 /**
