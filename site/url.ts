@@ -3,7 +3,7 @@ declare const SITE_BASE: string | undefined;
 const siteBase = typeof SITE_BASE === 'undefined' ? '/' : SITE_BASE;
 
 /**
- * Address of a page or file of this site under its base path. A path that ends in a name without a dot is a page
+ * Address of a page or file of this site under its base path. A path that ends in a name without a dot or capital is a page
  * and gets its closing slash.
  * @param path from the site's root, with or without a leading slash: "complexes/cr-am6", "data/results.csv"
  */
@@ -13,6 +13,6 @@ export function url(path: string, base: string = siteBase): string {
   if (inner === '') return root;
   const [, address = '', rest = ''] = /^([^?#]*)(.*)$/.exec(inner) ?? [];
   const last = address.split('/').at(-1) ?? '';
-  const closed = address === '' || address.endsWith('/') || last.includes('.') ? address : `${address}/`;
+  const closed = address === '' || address.endsWith('/') || last.includes('.') || /[A-Z]/.test(last) ? address : `${address}/`;
   return `${root}${closed}${rest}`;
 }

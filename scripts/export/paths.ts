@@ -6,4 +6,4 @@ export const ligandPath = (id: string): string => `ligands/${id}/`;
 export const ionPath = (ion: string): string => `ions/${ion.toLowerCase().replace(/[-−](?=[ivx0])/, 'minus-').replace(/[^a-z0-9]+/g, '-').replace(/^-|-$/g, '')}/`;
 
 /** Pages that every collection has. */
-export const fixedPages: readonly string[] = ['', 'ions/', 'ligands/', 'series/', 'methods/', 'data/'];
+export const fixedPages: readonly string[] = ['', 'ions/', 'ligands/', 'series/', 'methods/', 'data/', 'data/dictionary/', 'changes/'];

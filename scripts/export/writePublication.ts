@@ -1,5 +1,5 @@
 import { join } from 'node:path';
-import { writeTombstones } from '../release/tombstones.ts';
+import { gonePages } from '../release/goneAddresses.ts';
 import { readPublished } from './published.ts';
 import { writeDataFiles } from './writeExports.ts';
 import { writeRecords } from './writeRecords.ts';
@@ -14,5 +14,5 @@ export function writePublication(databaseFile: string, content: string, site: st
   const published = readPublished(databaseFile);
   writeDataFiles(published, join(site, 'data'));
   writeRecords(published, content, site);
-  writeSiteFiles(published, site, writeTombstones(published, site));
+  writeSiteFiles(published, site, gonePages(published, site));
 }

@@ -11,7 +11,7 @@ import { sentenceShown } from './typeset.ts';
 /** What changed since the last release and from release to release, newest first. */
 export interface ChangesPage {
   readonly sentence: string;
-  readonly sections: readonly { readonly title: string; readonly about: string; readonly table: Table | null }[];
+  readonly sections: readonly { readonly title: string; /** Place on the page that the feed leads to. */ readonly anchor: string; readonly about: string; readonly table: Table | null }[];
   readonly gone: Table | null;
   readonly number: number;
   readonly pages: readonly { readonly number: number; readonly path: string }[];
@@ -36,9 +36,9 @@ export function changesPage(tree: CollectionTree, number: number): ChangesPage {
       ? `No release has been frozen yet. The collection was started on ${tree.meta.get('group.started') ?? 'a date not recorded'}; from the first release on this page says what changed, number by number.`
       : `${counted(releases.length, 'release')}, the last ${last.id} of ${last.date}.`,
     sections: [
-      ...(last === undefined || (number > 1 && !rows.has(null)) ? [] : [{ title: `Since release ${last.id}`, about: rows.has(null) ? '' : 'Nothing changed.', table: table(tree, rows.get(null) ?? []) }]),
+      ...(last === undefined || (number > 1 && !rows.has(null)) ? [] : [{ title: `Since release ${last.id}`, anchor: 'since', about: rows.has(null) ? '' : 'Nothing changed.', table: table(tree, rows.get(null) ?? []) }]),
       ...newest.filter(({ id }) => number === 1 || rows.has(id)).map((release) => ({
-        title: `Release ${release.id}`, about: `${release.date}, ${release.who}. ${release.cause} ${counted(release.complexes, 'complex', 'complexes')}, ${counted(release.measurements, 'measurement')}. DOI: ${release.doi ?? 'not yet assigned'}.`,
+        title: `Release ${release.id}`, anchor: `release-${release.id}`, about: `${release.date}, ${release.who}. ${release.cause} ${counted(release.complexes, 'complex', 'complexes')}, ${counted(release.measurements, 'measurement')}. DOI: ${release.doi ?? 'not yet assigned'}.`,
         table: table(tree, rows.get(release.id) ?? []),
       })),
     ],

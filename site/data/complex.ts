@@ -1,4 +1,5 @@
-import { additiveName, elementName, romanNumeral } from '#engine';
+import { recordFiles } from '../../scripts/export/files.ts';
+import { complexName } from './complexName.ts';
 import { conditions } from './conditions.ts';
 import { type PlaceOnDiagram, placeOnDiagram } from './diagram.ts';
 import { type MeasurementMeaning, measurementMeaning } from './measurementMeaning.ts';
@@ -7,12 +8,16 @@ import { type Rivals, measurementRivals } from './measurementRivals.ts';
 import { type MeasurementSure, measurementSure } from './measurementSure.ts';
 import { type Neighbours, neighbours } from './neighbours.ts';
 import { cautionPath, complexPath, ionPath, ligandPath, otherwisePath } from './paths.ts';
+import { type FileShown, filesShown } from './downloads.ts';
+import { type HeadData, complexHead } from './head.ts';
 import { type Placements, placements } from './placements.ts';
+import { type Citation, citation } from './publication.ts';
 import { type Quote, quotes } from './quotes.ts';
+import { type RecordHistory, recordHistory } from './recordHistory.ts';
 import { groupBy } from './group.ts';
 import { listed, parameterShown } from './show.ts';
 import { type Origin, measurementOrigin } from './origin.ts';
-import { type Table, column, quantity, rowColumn, soft, words } from './table.ts';
+import { type Table, column, quantity, rowColumn, soft } from './table.ts';
 import type { CollectionTree, ComplexNode, MeasurementNode } from './tree.ts';
 import { type FormulaShown, type Parts, configuration, sentenceShown } from './typeset.ts';
 
@@ -52,12 +57,12 @@ export interface ComplexPage {
   readonly placements: Placements;
   readonly diagram: PlaceOnDiagram | null;
   readonly quotes: readonly Quote[];
-  readonly record: { readonly file: string; readonly hash: string };
-  readonly citation: Parts;
+  readonly record: { readonly file: string; readonly hash: string; readonly files: readonly FileShown[] };
+  readonly citation: Citation;
+  readonly history: RecordHistory;
+  readonly head: HeadData;
   readonly report: { readonly text: string; readonly address: string | null };
 }
-
-const collectionName = (tree: CollectionTree): string => tree.meta.get('group.title') ?? 'Ligand-field parameters';
 
 export function complexPage(tree: CollectionTree, complex: ComplexNode): ComplexPage {
   const { row, ion } = complex;
@@ -74,16 +79,9 @@ export function complexPage(tree: CollectionTree, complex: ComplexNode): Complex
     notes: row.notes, summary: summary(complex),
     measurements: complex.measurements.map((measurement) => measurementShown(tree, measurement)),
     cautions: cautions(complex), neighbours: neighbours(tree, complex), placements: placements(complex), diagram: placeOnDiagram(tree, complex), quotes: quotes(tree, complex),
-    record: { file: row.file, hash: row.hash },
-    citation: citation(tree, complex), report: report(tree, complex),
+    record: { file: row.file, hash: row.hash, files: filesShown(recordFiles, complexPath(row.id)) },
+    citation: citation(tree, complex), history: recordHistory(tree, complex), head: complexHead(tree, complex), report: report(tree, complex),
   };
-}
-
-/** The name in the record, else the additive name built from the ligand records. */
-function complexName({ row, ion, ligands }: ComplexNode): string {
-  if (row.name !== null) return row.name;
-  const name = additiveName(ion.metal, elementName(ion.metal) ?? ion.metal, romanNumeral(ion.oxidation), ligands.map(({ row: link, ligand }) => ({ name: ligand.name, count: link.count })), row.charge);
-  return row.isomer === 'none' ? name : `${row.isomer}-${name}`;
 }
 
 function identity({ row }: ComplexNode): ComplexPage['facts'] {
@@ -135,16 +133,6 @@ function measurementShown(tree: CollectionTree, measurement: MeasurementNode): M
     otherwise: measurement.complex.row.fitted === 1 && measurement.bands.length > 0 ? otherwisePath(row.complex, row.id) : null,
     origin: measurementOrigin(tree, measurement),
   };
-}
-
-function citation(tree: CollectionTree, { row, formula }: ComplexNode): Parts {
-  const release = tree.meta.get('group.release') ?? 'not recorded';
-  const doi = tree.meta.get('group.doi');
-  const address = new URL(complexPath(row.id), tree.meta.get('group.url') ?? 'https://example.org/').href;
-  return [
-    ...words(`${tree.meta.get('group.name') ?? 'The group'}, ${collectionName(tree)}, release ${release}, record ${row.id}, `), ...formula.parts,
-    ...words(`, ${address}. DOI: ${doi ?? 'not yet assigned'}.`),
-  ];
 }
 
 function report(tree: CollectionTree, { row }: ComplexNode): ComplexPage['report'] {

@@ -7,7 +7,7 @@ import type { Rows } from './rows.ts';
 const TABLES: readonly (keyof Rows)[] = [
   'meta', 'person', 'policy', 'ion', 'free_ion', 'source', 'ligand', 'complex', 'complex_ligand', 'measurement', 'observed_range',
   'band', 'quoted', 'reading', 'reading_band', 'reading_band_member', 'not_fitted', 'branch', 'stress_left_out', 'stress_pair', 'evidence', 'helpful_band', 'parameter', 'correlation',
-  'predicted_band', 'caution', 'hazard_override', 'audit', 'placement', 'floor_factor', 'review', 'frozen_release', 'change', 'gone',
+  'predicted_band', 'caution', 'hazard_override', 'audit', 'placement', 'floor_factor', 'review', 'frozen_release', 'frozen_value', 'change', 'gone',
 ];
 
 /** File of the database: BANDSTEAD_DATABASE, else the project's own cache. Pages are bundled elsewhere, so the working folder counts. */

@@ -1,4 +1,5 @@
 import { hazardFooter } from '#engine';
+import { citation } from './publication.ts';
 import type { CollectionTree } from './tree.ts';
 
 /** What every page of the site shows around its content. */
@@ -10,6 +11,8 @@ export interface Frame {
   readonly licence: string;
   readonly policy: string;
   readonly colophon: string;
+  /** How to cite the set, as it goes to the clipboard. */
+  readonly citation: string;
   readonly hazardNote: string;
   readonly sections: readonly { readonly text: string; readonly path: string }[];
 }
@@ -25,6 +28,7 @@ export function frame(tree: CollectionTree): Frame {
     licence: tree.meta.get('group.licence') ?? 'licence not recorded',
     policy: tree.policy.id,
     colophon: `${title}, ${group}, release ${tree.meta.get('group.release') ?? 'not recorded'}.`,
+    citation: citation(tree).text,
     hazardNote: hazardFooter,
     sections: [
       { text: 'Collection', path: '' }, { text: 'Ions', path: 'ions/' }, { text: 'Ligands', path: 'ligands/' },

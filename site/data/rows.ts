@@ -83,6 +83,7 @@ export interface FrozenReleaseRow {
   readonly id: string; readonly number: number; readonly date: string; readonly who: string; readonly cause: string; readonly doi: string | null;
   readonly complexes: number; readonly measurements: number;
 }
+export interface FrozenValueRow extends OfMeasurement { readonly release: string; readonly parameter: 'Delta' | 'B' | 'C' | 'beta'; readonly value: number | null; readonly u_total: number | null }
 export interface ChangeRow { readonly number: number; readonly release: string | null; readonly complex: string; readonly measurement: string | null; readonly cause: string; readonly text: string }
 export interface GoneRow { readonly address: string; readonly kind: 'tombstone' | 'redirect' | 'corrected'; readonly target: string | null; readonly reason: string | null }
 export interface ReviewRow extends OfMeasurement { readonly number: number; readonly kind: string; readonly text: string }
@@ -140,6 +141,7 @@ export interface Rows {
   readonly floor_factor: readonly FloorFactorRow[];
   readonly review: readonly ReviewRow[];
   readonly frozen_release: readonly FrozenReleaseRow[];
+  readonly frozen_value: readonly FrozenValueRow[];
   readonly change: readonly ChangeRow[];
   readonly gone: readonly GoneRow[];
 }

@@ -64,7 +64,11 @@ export interface CollectionTree {
   readonly review: readonly R.ReviewRow[];
   readonly floorFactors: readonly R.FloorFactorRow[];
   /** Frozen releases, what changed between them and since the last, and what became of published addresses. */
-  readonly history: { readonly releases: readonly R.FrozenReleaseRow[]; readonly changes: readonly R.ChangeRow[]; readonly gone: readonly R.GoneRow[] };
+  readonly history: {
+    readonly releases: readonly R.FrozenReleaseRow[]; readonly changes: readonly R.ChangeRow[]; readonly gone: readonly R.GoneRow[];
+    /** Numbers as each release froze them. */
+    readonly frozen: readonly R.FrozenValueRow[];
+  };
 }
 
 /**
@@ -118,7 +122,8 @@ export function collectionTree(rows: Rows): CollectionTree {
     meta: new Map(rows.meta.map(({ key, value }) => [key, value])),
     people: rows.person, policies: byKey(rows.policy, (row) => row.id), policy,
     ions: rows.ion, freeIons: rows.free_ion, sources: byKey(rows.source, (row) => row.id), ligands: rows.ligand,
-    abbreviations, complexes, review: rows.review, floorFactors: rows.floor_factor, history: { releases: rows.frozen_release, changes: rows.change, gone: rows.gone },
+    abbreviations, complexes, review: rows.review, floorFactors: rows.floor_factor,
+    history: { releases: rows.frozen_release, changes: rows.change, gone: rows.gone, frozen: rows.frozen_value },
   };
 }
 

@@ -1,5 +1,6 @@
 import { join } from 'node:path';
-import { writeExports } from '../../scripts/export/writeExports.ts';
+import { writePublication } from '../../scripts/export/writePublication.ts';
+import { places } from '../../scripts/places.ts';
 import { buildPages } from '../../scripts/publish/pages.ts';
 import { sharedFolder } from '../run/shared.ts';
 import { refittedDemonstration } from '../site/demonstration.ts';
@@ -10,7 +11,7 @@ export async function servedDemonstration(base: string): Promise<ServedSite & { 
   const database = await refittedDemonstration();
   const folder = await sharedFolder(`demonstration-${base.replaceAll('/', '') || 'root'}`, async (made) => {
     await buildPages(database, { origin: 'https://example.org', base }, join(made, 'dist'));
-    writeExports(database, join(made, 'dist', 'data'));
+    writePublication(database, places.content, join(made, 'dist'));
   });
   return { ...(await serve(folder, base)), database };
 }

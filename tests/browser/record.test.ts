@@ -11,7 +11,7 @@ test('the sentence goes to the clipboard as plain text, and the page says so', a
   const { page, trouble } = await watchedPage(browser, site, { permissions: ['clipboard-read', 'clipboard-write'] });
   await page.goto(`${site.address}complexes/cr-am6/`);
   await page.getByRole('button', { name: 'Copy as plain text' }).click();
-  await expect.poll(() => page.locator('.copy [role=status]').textContent()).toBe('Copied.');
+  await expect.poll(() => page.locator('blockquote .copy [aria-live]').textContent()).toBe('Copied.');
   expect(await page.evaluate(() => navigator.clipboard.readText())).toBe('The bands at 21 560 cm⁻¹ (4T2g) give Δ = 21 560(160) cm⁻¹ and B = 652(31) cm⁻¹.');
   expect(trouble).toEqual([]);
   await page.context().close();

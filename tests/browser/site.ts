@@ -1,14 +1,14 @@
-import { mkdtempSync, readFileSync, readdirSync } from 'node:fs';
+import { mkdirSync, mkdtempSync, readFileSync, readdirSync, writeFileSync } from 'node:fs';
 import type { AddressInfo } from 'node:net';
 import { join } from 'node:path';
 import { type Browser, type BrowserContextOptions, type Page, chromium } from 'playwright-core';
 import { inject } from 'vitest';
-import { writeExports } from '../../scripts/export/writeExports.ts';
+import { writePublication } from '../../scripts/export/writePublication.ts';
 import { buildPages } from '../../scripts/publish/pages.ts';
 import { createSiteServer } from '../../scripts/publish/staticServer.ts';
 import { findChromium } from '../../scripts/test/chromium.ts';
 import { sharedFolder } from '../run/shared.ts';
-import { writeSampleDatabase } from '../site/sampleDatabase.ts';
+import { SAMPLES, sampleRecordText, writeSampleDatabase } from '../site/sampleDatabase.ts';
 
 /** The sample collection built and served, as a visitor finds it. */
 export interface ServedSite {
@@ -34,7 +34,10 @@ export async function servedSample(base: string, options: NonNullable<Parameters
 async function buildSite(folder: string, base: string, options: NonNullable<Parameters<typeof writeSampleDatabase>[1]>): Promise<void> {
   const database = writeSampleDatabase(join(folder, 'collection.sqlite'), options);
   await buildPages(database, { origin: 'https://example.org', base }, join(folder, 'dist'));
-  writeExports(database, join(folder, 'dist', 'data'));
+  const content = join(folder, 'content');
+  mkdirSync(join(content, 'complexes'), { recursive: true });
+  for (const { id } of SAMPLES) writeFileSync(join(content, 'complexes', `${id}.yaml`), sampleRecordText(id));
+  writePublication(database, content, join(folder, 'dist'));
 }
 
 /** Serves `folder`/dist under the base path. */
@@ -81,4 +84,4 @@ export function builtPages(site: ServedSite): readonly { readonly path: string; 
 }
 
 /** One page of each kind. */
-export const PAGE_KINDS = ['', 'complexes/cr-am6/', 'complexes/cr-aq6/', 'complexes/ti-aq6/', 'ions/', 'ions/cr-iii/', 'ligands/', 'ligands/ammine/', 'series/', 'series/factors/', 'series/predictions/', 'series/orders/', 'series/correlation/', 'methods/', 'review/', 'cautions/', 'cautions/perchlorate/', 'changes/', 'compare/', 'predict/', 'data/', '404.html'] as const;
+export const PAGE_KINDS = ['', 'complexes/cr-am6/', 'complexes/cr-aq6/', 'complexes/ti-aq6/', 'ions/', 'ions/cr-iii/', 'ligands/', 'ligands/ammine/', 'series/', 'series/factors/', 'series/predictions/', 'series/orders/', 'series/correlation/', 'methods/', 'review/', 'cautions/', 'cautions/perchlorate/', 'changes/', 'compare/', 'predict/', 'data/', 'data/dictionary/', '404.html'] as const;

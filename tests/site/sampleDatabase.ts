@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import { existsSync, mkdirSync, readFileSync, rmSync } from 'node:fs';
 import { dirname, resolve } from 'node:path';
 import Database from 'better-sqlite3';
@@ -31,6 +32,9 @@ const LIGANDS = [
   ['ammine', 'ammine', 'NH3', null, ['ammonia'], 0, 1, ['N']], ['aqua', 'aqua', 'H2O', null, ['water'], 0, 1, ['O']],
   ['chlorido', 'chlorido', 'Cl-', null, ['chloro', 'chloride'], -1, 1, ['Cl']], ['en', 'ethane-1,2-diamine', 'C2H8N2', 'en', ['ethylenediamine'], 0, 2, ['N', 'N']],
 ] as const;
+
+/** The text that stands for the typed record of a complex of the sample; its hash is in the database. */
+export const sampleRecordText = (id: string): string => `# ${id}: the sample is written as rows, not typed\n`;
 
 /** Writes a small invented collection under the real schema, for tests of the site alone. */
 export function writeSampleDatabase(file: string, options: { readonly complexes?: boolean; readonly hostile?: string } = {}): string {
@@ -80,7 +84,7 @@ function neutralValues(database: Database.Database, table: string): Readonly<Rec
 function putComplex(put: (table: string, row: Readonly<Record<string, unknown>>) => void, sample: Sample, hostile: string | null): void {
   const { id, ion, geometry } = sample;
   put('complex', {
-    id, file: `complexes/${id}.yaml`, hash: 'ab'.repeat(32), formula: sample.formula, name: hostile, charge: sample.charge, ion, geometry, fitted: 1, isomer: id.includes('cl2') ? 'cis' : 'none',
+    id, file: `complexes/${id}.yaml`, hash: createHash('sha256').update(sampleRecordText(id)).digest('hex'), formula: sample.formula, name: hostile, charge: sample.charge, ion, geometry, fitted: 1, isomer: id.includes('cl2') ? 'cis' : 'none',
     spin: sample.spin, multiplicity: sample.multiplicity, spin_typed: sample.spin, spin_assumed: 0, notes: hostile,
   });
   Object.entries(sample.ligands).forEach(([ligand, count], index) => put('complex_ligand', { complex: id, ligand, number: index + 1, count, bound: ligand === 'en' ? 2 : 1 }));

@@ -8,6 +8,8 @@ import { collectionFromRows } from '../../../scripts/export/collectionFromRows.t
 import { rebuildFromExport } from '../../../scripts/export/fromExport.ts';
 import { projectFolder } from '../../../scripts/publish/pages.ts';
 import { rebuildLines } from '../../../scripts/report/rebuild.ts';
+import { dataPage } from '../../../site/data/downloads.ts';
+import { sampleTree } from '../../site/sample.ts';
 import { runScript } from '../commands/runScript.ts';
 import { sampleContent } from '../commands/sampleContent.ts';
 import { exported } from './built.ts';
@@ -83,6 +85,14 @@ describe('npm run refit -- --from-export', () => {
     expect([said.code, said.stderr]).toEqual([0, '']);
     expect(said.stdout).toMatch(/Compared \d+ cells with the export: 0 differences\.\nThe rebuilt database has the bytes of the published one\.\n$/);
     expect(JSON.parse(runScript('refit', [...words, '--json']).stdout)).toMatchObject({ ok: true, differences: [], sameBytes: true });
+  });
+
+  it('as the data page gives it, on the built demonstration, finds no difference', () => {
+    const command = dataPage(sampleTree()).rebuild;
+    expect(command).toMatch(/^npm run refit -- /);
+    const words = command.replace(/^npm run refit -- /, '').replace('DIR', demonstration.data).split(' ');
+    const { code, stdout } = runScript('refit', [...words, '--database', join(demonstration.folder, 'claim.sqlite'), '--json']);
+    expect([code, JSON.parse(stdout)]).toEqual([0, expect.objectContaining({ ok: true, differences: [], sameBytes: true })]);
   });
 
   it('of a folder without an export ends with code 3 and a reason', () => {

@@ -7,7 +7,7 @@ import { sampleTree } from '../sample.ts';
 const tree = sampleTree();
 const release = (id: string, number: number): FrozenReleaseRow => ({ id, number, date: `2027-0${number}-01`, who: 'T. Linde', cause: 'A sample.', doi: null, complexes: 8, measurements: 9 });
 const change = (number: number, of: string | null, complex = 'cr-am6'): ChangeRow => ({ number, release: of, complex, measurement: 'aq-295', cause: 'readings', text: `Delta of change ${number}.` });
-const withHistory = (changes: readonly ChangeRow[]) => ({ ...tree, history: { releases: [release('1.0', 1), release('1.1', 2)], changes, gone: [] } });
+const withHistory = (changes: readonly ChangeRow[]) => ({ ...tree, history: { releases: [release('1.0', 1), release('1.1', 2)], changes, gone: [], frozen: [] } });
 
 test('before the first release the page says since when, and that nothing is frozen', () => {
   expect(changesPage(tree, 1)).toMatchObject({ sections: [], gone: null, sentence: expect.stringContaining('started on 2026-01-01') });
@@ -31,6 +31,6 @@ test('later pages hold only what is on them', () => {
 });
 
 test('a tombstone names its successor and the reason', () => {
-  const page = changesPage({ ...tree, history: { releases: [], changes: [], gone: [{ address: 'complexes/cr-old/', kind: 'tombstone', target: 'complexes/cr-am6/', reason: 'measured on the wrong salt' }] } }, 1);
+  const page = changesPage({ ...tree, history: { releases: [], changes: [], frozen: [], gone: [{ address: 'complexes/cr-old/', kind: 'tombstone', target: 'complexes/cr-am6/', reason: 'measured on the wrong salt' }] } }, 1);
   expect(page.gone!.rows[0]).toEqual([{ parts: [{ text: 'complexes/cr-old/', style: 'plain' }] }, 'withdrawn', { parts: [{ text: 'complexes/cr-am6/', style: 'plain' }], path: 'complexes/cr-am6/' }, 'measured on the wrong salt']);
 });

@@ -62,8 +62,12 @@ test('a quoted value stands against the refitted one', () => {
   expect(complexPage(tree, complex('cr-en3')).quotes).toEqual([expect.objectContaining({ typed: '21850 cm-1', difference: '\u221250' })]);
 });
 
-test('the citation names group, collection, release, record and address, and invents no DOI', () => {
-  expect(text(complexPage(tree, complex('cr-am6')).citation)).toBe('The invented sample group, Sample bands, release 2026.1, record cr-am6, [Cr(NH3)6]3+, https://example.org/bands/complexes/cr-am6/. DOI: not yet assigned.');
+test('the citation names people, record, collection, release, date and address, and invents no DOI', () => {
+  const { citation } = complexPage(tree, complex('cr-am6'));
+  expect(text(citation.parts)).toBe('T. Linde: [Cr(NH3)6]3+, record cr-am6, in: Sample bands, release 2026.1 (not frozen), 2026-01-01. The invented sample group. https://example.org/bands/complexes/cr-am6/ DOI: not yet assigned. Invented demonstration data, not to be cited as measurements.');
+  expect(citation.text).toBe(text(citation.parts));
+  expect(citation.parts).toContainEqual({ text: '3+', style: 'super' });
+  expect(citation.files.map(({ path }) => path)).toEqual(['complexes/cr-am6/cite.bib', 'complexes/cr-am6/cite.ris']);
 });
 
 test('the complex is named from its ligands where the record gives no name', () => {
@@ -134,11 +138,13 @@ test('the methods page prints the policy in force', () => {
   expect(page.freeIonSets.filter(({ inUse }) => inUse).map(({ name }) => name)).toEqual(['published']);
 });
 
-test('the data page names each column once, and says which licence holds', () => {
+test('the data page offers every file once, and says which licence holds', () => {
   const page = dataPage(tree);
-  expect(new Set(page.dictionary.rows.map(([name]) => name)).size).toBe(page.dictionary.rows.length);
+  const paths = [...page.files, ...page.tables].map(({ path }) => path);
+  expect(new Set(paths).size).toBe(paths.length);
+  expect(paths).toEqual(expect.arrayContaining(['data/SHA256SUMS', 'data/datacite.xml', 'data/csv/band.csv']));
   expect(page.licence).toBe('CC-BY-4.0');
-  expect(page.citation).toContain('DOI: not yet assigned');
+  expect(page.citation.text).toContain('DOI: not yet assigned');
 });
 
 test('diagrams are drawn once a collection, and keys go on after z', () => {
