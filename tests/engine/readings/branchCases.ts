@@ -17,7 +17,7 @@ const of = (name: string, electrons: number, geometry: GroundCase['geometry'], m
   name, ion: { electrons, geometry, multiplicity }, ratio, labels: labels.split(' '),
 });
 
-/** The configurations of every test run. */
+/** Ions, fields and spins. */
 export const configurations: readonly Configuration[] = [
   of('d2 octahedral', 2, 'octahedral', 3, 4.5, 'a3T2g b3T1g a3A2g'),
   of('d2 tetrahedral', 2, 'tetrahedral', 3, 4.5, 'a3T2 a3T1 b3T1'),
@@ -33,10 +33,7 @@ export const configurations: readonly Configuration[] = [
   of('d8 octahedral', 8, 'octahedral', 3, 4.5, 'a3T2g a3T1g b3T1g'),
   of('d8 octahedral with singlets', 8, 'octahedral', 3, 4.5, 'a3T2g a3T1g b3T1g a1Eg a1T2g a1A1g'),
   of('d8 tetrahedral', 8, 'tetrahedral', 3, 4.5, 'a3T2 b3T1 a3A2'),
-];
-
-/** Further ones for a long run: other C/B, and grounds that change. */
-export const furtherConfigurations: readonly Configuration[] = [
+  // Grounds that change along the curve, and other C/B.
   of('d3 octahedral, doublet ground', 3, 'octahedral', 2, 4.5, 'b2Eg a2T1g a2T2g b2T2g a2A1g'),
   of('d4 octahedral, singlet ground', 4, 'octahedral', 1, 4.5, 'a1T2g b1T2g a1Eg b1Eg a1T1g a1A1g b1A1g'),
   of('d4 tetrahedral, low spin', 4, 'tetrahedral', 1, 4.5, 'a1T1 a1T2 b1T2 a1E b1A1'),
