@@ -7,8 +7,8 @@ import { refit } from '../../scripts/database/refit.ts';
 import { writePublication } from '../../scripts/export/writePublication.ts';
 import { buildPages } from '../../scripts/publish/pages.ts';
 import { freeze } from '../../scripts/release/freeze.ts';
-import { jsonLdProblems } from '../schemas/check.ts';
 import { readXml } from '../schemas/readXml.ts';
+import { schemaOrgProblems } from '../schemas/schemaOrg.ts';
 import { sampleContent, sampleFile } from '../scripts/commands/sampleContent.ts';
 import { type ServedSite, builtPages, openBrowser, serve, watchedPage } from './site.ts';
 
@@ -144,14 +144,11 @@ describe('files for machines', () => {
   });
 
   test('JSON-LD stands in the heads of the front page, the data page and every record, and nowhere else', () => {
-    const found = builtPages(site).flatMap(({ path, html: page }) => {
-      const blocks = [...parseHTML(page).document.querySelectorAll('head > script[type="application/ld+json"]')].map((script) => script.textContent);
-      for (const block of blocks) {
-        expect(block, path).not.toContain('<');
-        expect(jsonLdProblems(JSON.parse(block)), path).toEqual([]);
-      }
-      return blocks.map((block): [string, unknown] => [path, (JSON.parse(block) as { '@type': string })['@type']]);
-    });
+    const blocks = builtPages(site).flatMap(({ path, html: page }) => [...parseHTML(page).document.querySelectorAll('script[type="application/ld+json"]')].map((script) => ({ path, text: script.textContent })));
+    for (const { path, text } of blocks) expect(text, path).not.toContain('<');
+    const read = blocks.map(({ path, text }) => ({ path, value: JSON.parse(text) as { '@type': string } }));
+    expect(schemaOrgProblems(read.map(({ value }) => value))).toEqual([]);
+    const found = read.map(({ path, value }) => [path, value['@type']]);
     expect(found).toEqual([['complexes/co3-am6-new/', 'Dataset'], ['complexes/cr-am6/', 'Dataset'], ['data/', 'Dataset'], ['', 'DataCatalog']]);
   });
 

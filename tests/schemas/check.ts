@@ -23,31 +23,6 @@ function problems(ajv: Pick<Ajv, 'compile'>, schema: object, value: unknown): re
   return (check.errors ?? []).map(({ instancePath, message }) => `${instancePath}: ${message}`);
 }
 
-interface Vocabulary {
-  readonly [type: string]: { readonly of: string | null; readonly properties: readonly string[]; readonly needs?: readonly string[] };
-}
-
-/** What schema.org, as kept, does not know in a JSON-LD value: types, properties of a type, properties that are missing. */
-export function jsonLdProblems(value: unknown): readonly string[] {
-  return walk(value, kept('schema-org.json') as Vocabulary, '');
-}
-
-function walk(value: unknown, vocabulary: Vocabulary, path: string): string[] {
-  if (Array.isArray(value)) return value.flatMap((item, index) => walk(item, vocabulary, `${path}[${index}]`));
-  if (typeof value !== 'object' || value === null) return value === null ? [`${path}: null`] : [];
-  const { '@type': type, ...rest } = value as Record<string, unknown>;
-  const known = typeof type === 'string' ? vocabulary[type] : undefined;
-  if (known === undefined) return [`${path}: no type "${String(type)}"`];
-  const allowed = new Set<string>();
-  for (let step: string | null = type as string; step !== null; step = vocabulary[step]!.of) for (const property of vocabulary[step]!.properties) allowed.add(property);
-  return [
-    ...(known.needs ?? []).filter((property) => !(property in rest)).map((property) => `${path}: ${String(type)} without ${property}`),
-    ...Object.entries(rest).flatMap(([property, inner]) => property.startsWith('@') ? [] : [
-      ...(allowed.has(property) ? [] : [`${path}: ${String(type)} has no property ${property}`]), ...walk(inner, vocabulary, `${path}.${property}`),
-    ]),
-  ];
-}
-
 interface ElementRule {
   readonly needs?: readonly string[];
   readonly may?: readonly string[];

@@ -6,12 +6,12 @@ import { citationCff } from '../../../scripts/export/metadata/cff.ts';
 import { dataPackage } from '../../../scripts/export/metadata/dataPackage.ts';
 import type { WrittenFile } from '../../../scripts/export/metadata/dataPackage.ts';
 import { dataciteJson, dataciteXml } from '../../../scripts/export/metadata/datacite.ts';
-import { dataCatalog, dataset, jsonLdText, recordDataset } from '../../../scripts/export/metadata/jsonLd.ts';
+import { dataCatalog, dataset, recordDataset } from '../../../scripts/export/metadata/jsonLd.ts';
 import { licenceAddress, publicationOf } from '../../../scripts/export/metadata/publication.ts';
 import { roCrate } from '../../../scripts/export/metadata/roCrate.ts';
 import { linkset, recordLinks, setLinks } from '../../../scripts/export/metadata/signposting.ts';
 import { robots, sitemap } from '../../../scripts/export/metadata/siteFiles.ts';
-import { elementProblems, jsonLdProblems, problemsUnder } from '../../schemas/check.ts';
+import { elementProblems, problemsUnder } from '../../schemas/check.ts';
 import { readXml } from '../../schemas/readXml.ts';
 import type { XmlElement } from '../../schemas/readXml.ts';
 import { awkward, bare, ordinary, publications, record } from './publications.ts';
@@ -38,19 +38,6 @@ describe.each(publications)('the metadata of a collection %s', (_, publication) 
     expect(child(xml, 'identifier').text).toBe(json.doi ?? '(:tba)');
     expect(json.doi).toBe(publication.doi ?? undefined);
     expect(child(xml, 'dates').children).toHaveLength(json.dates.length);
-  });
-
-  it('are JSON-LD of types and properties that schema.org knows', () => {
-    for (const value of [dataCatalog(publication), dataset(publication, mainFiles), recordDataset(publication, record)]) {
-      expect(value['@context']).toBe('https://schema.org/');
-      expect(jsonLdProblems(value)).toEqual([]);
-    }
-  });
-
-  it('stand in a page as a script that no text can end', () => {
-    const text = jsonLdText(dataset(publication, mainFiles));
-    expect(text).not.toContain('<');
-    expect(JSON.parse(text)).toEqual(dataset(publication, mainFiles));
   });
 
   it('are an RO-Crate whose every reference leads to an entity', () => {
@@ -105,8 +92,6 @@ describe('the checks themselves', () => {
     expect(problemsUnder('cff.json', { ...cff, authors: [] })).not.toEqual([]);
     expect(problemsUnder('cff.json', { ...cff, doi: 'not yet assigned' })).not.toEqual([]);
     expect(problemsUnder('datacite.json', { ...dataciteJson(ordinary, formats), publicationYear: 2026 })).not.toEqual([]);
-    expect(jsonLdProblems({ ...dataset(ordinary, mainFiles), licence: 'x' })).toEqual([': Dataset has no property licence']);
-    expect(jsonLdProblems({ '@type': 'DataSet' })).toEqual([': no type "DataSet"']);
     expect(problemsUnder('linkset.json', { linkset: [{ anchor: 'https://example.org/', 'cited-as': [{ href: 'https://example.org/' }] }] })).not.toEqual([]);
     expect(problemsUnder('ro-crate.json', { ...roCrate(ordinary, written), '@graph': [] })).not.toEqual([]);
     const xml = readXml(dataciteXml(ordinary, formats));
