@@ -39,7 +39,9 @@ function summary(collection: Collection, filesRead: number, folder: string): str
   const measurements = collection.complexes.reduce((sum, complex) => sum + complex.measurements.length, 0);
   const line = `No faults in ${count(filesRead, 'file')}: ${count(collection.complexes.length, 'complex', 'complexes')}, ${count(measurements, 'measurement')}, ${count(collection.ligands.length, 'ligand')}, ${count(collection.sources.length, 'source')}.\n`;
   const next = collection.complexes.length === 0 ? `There is no complex yet: type the first record into ${folder}/complexes/, as content/README.md shows.\n` : '';
-  return `${line}${next}`;
+  const undrawn = collection.ligands.filter(({ smiles }) => smiles === null).map(({ id }) => id);
+  const remark = undrawn.length === 0 ? '' : `Remark: no smiles: in ${undrawn.slice(0, 8).join(', ')}${undrawn.length > 8 ? ` and ${undrawn.length - 8} more` : ''}; the pages show no structure there.\n`;
+  return `${line}${remark}${next}`;
 }
 
 function count(number: number, one: string, more = `${one}s`): string {

@@ -83,6 +83,7 @@ const chemistryCodes = {
   FORMULA_CONTENT: 'the formula and the ion with its ligands hold different atoms',
   SAMPLE_CONTENT: 'the sample does not contain the complex',
   LIGAND_DONORS: 'the donors of a ligand differ in number from its denticity, or are not in its formula',
+  LIGAND_SMILES: 'a SMILES that cannot be read, or whose atoms other than hydrogen are not those of the formula',
   SPIN_MISSING: 'octahedral d4 to d7 without a spin',
   SPIN_IMPOSSIBLE: 'a spin that the ion cannot have',
   BAND_RANGE: 'a band outside 1000 to 100 000 cm-1, often nm typed as cm-1',

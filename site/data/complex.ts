@@ -15,6 +15,8 @@ import { type Citation, citation } from './publication.ts';
 import { type Quote, quotes } from './quotes.ts';
 import { type RecordHistory, recordHistory } from './recordHistory.ts';
 import { groupBy } from './group.ts';
+import { complexSchematic } from './schematic.ts';
+import { tellingStructure } from './structure.ts';
 import { listed, parameterShown } from './show.ts';
 import { type Origin, measurementOrigin } from './origin.ts';
 import { type Table, column, quantity, rowColumn, soft } from './table.ts';
@@ -47,6 +49,8 @@ export interface ComplexPage {
   readonly ion: { readonly name: string; readonly path: string; readonly configuration: Parts };
   readonly facts: readonly { readonly name: string; readonly value: string }[];
   readonly ligands: readonly { readonly text: string; readonly path: string; readonly count: string }[];
+  /** The donors around the metal, and each ligand whose structure tells more than its formula. */
+  readonly drawings: readonly { readonly name: string; readonly path: string | null; readonly svg: string }[];
   readonly notes: string | null;
   /** Side by side where there is more than one measurement. */
   readonly summary: Table | null;
@@ -76,12 +80,23 @@ export function complexPage(tree: CollectionTree, complex: ComplexNode): Complex
     ligands: complex.ligands.map(({ row: link, ligand }) => ({
       text: ligand.name, path: ligandPath(ligand.id), count: `${link.count}${link.bound === ligand.denticity ? '' : `, bound by ${link.bound} of ${ligand.denticity}`}`,
     })),
-    notes: row.notes, summary: summary(complex),
+    drawings: drawings(tree, complex), notes: row.notes, summary: summary(complex),
     measurements: complex.measurements.map((measurement) => measurementShown(tree, measurement)),
     cautions: cautions(complex), neighbours: neighbours(tree, complex), placements: placements(complex), diagram: placeOnDiagram(tree, complex), quotes: quotes(tree, complex),
     record: { file: row.file, hash: row.hash, files: filesShown(recordFiles, complexPath(row.id)) },
     citation: citation(tree, complex), history: recordHistory(tree, complex), head: complexHead(tree, complex), report: report(tree, complex),
   };
+}
+
+function drawings(tree: CollectionTree, complex: ComplexNode): ComplexPage['drawings'] {
+  const schematic = complexSchematic(tree, complex);
+  return [
+    ...(schematic === null ? [] : [{ name: 'Donors, schematic', path: null, svg: schematic }]),
+    ...complex.ligands.flatMap(({ ligand }) => {
+      const svg = tellingStructure(tree, ligand.id);
+      return svg === null ? [] : [{ name: ligand.abbreviation ?? ligand.name, path: ligandPath(ligand.id), svg }];
+    }),
+  ];
 }
 
 function identity({ row }: ComplexNode): ComplexPage['facts'] {
