@@ -9,7 +9,7 @@ import { readManifest } from './begin/demonstration.ts';
 import { exampleId, exampleLigand, exampleText } from './begin/example.ts';
 import { manualWithoutDemonstration } from './begin/manual.ts';
 import { isDemonstration, planBegin } from './begin/plan.ts';
-import { groupText, placeholderUrl, policyText } from './begin/settings.ts';
+import { groupText, placeholderStart, placeholderUrl, policyText } from './begin/settings.ts';
 import type { NewGroup } from './begin/settings.ts';
 import { beginFacts, beginLines } from './begin/words.ts';
 import { readCollection } from './content/readCollection.ts';
@@ -31,7 +31,7 @@ const table: CommandTable = {
     { name: 'contact', value: 'ADDRESS', help: 'where readers report mistakes' },
     { name: 'licence', value: 'SPDX', help: 'licence of your records (CC-BY-4.0)' },
     { name: 'url', value: 'ADDRESS', help: `where the site will stand, with its base path (${placeholderUrl})` },
-    { name: 'started', value: 'DATE', help: 'day on which the collection was started, year-month-day (today)' },
+    { name: 'started', value: 'DATE', help: `day on which the collection was started, year-month-day (${placeholderStart}, to be typed later)` },
     { name: 'content', value: 'DIR', help: 'folder of the records (content)' },
     { name: 'show', help: 'say what would be done, and change nothing' },
     { name: 'again', help: 'begin although group.yaml is no longer that of the demonstration; the old settings are kept beside the new ones' },
@@ -67,8 +67,7 @@ function newGroup(given: Arguments): NewGroup {
     title: given.text('title')?.trim() ?? `Spectra of ${group}`,
     licence: checked('licence', licence(), given.text('licence') ?? 'CC-BY-4.0'),
     url: checked('url', webAddress(), given.text('url') ?? placeholderUrl),
-    // The one day that is typed for the person; nothing that is built later asks the clock.
-    started: checked('started', date(), given.text('started') ?? today()),
+    started: checked('started', date(), given.text('started') ?? placeholderStart),
     contact: given.text('contact')?.trim() ?? null,
     person: given.text('person')?.trim() ?? null,
   };
@@ -80,12 +79,6 @@ function checked(option: string, reader: ReturnType<typeof licence>, typed: stri
   if (read.success) return read.data;
   const [issue] = read.error.issues;
   throw new UsageError(`--${option}: found "${typed}", expected ${issue?.message ?? 'another value'}.`);
-}
-
-/** The day on this machine, "2026-03-01". */
-function today(): string {
-  const now = new Date();
-  return [now.getFullYear(), now.getMonth() + 1, now.getDate()].map((part) => String(part).padStart(2, '0')).join('-');
 }
 
 function newFiles(content: string, group: NewGroup): Record<string, string> {

@@ -5,6 +5,7 @@ import type { CommandTable } from './arguments.ts';
 import { exitCodes } from './exitCodes.ts';
 import { runCommand } from './runCommand.ts';
 import { findChromium } from './test/chromium.ts';
+import { testsLeftOut } from './test/demonstrationTests.ts';
 import { runCheck, runTests } from './test/steps.ts';
 import type { Score } from './test/steps.ts';
 
@@ -33,6 +34,8 @@ await runCommand(table.name, async () => {
     say('Not run: tests/browser, for no Chromium was found. Install it (apt-get install chromium) or set CHROME_PATH to one.');
     if (process.env['BANDSTEAD_REQUIRE_BROWSER'] === '1') scores.push({ passed: 0, failed: 1 });
   }
+  const left = testsLeftOut();
+  if (left.length > 0) say(`Not run: ${left.length} files of tests that speak of the demonstration's records, which are no longer in content/ (scripts/test/demonstrationTests.ts names them).`);
   const passed = scores.reduce((sum, score) => sum + score.passed, 0);
   const failed = scores.reduce((sum, score) => sum + score.failed, 0);
   say(`${passed} passed, ${failed} failed`);

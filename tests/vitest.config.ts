@@ -1,5 +1,6 @@
 import { fileURLToPath } from 'node:url';
 import { configDefaults, defineConfig } from 'vitest/config';
+import { testsLeftOut } from '../scripts/test/demonstrationTests.ts';
 
 // scripts/test.ts sets this where there is no browser to run tests/browser in.
 const withoutBrowser = process.env['BANDSTEAD_WITHOUT_BROWSER'] === '1';
@@ -8,7 +9,7 @@ export default defineConfig({
   root: fileURLToPath(new URL('..', import.meta.url)),
   test: {
     include: ['tests/**/*.test.ts'],
-    exclude: [...configDefaults.exclude, ...(withoutBrowser ? ['tests/browser/**'] : [])],
+    exclude: [...configDefaults.exclude, ...testsLeftOut(), ...(withoutBrowser ? ['tests/browser/**'] : [])],
     // A test left focused would hide the others.
     allowOnly: false,
     globalSetup: ['tests/run/folder.ts'],

@@ -4,8 +4,8 @@ import { createHash } from 'node:crypto';
 import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 
-/** Files that a group keeps: the manual, the editors' schema, and the ligands, whose chemistry is real. */
-const kept = /^(?:README\.md|record\.schema\.json|ligands\/.*)$/;
+/** Files that a group keeps: the manuals, the editors' schema, and the ligands, whose chemistry is real. */
+export const kept = /^(?:README\.md|releases\/README\.md|record\.schema\.json|ligands\/.*)$/;
 
 export const manifestFile = join(import.meta.dirname, 'demonstration.json');
 

@@ -4,7 +4,7 @@ import { existsSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { plainValue } from '../content/node.ts';
 import { readYaml } from '../content/yaml/read.ts';
-import { filesIn, fingerprint } from './demonstration.ts';
+import { filesIn, fingerprint, kept } from './demonstration.ts';
 import type { Manifest } from './demonstration.ts';
 
 export interface NewFile {
@@ -38,7 +38,7 @@ export function isDemonstration(directory: string): boolean {
 export function planBegin(directory: string, manifest: Manifest, texts: Readonly<Record<string, string>>): BeginPlan {
   const present = new Map(filesIn(directory).map((path) => [path, readFileSync(join(directory, path), 'utf8')]));
   const asItCame = (path: string): boolean => Object.hasOwn(manifest, path) && manifest[path] === fingerprint(present.get(path) ?? '');
-  const records = [...present.keys()].filter((path) => path.includes('/') && !path.startsWith('ligands/'));
+  const records = [...present.keys()].filter((path) => path.includes('/') && !kept.test(path));
   const own = records.filter((path) => !asItCame(path) && !Object.hasOwn(texts, path));
   const cited = own.map((path) => present.get(path)!).join('\n');
   const isCited = (path: string): boolean => path.startsWith('sources/') && new RegExp(`\\b${path.slice('sources/'.length, -'.yaml'.length)}\\b`).test(cited);

@@ -18,6 +18,9 @@ export interface NewGroup {
 /** Address that stands for "not known yet": a domain reserved for examples. */
 export const placeholderUrl = 'https://example.org/bands/';
 
+/** Day that stands for "not typed yet": no clock is asked, and a release is refused while it stands. */
+export const placeholderStart = '1900-01-01';
+
 /** The text of group.yaml. */
 export function groupText({ group, title, licence, url, started, contact, person }: NewGroup): string {
   const initials = person === null ? null : initialsOf(person);
@@ -34,7 +37,7 @@ export function groupText({ group, title, licence, url, started, contact, person
     `licence: ${typedText(licence)}                       # SPDX identifier of the licence of your records`,
     `url: ${url}          # where the site will stand, with its base path${url === placeholderUrl ? ': change it before you publish' : ''}`,
     'release: 0.1.0',
-    `started: ${started}                      # day on which the collection was started`,
+    `started: ${started}                      # day on which the collection was started${started === placeholderStart ? ': type yours, everything is dated by it until the first release' : ''}`,
     '',
   ].join('\n');
 }
@@ -45,7 +48,7 @@ export function policyText(started: string): string {
   const share = (value: number): string => `${Number((value * 100).toPrecision(6))} %`;
   return [
     '# The fitting choices of the group: one policy for every result. These are the defaults; a change refits the whole collection.',
-    `name: ${slug(`house-${started.slice(0, 4)}`, 'house')}`,
+    `name: ${started === placeholderStart ? 'house' : slug(`house-${started.slice(0, 4)}`, 'house')}`,
     `C/B: ${concise(cOverB.general.value, cOverB.general.u)}`,
     `floors: { general: ${floors.general} cm-1, spin-flip: ${floors.spinFlip} cm-1, two-electron: ${floors.twoElectron} cm-1 }`,
     `ceilings: { Delta: ${share(ceilings.delta)}, B: ${share(ceilings.racahB)}, C: ${share(ceilings.racahC)} }`,

@@ -3,7 +3,7 @@
 import { counted } from '../report/columns.ts';
 import type { BeginPlan } from './plan.ts';
 import { exampleId } from './example.ts';
-import { placeholderUrl } from './settings.ts';
+import { placeholderStart, placeholderUrl } from './settings.ts';
 import type { NewGroup } from './settings.ts';
 
 export interface BeginCircumstances {
@@ -36,7 +36,7 @@ export function beginLines({ remove, keep, write }: BeginPlan, { content, done, 
     ...(keep.length === 0 ? [] : [`${verb('Kept', 'Keep')}, because they are not the demonstration as it came, or are cited by such a record:`, ...wrapped(keep)]),
     `${verb('Wrote', 'Write')} ${write.length === 0 ? 'nothing' : write.map(({ path }) => path).join(', ')}.`,
     ...old.map(({ path, oldTextTo }) => `The old ${path} ${verb('is kept', 'would be kept')} as ${oldTextTo}.`),
-    `Settings: licence ${group.licence}, started ${group.started}, address ${group.url}${group.url === placeholderUrl ? ' (change it in group.yaml before you publish)' : ''}.`,
+    `Settings: licence ${group.licence}, started ${group.started}${group.started === placeholderStart ? ' (stands for the day; type yours in group.yaml)' : ''}, address ${group.url}${group.url === placeholderUrl ? ' (change it in group.yaml before you publish)' : ''}.`,
     ...(done ? [
       `Next: copy ${content}/complexes/${exampleId}.yaml, an example with invented readings, to ID.yaml and type your first record over it;`,
       'delete the example and change the description in group.yaml, which speaks of it; then "npm run check", and "npm run dev" for the page.',

@@ -4,6 +4,7 @@ import { refitCollection } from '../database/refit.ts';
 import type { RefitOrder } from '../database/refit.ts';
 import { replaceFile } from '../database/writeFile.ts';
 import type { Fault } from '../content/types.ts';
+import { placeholderStart } from '../begin/settings.ts';
 import { changesBetween } from './changes.ts';
 import { readContent } from './readContent.ts';
 import { releaseFolder } from './readHistory.ts';
@@ -35,6 +36,7 @@ export function freeze({ content, cache, progress, release, date, who, cause, co
   const last = history.releases.at(-1);
   if (history.releases.some((one) => one.release === release)) return { kind: 'refused', reason: `release ${release} is frozen already, and a frozen release does not change: choose another name` };
   if (date < (last?.date ?? collection.group.started)) return { kind: 'refused', reason: `the date ${date} lies before ${last === undefined ? 'the collection was started' : `release ${last.release}`}` };
+  if (collection.group.started === placeholderStart) return { kind: 'refused', reason: `started: in group.yaml is still ${placeholderStart}, which stands for a day that was not typed: type the day on which the collection was started` };
   const group = readFileSync(join(content, 'group.yaml'), 'utf8');
   const renamed = withRelease(group, release);
   if (renamed === null) return { kind: 'refused', reason: 'group.yaml has not exactly one line that starts with "release:"' };

@@ -2,8 +2,8 @@ import { cpSync, existsSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { afterAll, beforeEach, describe, expect, it } from 'vitest';
 import { filesIn, fingerprint, fingerprintsOf, readManifest } from '../../../scripts/begin/demonstration.ts';
-import { isDemonstration } from '../../../scripts/begin/plan.ts';
 import { readCollection } from '../../../scripts/content/readCollection.ts';
+import { freeze } from '../../../scripts/release/freeze.ts';
 import { projectFolder } from '../../../scripts/publish/pages.ts';
 import { runScript } from '../commands/runScript.ts';
 import { temporaryFolder } from '../commands/sampleContent.ts';
@@ -12,8 +12,7 @@ const demonstration = join(projectFolder, 'content');
 const place = temporaryFolder();
 afterAll(() => place.remove());
 
-// A group that has begun its own collection has no demonstration left to begin from.
-describe.runIf(isDemonstration(demonstration))('beginning from the demonstration', { timeout: 60_000 }, () => {
+describe('beginning from the demonstration', { timeout: 60_000 }, () => {
   let number = 0;
   let folder = '';
   const file = (path: string): string => join(folder, path);
@@ -36,7 +35,7 @@ describe.runIf(isDemonstration(demonstration))('beginning from the demonstration
     const { code, stdout, stderr } = begin('--group', 'Group: "A" #1', '--person', 'Åsa Öberg-Lund', '--contact', 'bands@example.org', '--licence', 'CC-BY-SA-4.0', '--url', 'https://example.org/a/b', '--started', '2004-09-01');
     expect([code, stderr]).toEqual([0, '']);
     expect(stdout).toContain('complexes/cr-am6.yaml');
-    expect(filesIn(folder).filter((path) => !path.startsWith('ligands/'))).toEqual(['README.md', 'complexes/example-cr-am6.yaml', 'group.yaml', 'policy.yaml', 'record.schema.json']);
+    expect(filesIn(folder).filter((path) => !path.startsWith('ligands/'))).toEqual(['README.md', 'complexes/example-cr-am6.yaml', 'group.yaml', 'policy.yaml', 'record.schema.json', 'releases/README.md']);
     expect(filesIn(join(folder, 'ligands'))).toEqual(ligands);
     const { collection, faults } = readCollection(folder);
     expect(faults).toEqual([]);
@@ -70,6 +69,15 @@ describe.runIf(isDemonstration(demonstration))('beginning from the demonstration
     expect([text('complexes/cr-am6.yaml'), text('complexes/own.yaml'), text('policy.yaml.before')]).toEqual(before);
     expect(existsSync(file('sources/quarle-2020.yaml'))).toBe(false);
     expect(readCollection(folder).faults).toEqual([]);
+  });
+
+  it('asks no clock: without --started a day that stands for none is typed, and a release is refused while it stands', () => {
+    expect(begin('--group', 'A').stdout).toContain('started 1900-01-01 (stands for the day; type yours in group.yaml)');
+    expect(text('group.yaml')).toContain('started: 1900-01-01 ');
+    const order = { content: folder, cache: null, release: '1.0.0', date: '2026-03-01', who: 'A', cause: 'The first.', codeVersion: null };
+    expect(freeze(order)).toMatchObject({ kind: 'refused', reason: expect.stringContaining('type the day on which the collection was started') });
+    writeFileSync(file('group.yaml'), text('group.yaml').replace('1900-01-01', '2019-09-01'));
+    expect(freeze(order)).toMatchObject({ kind: 'frozen' });
   });
 
   it('changes nothing with --show', () => {
