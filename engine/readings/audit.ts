@@ -55,7 +55,7 @@ interface Suspect {
 function refit({ measurement, policy, freeIon }: Pick<Suspect, 'measurement' | 'policy' | 'freeIon'>): Record<ParameterName, number> | null {
   const ion = declaredCase(measurement);
   if (typeof ion === 'string') return null;
-  const best = searchReadings({ measurement, ion, policy, ratio: ratioFor(policy, measurement.ion.name), freeIon }, 'as typed')[0];
+  const best = searchReadings({ measurement, ion, policy, ratio: ratioFor(policy, measurement.ion.name), freeIon }, 'as typed').readings[0];
   if (!best || !isFit(best.outcome)) return null;
   const { delta, racahB, racahC } = best.outcome.solutions[0]!.at;
   return { Delta: delta, B: racahB, C: racahC, beta: freeIon ? racahB / freeIon.racahB0 : Number.NaN };

@@ -6,7 +6,7 @@ import { policyId } from '../policy/policy.ts';
 import type { Policy } from '../policy/types.ts';
 import { wholeNumber } from '../words/numbers.ts';
 import { rankingSentence } from '../words/ranking.ts';
-import { doubletSentence, groundSentence, rivalSentence } from '../words/remarks.ts';
+import { doubletSentence, groundSentence, rivalSentence, searchStopped } from '../words/remarks.ts';
 import { thesisSentence } from '../words/thesis.ts';
 import type { Verdict } from '../words/types.ts';
 import { verdictSentence } from '../words/verdict.ts';
@@ -61,10 +61,11 @@ const noRivalry: Rivalry = { best: null, otherGeometry: false, words: '' };
 export function readWithRivals(measurement: Measurement, policy: Policy, freeIon: FreeIon | null): ReadMeasurement {
   const ion = declaredCase(measurement);
   if (typeof ion === 'string') return { chosen: unread(measurement, policy, ion), rivals: [] };
-  const { chosen, rivals } = contest(measurement, ion, policy, freeIon);
+  const { chosen, rivals, complete } = contest(measurement, ion, policy, freeIon);
   if (!chosen) return { chosen: unread(measurement, policy, 'no band can be assigned'), rivals: [] };
   const context: Context = { measurement, policy, freeIon, rivals: rivalry(chosen, rivals, policy), isRival: false };
-  const first = write(context, chosen);
+  const written = write(context, chosen);
+  const first = complete ? written : { ...written, remarks: [...written.remarks, searchStopped] };
   const fitStands = first.score !== null;
   return {
     chosen: first,

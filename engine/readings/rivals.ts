@@ -15,6 +15,8 @@ const rivalsAtMost = 4;
 export interface Contest {
   readonly chosen: ScoredReading | null;
   readonly rivals: readonly ScoredReading[];
+  /** false: not every way to read the bands was tried. */
+  readonly complete: boolean;
 }
 
 const keyOf = ({ ion, assigned }: ScoredReading): string =>
@@ -36,14 +38,14 @@ export function contest(measurement: Measurement, ion: GroundCase, policy: Polic
   const ratio = ratioFor(policy, measurement.ion.name);
   const task = { measurement, ion, policy, ratio, freeIon };
   const typed = searchReadings(task, 'as typed');
-  const chosen = typed[0] ?? null;
+  const chosen = typed.readings[0] ?? null;
   const known = chosen?.score;
   const anyTyped = measurement.bands.some((band) => band.terms.length > 0);
-  const others = [
-    ...typed.slice(1),
-    ...(anyTyped ? searchReadings(task, 'free', known) : []),
-    ...rivalCases(ion).flatMap((other) => searchReadings({ ...task, ion: other }, 'free', known)),
+  const searches = [
+    ...(anyTyped ? [searchReadings(task, 'free', known)] : []),
+    ...rivalCases(ion).map((other) => searchReadings({ ...task, ion: other }, 'free', known)),
   ];
+  const others = [...typed.readings.slice(1), ...searches.flatMap(({ readings }) => readings)];
   const seen = new Set(chosen ? [keyOf(chosen)] : []);
   const distinct = others.filter((reading) => {
     if (!isFit(reading.outcome) || !Number.isFinite(reading.score) || reading.assigned.length === 0) return false;
@@ -58,5 +60,5 @@ export function contest(measurement: Measurement, ion: GroundCase, policy: Polic
   const chosenScore = chosen && Number.isFinite(chosen.score) ? chosen.score : Number.POSITIVE_INFINITY;
   const reference = Math.min(chosenScore, notWithin[0]?.score ?? Number.POSITIVE_INFINITY);
   const within = Math.max(reference, Number.isFinite(chosenScore) ? chosenScore : reference) + keepWithin;
-  return { chosen, rivals: notWithin.filter((reading) => reading.score <= within).slice(0, rivalsAtMost) };
+  return { chosen, complete: [typed, ...searches].every(({ complete }) => complete), rivals: notWithin.filter((reading) => reading.score <= within).slice(0, rivalsAtMost) };
 }

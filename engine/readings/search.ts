@@ -23,11 +23,19 @@ export const readingsAtMost = 6;
 const firstPass = 3;
 const furthestPass = 100;
 
-/** A search stops after this many fits; no record of eight bands comes near. */
-const fitsAtMost = 5000;
+/** A search stops after this many steps, and says so. Records of eight bands without any typed term take a few thousand. */
+const stepsAtMost = 200_000;
 
 /** C0/B0 of the free ion, by which parents in typed labels are resolved. */
 const parentRatioOf = (freeIon: FreeIon | null): number => (freeIon?.racahC0 ? freeIon.racahC0 / freeIon.racahB0 : 4.5);
+
+/** What a search found. */
+export interface FoundReadings {
+  /** Best first. */
+  readonly readings: readonly ScoredReading[];
+  /** false: the search stopped before all was tried. */
+  readonly complete: boolean;
+}
 
 /** A step down the search. */
 interface Branch {
@@ -42,7 +50,7 @@ interface Branch {
 
 /**
  * The best assignments of the bands within their candidates, at most `readingsAtMost` and within `keepWithin` of
- * the best score, each with its fit, best first. Where nothing fits, the one reading that tells most about why.
+ * the best score, each with its fit. Where nothing fits, the one reading that tells most about why.
  *
  * Depth first. A branch is cut where the least score it can reach lies beyond what is kept: a lower bound of misfit and
  * parameters over the whole diagram (bound.ts), transitions skipped (gaps.ts), bands left over, and what a band's looks
@@ -50,7 +58,7 @@ interface Branch {
  *
  * @param known a score already reached elsewhere, against which `keepWithin` counts
  */
-export function searchReadings(task: SearchTask, freedom: Freedom, known = Number.POSITIVE_INFINITY): readonly ScoredReading[] {
+export function searchReadings(task: SearchTask, freedom: Freedom, known = Number.POSITIVE_INFINITY): FoundReadings {
   const { measurement, ion, policy, ratio, freeIon } = task;
   const { items, notFitted } = gatherItems(measurement, ion, policy, parentRatioOf(freeIon), freedom);
   const open = openItems(task, items);
@@ -68,6 +76,8 @@ export function searchReadings(task: SearchTask, freedom: Freedom, known = Numbe
   /** Nothing beyond this is looked at in the present pass. */
   let ceiling = Number.POSITIVE_INFINITY;
   const cut = (): number => Math.min(ceiling, (scores[0] ?? Number.POSITIVE_INFINITY) + keepWithin, scores[readingsAtMost - 1] ?? Number.POSITIVE_INFINITY);
+
+  let steps = 0;
 
   /** The choices on the way down to the present node, and the bands that are assigned by them. */
   const chosen: Choice[] = [];
@@ -121,6 +131,7 @@ export function searchReadings(task: SearchTask, freedom: Freedom, known = Numbe
   };
 
   const visit = (at: number, cost: number, node: BoundNode): void => {
+    steps += 1;
     if (at === open.length) {
       if (!isBeyond(cost, node)) tryChoices();
       return;
@@ -130,7 +141,7 @@ export function searchReadings(task: SearchTask, freedom: Freedom, known = Numbe
       if (cost + Math.min(ofAll, ofSome) > cut()) return;
     }
     for (const { band, node: grown, cost: paid, least } of branches(at, cost, node)) {
-      if (least > cut() || tried.size >= fitsAtMost) continue;
+      if (least > cut() || steps >= stepsAtMost) continue;
       chosen.push({ item: open[at]!.item, label: band?.label ?? null });
       if (band) bands.push(band);
       visit(at + 1, paid, grown);
@@ -167,6 +178,7 @@ export function searchReadings(task: SearchTask, freedom: Freedom, known = Numbe
   }
   ceiling = Number.POSITIVE_INFINITY;
   if (cut() > passed) visit(0, 0, bound.root);
-  if (found.length === 0 && !Number.isFinite(known)) return [mostTelling()];
-  return found.filter((reading) => reading.score <= cut()).sort((a, b) => a.score - b.score);
+  const complete = steps < stepsAtMost;
+  if (found.length === 0 && !Number.isFinite(known)) return { readings: [mostTelling()], complete };
+  return { readings: found.filter((reading) => reading.score <= cut()).sort((a, b) => a.score - b.score), complete };
 }

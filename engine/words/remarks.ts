@@ -19,6 +19,9 @@ export function doubletSentence(order: { gap: number; u: number; decidable: bool
   return `${lower} by ${size} cm⁻¹${sure}: vertical, not thermal energies.`;
 }
 
+/** What is said where bands may be read in more ways than are tried. */
+export const searchStopped = 'These bands may be read in more ways than were tried: better readings may exist. Terms, or lists of candidates, typed for some bands shorten the search.';
+
 /** What the verdict adds where a rival or a second solution stands beside the chosen reading. */
 export function rivalSentence(rival: 'near' | 'better' | null, secondSolution: boolean): string {
   const parts = [

@@ -1,11 +1,14 @@
 import { describe, expect, test } from 'vitest';
+import { defaultPolicy, freeIon, readWithRivals } from '#engine';
 import { gatherItems } from '../../../engine/readings/candidates.ts';
 import type { Freedom } from '../../../engine/readings/candidates.ts';
 import { isFit } from '../../../engine/readings/fit.ts';
 import { scoreChoices } from '../../../engine/readings/scoring.ts';
 import type { Choice, ScoredReading, SearchTask } from '../../../engine/readings/scoring.ts';
 import { keepWithin, readingsAtMost, searchReadings } from '../../../engine/readings/search.ts';
+import { searchStopped } from '../../../engine/words/remarks.ts';
 import { seeded } from '../../published/random.ts';
+import { band, measurement } from '../measurement/sample.ts';
 import { randomTask, recordKinds } from './randomRecords.ts';
 import type { RecordKind } from './randomRecords.ts';
 
@@ -39,7 +42,8 @@ const keyOf = ({ assigned }: ScoredReading): string => assigned.map(({ label, ob
 
 /** What is wrong with the search's answer: wanted readings that it lacks, and wrong ones that it has. */
 function faultsOf(task: SearchTask, freedom: Freedom, every: readonly ScoredReading[], known = Number.POSITIVE_INFINITY): string[] {
-  const got = searchReadings(task, freedom, known).filter(({ score }) => Number.isFinite(score));
+  const { readings, complete } = searchReadings(task, freedom, known);
+  const got = readings.filter(({ score }) => Number.isFinite(score));
   const best = Math.min(known, every[0]?.score ?? known);
   const wanted = every.filter(({ score }, n) => score <= best + keepWithin && n < readingsAtMost - (Number.isFinite(known) ? 1 : 0));
   const last = wanted.at(-1)?.score ?? Number.NEGATIVE_INFINITY;
@@ -47,6 +51,7 @@ function faultsOf(task: SearchTask, freedom: Freedom, every: readonly ScoredRead
   const right = new Map(every.map((reading) => [keyOf(reading), reading.score]));
   const story = `${freedom}, ${task.measurement.bands.map(({ position, kind, terms }) => `${position.toFixed(0)} ${kind}${terms.length > 0 ? ` (${terms.join(', ')})` : ''}`).join('; ')}`;
   return [
+    ...(complete ? [] : [`${story}: stopped early`]),
     // Of readings that tie with the last one wanted any will do.
     ...wanted.filter((one) => !scores.has(keyOf(one)) && one.score < last - 1e-6).map((one) => `${story}: missed ${keyOf(one)}, score ${one.score}, best ${best}`),
     ...(got.length < wanted.length ? [`${story}: ${got.length} readings for ${wanted.length}`] : []),
@@ -83,7 +88,7 @@ test('where nothing fits, the one reading told assigns every band that can be as
   const task = randomTask(recordKinds.find(({ name }) => name === 'V(III)')!, seeded(5));
   // nu(A2) below nu(T2) has no solution in d2 octahedral (check-values section 7).
   const bands = [25_600, 17_200].map((position, k) => ({ ...task.measurement.bands[0]!, position, uMinus: 50, uPlus: 50, kind: 'maximum' as const, epsilon: 8, width: 3000, terms: [k === 0 ? '3T2g' : '3A2g'] }));
-  const [only, ...others] = searchReadings({ ...task, measurement: { ...task.measurement, bands } }, 'as typed');
+  const [only, ...others] = searchReadings({ ...task, measurement: { ...task.measurement, bands } }, 'as typed').readings;
   expect(others).toEqual([]);
   expect(only!.score).toBe(Number.POSITIVE_INFINITY);
   expect(only!.assigned.map(({ label }) => label).sort()).toEqual(['a3A2g', 'a3T2g']);
@@ -93,8 +98,16 @@ test('where nothing fits, the one reading told assigns every band that can be as
 test('a record without bands that could be assigned gives one reading with none', () => {
   const task = randomTask(recordKinds[1]!, seeded(7));
   const bands = task.measurement.bands.map((band) => ({ ...band, role: 'CT' as const }));
-  const readings = searchReadings({ ...task, measurement: { ...task.measurement, bands } }, 'free');
+  const readings = searchReadings({ ...task, measurement: { ...task.measurement, bands } }, 'free').readings;
   expect(readings).toHaveLength(1);
   expect(readings[0]).toMatchObject({ assigned: [], origin: 'none', score: Number.POSITIVE_INFINITY });
   expect(readings[0]!.notFitted).toHaveLength(bands.length);
+});
+
+test('forty bands without a term end in time, and the reading says that not all was tried', () => {
+  const many = measurement('Mn(II)', Array.from({ length: 40 }, (_, k) => band(9000 + 825 * k + 137 * (k % 3))), { multiplicity: 6 });
+  const { chosen } = readWithRivals(many, defaultPolicy, freeIon('published', many.ion));
+  expect(chosen.remarks).toContain(searchStopped);
+  const few = measurement('Mn(II)', [band(18_900), band(23_100)], { multiplicity: 6 });
+  expect(readWithRivals(few, defaultPolicy, freeIon('published', few.ion)).chosen.remarks).not.toContain(searchStopped);
 });
