@@ -2,6 +2,7 @@
 
 import { readArguments } from './arguments.ts';
 import type { CommandTable } from './arguments.ts';
+import { placeholderStart } from './begin/settings.ts';
 import { writeManual } from './content/manual/write.ts';
 import type { Collection } from './content/types.ts';
 import { exitCodes } from './exitCodes.ts';
@@ -41,7 +42,8 @@ function summary(collection: Collection, filesRead: number, folder: string): str
   const next = collection.complexes.length === 0 ? `There is no complex yet: type the first record into ${folder}/complexes/, as content/README.md shows.\n` : '';
   const undrawn = collection.ligands.filter(({ smiles }) => smiles === null).map(({ id }) => id);
   const remark = undrawn.length === 0 ? '' : `Remark: no smiles: in ${undrawn.slice(0, 8).join(', ')}${undrawn.length > 8 ? ` and ${undrawn.length - 8} more` : ''}; the pages show no structure there.\n`;
-  return `${line}${remark}${next}`;
+  const start = collection.group.started === placeholderStart ? `Remark: started: in group.yaml is ${placeholderStart}, which stands for a day not typed yet; a release asks for it.\n` : '';
+  return `${line}${remark}${start}${next}`;
 }
 
 function count(number: number, one: string, more = `${one}s`): string {

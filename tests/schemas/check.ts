@@ -7,9 +7,17 @@ function kept(name: string): unknown {
   return JSON.parse(readFileSync(new URL(name, import.meta.url), 'utf8'));
 }
 
+const formats = {
+  uri: (text: string): boolean => URL.canParse(text),
+  date: (text: string): boolean => {
+    const day = new Date(/^\d{4}-\d{2}-\d{2}$/.test(text) ? `${text}T00:00:00Z` : Number.NaN);
+    return !Number.isNaN(day.getTime()) && day.toISOString().startsWith(text);
+  },
+};
+
 /** What is wrong with a value under a kept schema, "path: message"; empty where nothing is. */
 export function problemsUnder(name: string, value: unknown): readonly string[] {
-  return problems(new Ajv({ allErrors: true, strict: false }), kept(name) as object, value);
+  return problems(new Ajv({ allErrors: true, strict: false, formats }), kept(name) as object, value);
 }
 
 /** The same under a schema of our own (2020-12). */

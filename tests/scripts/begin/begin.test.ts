@@ -74,6 +74,7 @@ describe('beginning from the demonstration', { timeout: 60_000 }, () => {
   it('asks no clock: without --started a day that stands for none is typed, and a release is refused while it stands', () => {
     expect(begin('--group', 'A').stdout).toContain('started 1900-01-01 (stands for the day; type yours in group.yaml)');
     expect(text('group.yaml')).toContain('started: 1900-01-01 ');
+    expect(runScript('check', ['--content', folder]).stdout).toContain('Remark: started: in group.yaml is 1900-01-01');
     const order = { content: folder, cache: null, release: '1.0.0', date: '2026-03-01', who: 'A', cause: 'The first.', codeVersion: null };
     expect(freeze(order)).toMatchObject({ kind: 'refused', reason: expect.stringContaining('type the day on which the collection was started') });
     writeFileSync(file('group.yaml'), text('group.yaml').replace('1900-01-01', '2019-09-01'));

@@ -7,11 +7,13 @@ import { projectFolder } from '../../../scripts/publish/pages.ts';
 import { resultColumns, resultTable } from '../../../scripts/export/columns.ts';
 import type { ColumnEntry } from '../../../scripts/export/dictionary/types.ts';
 import { mainFiles, recordFiles } from '../../../scripts/export/files.ts';
+import { readCsv } from '../../../scripts/export/readCsv.ts';
 import { readTableCsv } from '../../../scripts/export/tableFiles.ts';
 import type { Cell, Row } from '../../../scripts/export/tableFiles.ts';
 import { writeExports } from '../../../scripts/export/writeExports.ts';
 import { writeRecords } from '../../../scripts/export/writeRecords.ts';
 import { problemsUnder, problemsUnderOwn } from '../../schemas/check.ts';
+import { type TableResource, rowProblems } from '../../schemas/tableRows.ts';
 import { exported } from './built.ts';
 
 const content = join(projectFolder, 'content');
@@ -130,6 +132,26 @@ describe('the demonstration exported', () => {
       }
     }
     expect(problemsUnder('datapackage.json', { ...descriptor, resources: [{ name: 'x' }] })).not.toEqual([]);
+  });
+
+  it('is a data package whose rows are what its table schemas say: types, constraints, keys', () => {
+    const { resources } = built.json('datapackage.json') as { resources: readonly TableResource[] };
+    const tabular = resources.filter(({ schema }) => schema !== undefined);
+    expect(tabular).toHaveLength(built.tables.length + 1);
+    const rows = new Map(tabular.map(({ name, path }) => [name, readCsv(built.read(path))]));
+    expect(rowProblems(tabular, rows)).toEqual([]);
+    const spoilt = (table: string, change: (line: (string | null)[]) => (string | null)[]): readonly string[] => {
+      const [header, first, ...rest] = rows.get(table)!;
+      return rowProblems(tabular, new Map(rows).set(table, [header!, change([...first!]), ...rest]));
+    };
+    const place = (table: string, column: string): number => rows.get(table)![0]!.indexOf(column);
+    const put = (table: string, column: string, text: string | null) => spoilt(table, (line) => line.with(place(table, column), text));
+    expect(put('band', 'position', '999')).toEqual(['band, row 1, position: 999 is below 1000']);
+    expect(put('band', 'position', '1e4x')).toEqual(['band, row 1, position: "1e4x" is no number']);
+    expect(put('band', 'kind', 'hump')).toEqual(['band, row 1, kind: "hump" is not in the list']);
+    expect(put('measurement', 'phase', null)).toEqual(['measurement, row 1, phase: empty']);
+    expect(put('complex', 'ion', 'Xx(I)')).toEqual(['complex, row 1: ion Xx(I) is not in ion']);
+    expect(put('person', 'number', '2')).toEqual(['person, row 2: the key 2 stands twice']);
   });
 
   it('is written alike twice', () => {

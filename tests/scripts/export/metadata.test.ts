@@ -91,6 +91,8 @@ describe('the checks themselves', () => {
     const cff = parse(citationCff(ordinary)) as Record<string, unknown>;
     expect(problemsUnder('cff.json', { ...cff, authors: [] })).not.toEqual([]);
     expect(problemsUnder('cff.json', { ...cff, doi: 'not yet assigned' })).not.toEqual([]);
+    expect(problemsUnder('cff.json', { ...cff, 'date-released': '2026-02-30' })).not.toEqual([]);
+    expect(problemsUnder('cff.json', { ...cff, license: 'CC-BY' })).not.toEqual([]);
     expect(problemsUnder('datacite.json', { ...dataciteJson(ordinary, formats), publicationYear: 2026 })).not.toEqual([]);
     expect(problemsUnder('linkset.json', { linkset: [{ anchor: 'https://example.org/', 'cited-as': [{ href: 'https://example.org/' }] }] })).not.toEqual([]);
     expect(problemsUnder('ro-crate.json', { ...roCrate(ordinary, written), '@graph': [] })).not.toEqual([]);
