@@ -70,6 +70,25 @@ function freeTerms(ion: FieldIon, cOverB: number): LevelDiagram['terms'] {
   return terms;
 }
 
+/** A diagram's height holds so many of the steps below which no bend is drawn: a tenth of a pixel. */
+export const FINENESS = 5000;
+
+/**
+ * The points of a piece that a line through them needs: those left out lie within the tolerance of it (Douglas and Peucker, Cartographica 10,
+ * 112 (1973), measured along E/B).
+ */
+export function thinned(piece: readonly CurvePoint[], tolerance: number): readonly CurvePoint[] {
+  const [first, last] = [piece[0], piece.at(-1)];
+  if (piece.length < 3 || first === undefined || last === undefined) return piece;
+  let [farthest, distance] = [0, 0];
+  for (let index = 1; index < piece.length - 1; index++) {
+    const { x, y } = piece[index]!;
+    const off = Math.abs(y - first.y - ((last.y - first.y) * (x - first.x)) / (last.x - first.x || 1));
+    if (off > distance) [farthest, distance] = [index, off];
+  }
+  return distance <= tolerance ? [first, last] : [...thinned(piece.slice(0, farthest + 1), tolerance).slice(0, -1), ...thinned(piece.slice(farthest), tolerance)];
+}
+
 /** The parts of a curve below `ceiling`, cut exactly where it passes through it. */
 export function below(points: readonly CurvePoint[], ceiling: number): readonly (readonly CurvePoint[])[] {
   const pieces: CurvePoint[][] = [];

@@ -1,6 +1,6 @@
 import * as Plot from '@observablehq/plot';
 import { DIAGRAM_GUTTER, DIAGRAM_HEIGHT, DIAGRAM_MARGIN, DIAGRAM_WIDTH, type DiagramMark, diagramOver } from './diagramParts.ts';
-import { type LevelDiagram, below } from './levelCurves.ts';
+import { FINENESS, type LevelDiagram, below, thinned } from './levelCurves.ts';
 import { drawPlot, dressed } from './plot.ts';
 
 export { type DiagramMark, diagramCeiling, diagramOverlay, diagramPlace } from './diagramParts.ts';
@@ -36,6 +36,6 @@ function levelMarks(diagram: LevelDiagram, ceiling: number, allowed: boolean): P
   const points = diagram.grounds.flatMap(({ from, to, multiplicity }, range) =>
     diagram.curves.filter((curve) => (curve.multiplicity === multiplicity) === allowed)
       .flatMap((curve) => below(curve.points.filter((point) => point.x >= from && point.x <= to), ceiling)
-        .flatMap((piece, index) => piece.map((point) => ({ ...point, line: `${curve.labels[0]} ${range} ${index}` })))));
+        .flatMap((piece, index) => thinned(piece, ceiling / FINENESS).map((point) => ({ ...point, line: `${curve.labels[0]} ${range} ${index}` })))));
   return [Plot.line(points, { x: 'x', y: 'y', z: 'line', stroke: 'currentColor', className: allowed ? 'level' : 'level forbidden' })];
 }

@@ -1,5 +1,5 @@
 import { DIAGRAM_HEIGHT, DIAGRAM_MARGIN, DIAGRAM_WIDTH, type DiagramMark, type DiagramScales, diagramOver, diagramPlace } from './diagramParts.ts';
-import { type LevelDiagram, below } from './levelCurves.ts';
+import { FINENESS, type LevelDiagram, below, thinned } from './levelCurves.ts';
 import { type Dress, svgElement } from './svg.ts';
 import { coordinate as c } from './text.ts';
 
@@ -31,5 +31,5 @@ function lines({ x, y }: DiagramScales, diagram: LevelDiagram, ceiling: number, 
     diagram.curves.filter((curve) => (curve.multiplicity === multiplicity) === allowed)
       .flatMap((curve) => below(curve.points.filter((point) => point.x >= from && point.x <= to), ceiling)));
   return pieces.filter((piece) => piece.length > 1)
-    .map((piece) => `<path class="level${allowed ? '' : ' forbidden'}" d="M${piece.map((point) => `${c(x(point.x))} ${c(y(point.y))}`).join('L')}"/>`).join('');
+    .map((piece) => `<path class="level${allowed ? '' : ' forbidden'}" d="M${thinned(piece, ceiling / FINENESS).map((point) => `${c(x(point.x))} ${c(y(point.y))}`).join('L')}"/>`).join('');
 }

@@ -10,3 +10,8 @@ export function conditions({ row }: MeasurementNode): string {
   const technique = row.technique === null || row.technique === 'absorption' ? '' : `, ${row.technique}`;
   return `${where}, ${temperature(row.temperature_K, row.temperature_u_K)}${technique}`;
 }
+
+/** Where the readings are written down, in a few words: "notebook 17, p. 42", "source smith-1990, Table 2". */
+export function writtenDown({ row }: MeasurementNode): string {
+  return row.source === null ? `notebook ${row.notebook ?? 'not recorded'}` : `source ${row.source}${row.source_place === null ? '' : `, ${row.source_place}`}`;
+}

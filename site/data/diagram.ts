@@ -4,9 +4,10 @@ import { type DiagramMark, diagramCeiling, diagramOverlay, levelDiagramFigure } 
 import { newDocument } from '../charts/plot.ts';
 import { oncePerCollection } from './memo.ts';
 import { csvText } from '../../scripts/export/csv.ts';
-import { type PublishedFigure, figureFiles } from './figure.ts';
+import { conditions } from './conditions.ts';
+import { type FigureShown, type PublishedFigure, figureFiles, ownFigureFiles } from './figure.ts';
 import { complexPath, ionSlug } from './paths.ts';
-import { counted, difference, energy, figures, ratio } from './show.ts';
+import { counted, difference, energy, figures, listed, ratio } from './show.ts';
 import { type Cell, type Table, column, quantity, rowColumn, words } from './table.ts';
 import type { CollectionTree, ComplexNode, MeasurementNode } from './tree.ts';
 import { configuration, termShown } from './typeset.ts';
@@ -101,34 +102,63 @@ function diagramFigure(one: IonDiagram): PublishedFigure {
   };
 }
 
-/** The same diagram without marks, for complex pages to lay theirs over. */
+/** The same diagram without marks, for complex pages to lay theirs over; drawn once. */
 export function diagramBackground(one: IonDiagram): string {
-  return levelDiagramFigure(one.diagram, one.ceiling, [], newDocument(), { id: `${one.id}-background`, title: `Energy levels of ${one.geometry} ${one.ion}`, description: describe(one) });
+  const known = backgrounds.get(one);
+  if (known !== undefined) return known;
+  const drawn = levelDiagramFigure(one.diagram, one.ceiling, [], newDocument(), { id: `${one.id}-background`, title: `Energy levels of ${one.geometry} ${one.ion}`, description: describe(one) });
+  backgrounds.set(one, drawn);
+  return drawn;
 }
+
+const backgrounds = new WeakMap<IonDiagram, string>();
 
 /** A complex on its ion's diagram: the background's file, and its own marks to lay over it. */
 export interface PlaceOnDiagram {
   readonly background: string;
   readonly alt: string;
   readonly overlay: string;
+  /** Background and marks in one drawing, for a file. */
+  readonly whole: () => { readonly id: string; readonly svg: string };
+  readonly title: string;
   readonly caption: string;
+  readonly source: string;
+  readonly table: Table;
+  readonly files: FigureShown['files'];
 }
+
+const placedOn = (tree: CollectionTree, complex: ComplexNode): IonDiagram | undefined =>
+  ionDiagrams(tree).find(({ ion, geometry }) => ion === complex.ion.name && geometry === complex.row.geometry);
+
+/** Whether a complex has a place on its ion's diagram. */
+export const hasPlace = (tree: CollectionTree, complex: ComplexNode): boolean => placedOn(tree, complex)?.marked.some(({ measurement }) => measurement.complex === complex) ?? false;
 
 /** All measurements of a complex that have a place on its ion's diagram; null where none has. */
 export function placeOnDiagram(tree: CollectionTree, complex: ComplexNode): PlaceOnDiagram | null {
-  const one = ionDiagrams(tree).find(({ ion, geometry }) => ion === complex.ion.name && geometry === complex.row.geometry);
+  const one = placedOn(tree, complex);
   const placed = one?.marked.filter(({ measurement }) => measurement.complex === complex) ?? [];
   if (one === undefined || placed.length === 0) return null;
   const marks = placed.map(({ mark }, index) => ({ ...mark, key: placed.length === 1 ? '' : letterKey(index) }));
   const names = placed.map(({ measurement }, index) => `${placed.length === 1 ? '' : `${letterKey(index)}: `}${measurement.row.id} at Δ/B = ${figures(placed[index]!.mark.x, 3)}`);
+  const overlay = diagramOverlay(one.diagram.reach, one.ceiling, marks, {
+    id: 'place', title: `${complex.formula.text} on the diagram`,
+    description: marks.map((mark) => `Observed bands at Δ/B = ${figures(mark.x, 4)}: E/B = ${mark.bands.map((band) => figures(band.y, 4)).join(', ')}.`).join(' '),
+  });
+  const where = placed.map(({ measurement }) => conditions(measurement));
   return {
-    background: `figures/${one.id}-background.svg`, alt: `Tanabe-Sugano diagram of ${one.geometry} ${one.ion}`,
-    overlay: diagramOverlay(one.diagram.reach, one.ceiling, marks, {
-      id: 'place', title: `${complex.formula.text} on the diagram`,
-      description: marks.map((mark) => `Observed bands at Δ/B = ${figures(mark.x, 4)}: E/B = ${mark.bands.map((band) => figures(band.y, 4)).join(', ')}.`).join(' '),
-    }),
-    caption: `E/B against Δ/B at the policy’s C/B = ${ratio(one.diagram.cOverB, 2)}. ${names.join('; ')}. Full dots are observed bands in the fit, open dots are compared only.`,
+    background: `figures/${one.id}-background.svg`, alt: `Tanabe-Sugano diagram of ${one.geometry} ${one.ion}`, overlay,
+    whole: () => ({ id: 'place', svg: laidOver(diagramBackground(one), overlay) }),
+    title: `${complex.formula.text} on the Tanabe-Sugano diagram of ${one.ion}.`,
+    source: `Levels computed from the full configuration; bands from this record, fitted under policy ${placed[0]!.measurement.chosen.row.policy}.`,
+    table: markTable({ ...one, marked: placed.map((entry, index) => ({ ...entry, key: marks[index]!.key })) }), files: ownFigureFiles(complex.row.id, 'place'),
+    caption: `n = ${placed.length === 1 ? '1 reading' : `${placed.length} readings`}; ${listed([...new Set(where)])}. E/B against Δ/B at the policy’s C/B = ${ratio(one.diagram.cOverB, 2)}. ${names.join('; ')}. Full dots are observed bands in the fit, open dots are compared only.`,
   };
+}
+
+/** One drawing of two of the same size: the upper one's name and marks over the lower one's lines. */
+function laidOver(lower: string, upper: string): string {
+  const lines = lower.slice(lower.indexOf('</desc>') + '</desc>'.length, -'</svg>'.length);
+  return upper.replace('</desc>', () => `</desc>${lines}`);
 }
 
 function describe({ diagram, ceiling }: IonDiagram): string {

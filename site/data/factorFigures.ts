@@ -61,7 +61,7 @@ function shownFactors(tree: CollectionTree, fit: FactorFit, series: FactorSeries
         ],
         source: `This collection, policy ${tree.policy.id}.`,
         table: factorTable(tree, fit, rows, letters.slice(start, start + rows.length)),
-        files: [figureFiles(own)[0]!, figureFiles(id)[1]!], csv: index === 0 ? factorCsv(tree, fit, series, letters) : null,
+        files: figureFiles(own, id), csv: index === 0 ? factorCsv(tree, fit, series, letters) : null,
       };
     }),
   };

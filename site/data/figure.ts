@@ -1,5 +1,13 @@
+import { complexPath } from './paths.ts';
 import type { Table } from './table.ts';
 import type { Parts } from './typeset.ts';
+
+export interface FigureFile {
+  readonly name: string;
+  readonly path: string;
+  /** Made in the browser from the drawing at `path`: the name under which it is saved. */
+  readonly madeHere?: string;
+}
 
 /** A figure with all that belongs to it. */
 export interface FigureShown {
@@ -15,8 +23,10 @@ export interface FigureShown {
   readonly keys?: readonly { readonly key: string; readonly formula: Parts; readonly path: string; readonly measurement: string }[];
   readonly source: string;
   readonly table: Table | null;
-  /** Files to keep, from the site's root; empty where the figure is saved from the page only. */
-  readonly files: readonly { readonly name: string; readonly path: string }[];
+  /** Files to keep, from the site's root; each in its own format. */
+  readonly files: readonly FigureFile[];
+  /** Id of the table on the page in which the figure's numbers stand, where the figure has none of its own. */
+  readonly numbersIn?: string;
 }
 
 /** A figure that is also published as files, with its numbers at full precision. */
@@ -37,6 +47,13 @@ export function drawingSize(svg: string): { readonly width: number; readonly hei
 /** Path of the picture that stands for a figure. */
 export const platePath = (id: string): string => `figures/${plateId(id)}.svg`;
 
-export function figureFiles(id: string): FigureShown['files'] {
-  return [{ name: 'SVG', path: `figures/${id}.svg` }, { name: 'CSV', path: `figures/${id}.csv` }];
+/** @param table id of the figure in whose file the numbers stand, where this is a further part of it */
+export function figureFiles(id: string, table = id): FigureShown['files'] {
+  return [{ name: 'SVG', path: `figures/${id}.svg` }, { name: 'PNG', path: `figures/${id}.png` }, { name: 'CSV', path: `figures/${table}.csv` }];
+}
+
+/** Files of a figure of a complex's own page: the drawing beside the page, the picture made in the browser, the numbers in the table of its bands. */
+export function ownFigureFiles(complex: string, id: string): FigureShown['files'] {
+  const drawing = `${complexPath(complex)}${id}.svg`;
+  return [{ name: 'SVG', path: drawing }, { name: 'PNG', path: drawing, madeHere: `${complex}-${id}.png` }, { name: 'CSV', path: `${complexPath(complex)}bands.csv` }];
 }

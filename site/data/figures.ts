@@ -1,5 +1,3 @@
-import colours from '../styles/colours.css?raw';
-import figureStyles from '../styles/figures.css?raw';
 import { type PublishedFigure, plateId } from './figure.ts';
 import { diagramBackground, ionDiagramFigures, ionDiagrams } from './diagram.ts';
 import { factorFigures } from './factorFigures.ts';
@@ -38,22 +36,4 @@ export function pictures(tree: CollectionTree): readonly { readonly id: string; 
     ...[...series, ...correlations(tree)].map(({ figure }) => ({ id: plateId(figure.id), svg: figure.svg })),
     ...tree.ions.flatMap(({ name }) => ionDiagramFigures(tree, name)).filter(({ asPicture }) => asPicture).map(({ id, svg }) => ({ id: plateId(id), svg })),
   ];
-}
-
-/** A figure as a file to keep: its own namespace and styles, ink on white paper. */
-export function keptFigure(svg: string): string {
-  const [, width, height] = /viewBox="0 0 ([\d.]+) ([\d.]+)"/.exec(svg) ?? [];
-  return standalone(svg, `${DAY}\n:root { color-scheme: light; }`, `<rect width="${width}" height="${height}" fill="var(--paper)"/>`);
-}
-
-/** A figure as a picture for a page: nothing behind it, colours by the reader's theme. */
-export function picture(svg: string): string {
-  return standalone(svg, colours, '');
-}
-
-const DAY = /:root \{[^}]*\}/.exec(colours)?.[0] ?? '';
-
-function standalone(svg: string, rules: string, ground: string): string {
-  const styled = svg.replace('<svg ', '<svg xmlns="http://www.w3.org/2000/svg" ').replace('>', `><style>${rules}\n${figureStyles}</style>${ground}`);
-  return `<?xml version="1.0" encoding="UTF-8"?>\n${styled}\n`;
 }

@@ -56,7 +56,7 @@ function shownMap(tree: CollectionTree, fit: FactorFit): MapShown {
         ],
         source: `This collection, policy ${tree.policy.id}; conditions as for the factors.`,
         table: mapTable(tree, parameter, geometry, columns, within),
-        files: [figureFiles(own)[0]!, figureFiles(id)[1]!], csv: index === 0 ? mapCsv(tree, fit, cells) : null,
+        files: figureFiles(own, id), csv: index === 0 ? mapCsv(tree, fit, cells) : null,
       };
     }),
   };

@@ -1,7 +1,8 @@
 import { levels } from '#engine';
 import { levelScheme } from '../charts/levelScheme.ts';
 import { residualBar } from '../charts/residualBar.ts';
-import type { FigureShown } from './figure.ts';
+import { conditions } from './conditions.ts';
+import { type FigureShown, ownFigureFiles } from './figure.ts';
 import { type ParameterShown, difference, energy, energyTwoSided, parameterShown } from './show.ts';
 import { type Cell, type Table, column, quantity, rowColumn, soft, words } from './table.ts';
 import type { MeasurementNode } from './tree.ts';
@@ -32,7 +33,7 @@ export function measurementMeaning(measurement: MeasurementNode, id: string): Me
     assignment: ASSIGNMENT[row.assignment] ?? row.assignment,
     transitions: transitionTable(measurement),
     parameters: (['Delta', 'B', 'C', 'beta'] as const).map((name) => parameterShown(chosen.parameters[name])),
-    allWithheld: allWithheld(measurement), scheme: scheme(measurement, id),
+    allWithheld: allWithheld(measurement), scheme: levelFigure(measurement, id),
     sentence: row.sentence === '' ? null : { parts: sentenceShown(row.sentence), text: sentenceText(row.sentence) },
   };
 }
@@ -64,12 +65,21 @@ function transitionTable({ chosen, complex }: MeasurementNode): Table | null {
   };
 }
 
-function scheme(measurement: MeasurementNode, id: string): FigureShown | null {
+/** Whether there are fitted parameters and assigned bands to draw levels at. */
+export function hasScheme({ chosen, complex }: MeasurementNode): boolean {
+  const { electrons } = complex.ion;
+  const { geometry } = chosen.row;
+  return chosen.branches.some((one) => one.chosen === 1) && chosen.parameters.B.value !== null && electrons >= 1 && electrons <= 9
+    && (geometry === 'octahedral' || geometry === 'tetrahedral') && chosen.transitions.length > 0;
+}
+
+/** The levels at the chosen solution with the observed bands; null without one. */
+export function levelFigure(measurement: MeasurementNode, id: string): FigureShown | null {
   const { chosen, complex } = measurement;
   const branch = chosen.branches.find((one) => one.chosen === 1);
   const { electrons } = complex.ion;
   const { geometry, multiplicity, ground } = chosen.row;
-  if (branch === undefined || chosen.parameters.B.value === null || electrons < 1 || electrons > 9 || (geometry !== 'octahedral' && geometry !== 'tetrahedral') || chosen.transitions.length === 0) return null;
+  if (branch === undefined || !hasScheme(measurement) || (geometry !== 'octahedral' && geometry !== 'tetrahedral')) return null;
   const all = levels({ electrons, geometry }, { delta: branch.Delta, racahB: branch.B, racahC: branch.C });
   const origin = all.find((level) => level.label === ground)?.energy ?? 0;
   const assigned = new Set(chosen.transitions.flatMap(({ row }) => row.label.split('/')));
@@ -82,7 +92,16 @@ function scheme(measurement: MeasurementNode, id: string): FigureShown | null {
     svg: levelScheme(few.map((level) => ({ energy: level.energy, parts: termShown(level.label, electrons), spinAllowed: level.multiplicity === multiplicity })),
       chosen.transitions.map(({ row }) => ({ observed: row.observed, used: row.used === 1 })),
       { id: `${id}-levels`, title, description: `${few.length} levels; arrows end at the observed bands.` }),
-    caption: ['Arrows end at the observed bands. Full strokes: same multiplicity as the ground level; dashed: others.', few.length < inReach.length ? 'Unassigned levels of other multiplicities are left out.' : ''],
-    source: 'Computed at the chosen solution.', table: null, files: [],
+    caption: [`n = ${chosen.transitions.length}; ${conditions(measurement)}.`, 'Arrows end at the observed bands. Full strokes: same multiplicity as the ground level; dashed: others.', few.length < inReach.length ? 'Unassigned levels of other multiplicities are left out.' : ''],
+    source: `Levels computed at the chosen solution, policy ${chosen.row.policy}.`, table: schemeTable(measurement, few), files: ownFigureFiles(complex.row.id, `${id}-levels`),
+  };
+}
+
+function schemeTable({ chosen, complex }: MeasurementNode, shown: readonly { readonly label: string; readonly energy: number }[]): Table {
+  const observed = new Map(chosen.transitions.flatMap(({ row }) => row.label.split('/').map((label) => [label, row.observed] as const)));
+  return {
+    caption: 'Levels of the figure, with the bands assigned to them',
+    columns: [rowColumn('Level'), quantity('E', 'cm-1'), quantity('observed', 'cm-1', true)],
+    rows: shown.map(({ label, energy: height }): readonly Cell[] => [{ parts: termShown(label, complex.ion.electrons) }, energy(height, null), observed.has(label) ? energy(observed.get(label)!, null) : soft('none')]),
   };
 }

@@ -1,6 +1,6 @@
 import { stripFigure } from '../charts/stripFigure.ts';
-import type { FigureShown } from './figure.ts';
-import { conditions } from './conditions.ts';
+import { type FigureShown, ownFigureFiles } from './figure.ts';
+import { conditions, writtenDown } from './conditions.ts';
 import { energy, figures, listed, nanometres } from './show.ts';
 import { stripRow, stripTitle } from './strip.ts';
 import { type Cell, type Table, column, longColumn, quantity, rowColumn, soft, words } from './table.ts';
@@ -16,10 +16,11 @@ export interface MeasurementRead {
 }
 
 export function measurementRead(measurement: MeasurementNode, id: string): MeasurementRead {
-  return { strip: strip(measurement, id), bands: bandTable(measurement), ranges: ranges(measurement) };
+  return { strip: stripOf(measurement, id), bands: bandTable(measurement), ranges: ranges(measurement) };
 }
 
-function strip(measurement: MeasurementNode, id: string): FigureShown | null {
+/** The large strip; null without a band. */
+export function stripOf(measurement: MeasurementNode, id: string): FigureShown | null {
   if (measurement.bands.length === 0) return null;
   const { chosen, complex } = measurement;
   const title = `Band strip of ${complex.formula.text}.`;
@@ -30,7 +31,7 @@ function strip(measurement: MeasurementNode, id: string): FigureShown | null {
     id: `${id}-strip`, title, titleParts: [...words('Band strip of '), ...complex.formula.parts, ...words('.')],
     svg: stripFigure(stripRow(measurement), names, calculated, { id: `${id}-strip`, title, description: `${stripTitle(measurement)}.` }),
     caption: [`n = ${measurement.bands.length}; ${conditions(measurement)}.`, calculated.length > 0 ? `Triangles under the line: spin-allowed and assigned transitions as the fit puts them.${kept}` : kept.trim()],
-    source: 'Positions as read; see the table.', table: null, files: [],
+    source: `Positions as read, ${writtenDown(measurement)}.`, table: null, numbersIn: `${id}-bands`, files: ownFigureFiles(complex.row.id, `${id}-strip`),
   };
 }
 

@@ -1,6 +1,7 @@
 import { evidenceHeading, shownLabel } from '#engine';
 import { type ReadingLine, readingsFigure } from '../charts/readingsFigure.ts';
-import type { FigureShown } from './figure.ts';
+import { conditions } from './conditions.ts';
+import { type FigureShown, ownFigureFiles } from './figure.ts';
 import { counted, energy, parameterShown, ratio } from './show.ts';
 import { stripRowOf } from './strip.ts';
 import { type Cell, type Table, column, longColumn, quantity, rowColumn, soft, words } from './table.ts';
@@ -40,8 +41,8 @@ function figure(measurement: MeasurementNode, id: string): FigureShown {
     svg: readingsFigure(readings(measurement).map(({ name, reading }) => line(measurement, name, reading)), {
       id: `${id}-readings`, title, description: `The chosen reading and ${counted(rivals.length, 'rival')}; the table below names each assignment.`,
     }),
-    caption: ['Above the line: the name each band has in that reading; dotted stem: not assigned. Full triangles: assigned transitions where the fit puts them; open ones: further spin-allowed transitions it predicts.'],
-    source: '', table: null, files: [],
+    caption: [`n = ${measurement.bands.length}; ${conditions(measurement)}.`, 'Above the line: the name each band has in that reading; dotted stem: not assigned. Full triangles: assigned transitions where the fit puts them; open ones: further spin-allowed transitions it predicts.'],
+    source: `Bands as read; each reading fitted under policy ${measurement.chosen.row.policy}.`, table: null, numbersIn: `${id}-readings-table`, files: ownFigureFiles(complex.row.id, `${id}-readings`),
   };
 }
 

@@ -76,7 +76,7 @@ function shownSeries(tree: CollectionTree, series: Series, name: Name, id: strin
       caption: caption(tree, series, name, points, groups),
       source: `This collection, policy ${tree.policy.id}.`,
       table: seriesTable(rows, name, letters.slice(start, start + rows.length)),
-      files: [figureFiles(own)[0]!, figureFiles(id)[1]!], csv: index === 0 ? seriesCsv(members, name, letters, series.leftOut) : null,
+      files: figureFiles(own, id), csv: index === 0 ? seriesCsv(members, name, letters, series.leftOut) : null,
     };
     return { figure, count: members.length, leftOut: index === 0 ? leftOut : null, part: index + 1 };
   });

@@ -1,6 +1,7 @@
 import type { APIRoute, GetStaticPaths } from 'astro';
 import { loadCollection } from '../../data/database.ts';
-import { keptFigure, picture, pictures, publishedFigures } from '../../data/figures.ts';
+import { keptFigure, picture } from '../../data/figureFile.ts';
+import { pictures, publishedFigures } from '../../data/figures.ts';
 
 export const getStaticPaths: GetStaticPaths = () => {
   const tree = loadCollection();

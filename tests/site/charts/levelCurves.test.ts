@@ -1,6 +1,6 @@
 import { levels } from '#engine';
 import { expect, test } from 'vitest';
-import { below, levelDiagram } from '../../../site/charts/levelCurves.ts';
+import { below, levelDiagram, thinned } from '../../../site/charts/levelCurves.ts';
 
 test('the ground level of d3 is 4A2g all along and lies at zero', () => {
   const diagram = levelDiagram({ electrons: 3, geometry: 'octahedral' }, 4.5, 40);
@@ -39,4 +39,17 @@ test('a curve is cut exactly where it leaves the frame, and comes back where it 
   expect(below(points, 10)).toEqual([[{ x: 0, y: 0 }, { x: 5, y: 10 }], [{ x: 15, y: 10 }, { x: 20, y: 0 }]]);
   expect(below(points, 30)).toEqual([points]);
   expect(below([{ x: 0, y: 50 }, { x: 1, y: 60 }], 30)).toEqual([]);
+});
+
+test('a thinned curve keeps its ends and lies within the tolerance of every point it leaves out', () => {
+  for (const electrons of [2, 5, 7]) for (const { points } of levelDiagram({ electrons, geometry: 'octahedral' }, 4.5, 40).curves) {
+    const few = thinned(points, 0.02);
+    expect([few[0], few.at(-1)]).toEqual([points[0], points.at(-1)]);
+    for (const { x, y } of points) {
+      const after = few.findIndex((point) => point.x >= x);
+      const [a, b] = [few[Math.max(0, after - 1)]!, few[after]!];
+      expect(Math.abs(y - (b.x === a.x ? b.y : a.y + ((b.y - a.y) * (x - a.x)) / (b.x - a.x)))).toBeLessThanOrEqual(0.0201);
+    }
+  }
+  expect(thinned([{ x: 0, y: 0 }, { x: 1, y: 1 }, { x: 2, y: 2 }], 0.01).length).toBe(2);
 });

@@ -177,7 +177,7 @@ describe('orders, trends and correlation', () => {
 });
 
 describe('every figure of the series', () => {
-  test('has title, caption with n, source, data table, SVG and CSV, and one id for ever', () => {
+  test('has title, caption with n, source, data table, SVG, PNG and CSV, and one id for ever', () => {
     const figures = publishedFigures(tree);
     expect(new Set(figures.map(({ id }) => id)).size).toBe(figures.length);
     expect(figures.length).toBeGreaterThan(60);
@@ -187,7 +187,8 @@ describe('every figure of the series', () => {
       if (figure.table!.rows.length > 0) expect(figure.caption.join(' '), figure.id).toMatch(/n = \d/);
       expect(figure.svg, figure.id).not.toMatch(/NaN|undefined|Infinity/);
       expect(figure.files[0]!.path, figure.id).toBe(`figures/${figure.id}.svg`);
-      expect(files.has(figure.files[1]!.path), figure.id).toBe(true);
+      expect(figure.files[1]!.path, figure.id).toBe(`figures/${figure.id}.png`);
+      expect(files.has(figure.files.find(({ name }) => name === 'CSV')!.path), figure.id).toBe(true);
     }
     expect(pictures(tree).length).toBeGreaterThan(20);
   });
