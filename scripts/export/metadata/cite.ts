@@ -46,8 +46,10 @@ export function citationBibtex(publication: Publication, record: CitedRecord | n
 /** A citation as RIS. */
 export function citationRis(publication: Publication, record: CitedRecord | null = null): string {
   const { title, address, key } = citedOf(publication, record);
+  // RIS divides every author at a comma: a group's name with commas would be read as family and given names. PB has it as it is.
+  const names = publication.people.length === 0 ? [publication.group.replaceAll(',', ' –')] : authors(publication);
   return risEntry('DATA', [
-    ['ID', key], ...authors(publication).map((name) => ['AU', name] as const), ['TI', title], ['PB', publication.group],
+    ['ID', key], ...names.map((name) => ['AU', name] as const), ['TI', title], ['PB', publication.group],
     ['PY', publication.date.slice(0, 4)], ['DA', publication.date.replaceAll('-', '/')], ['ET', versionCode(publication)],
     ['UR', address], ['DO', publication.doi], ['C1', publication.licence],
     ['N1', `${capital(versionWords(publication))}. DOI: ${doiWords(publication)}.${publication.demonstration ? ` ${invented}` : ''}`],

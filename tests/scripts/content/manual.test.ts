@@ -34,6 +34,16 @@ test('the manual names every field of every record', () => {
   }
 });
 
+test('the example of a publishing job runs commands of the project', () => {
+  const block = /```yaml\n(publish:\n[\s\S]*?)```/.exec(manual)![1]!;
+  const { publish } = parse(block) as { publish: { script: string[]; artifacts: string[] } };
+  const { scripts } = JSON.parse(readFileSync(join(content, '../package.json'), 'utf8')) as { scripts: Record<string, string> };
+  const named = publish.script.flatMap((line) => /^npm run (\w+)/.exec(line)?.[1] ?? []);
+  expect(named).toEqual(['check', 'build']);
+  for (const name of named) expect(scripts).toHaveProperty(name);
+  expect(publish.script.at(-1)).toContain(`--out ${publish.artifacts[0]!.replace('/', '')}`);
+});
+
 test('a code stands in one group only', () => {
   const codes = codeGroups.flatMap((group) => Object.keys(group.codes));
   expect(new Set(codes).size).toBe(codes.length);

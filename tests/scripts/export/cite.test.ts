@@ -69,9 +69,9 @@ describe('a citation', () => {
 
   it('names the people, or the group where nobody is named', () => {
     expect(citationText(ordinary)).toMatch(/^Lind, Tove, Odo Marrenfeld: .* An invented group\. https:/);
-    expect(citationText(bare)).toMatch(/^An invented group: /);
+    expect(citationText(bare)).toMatch(/^Coordination chemistry, An invented university: /);
     expect(readBibtex(citationBibtex(ordinary))[0]!.fields['author']).toBe('Lind, Tove and Odo Marrenfeld');
-    expect(readBibtex(citationBibtex(bare))[0]!.fields['author']).toBe('{An invented group}');
+    expect(readBibtex(citationBibtex(bare))[0]!.fields['author']).toBe('{Coordination chemistry, An invented university}');
     expect(readRis(citationRis(ordinary)).filter(([tag]) => tag === 'AU').map(([, name]) => name)).toEqual(['Lind, Tove', 'Odo Marrenfeld']);
   });
 });

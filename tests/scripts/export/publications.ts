@@ -10,7 +10,7 @@ export const ordinary: Publication = {
   demonstration: false, software: 'bandstead 0.1.0',
 };
 
-export const bare: Publication = { ...ordinary, people: [], doi: null, description: null, contact: null, state: 'not frozen', date: '2004-09-01', demonstration: true };
+export const bare: Publication = { ...ordinary, group: 'Coordination chemistry, An invented university', people: [], doi: null, description: null, contact: null, state: 'not frozen', date: '2004-09-01', demonstration: true };
 
 export const awkward: Publication = {
   ...ordinary, title: 'A & B: 100 % of <script>alert("x")</script> {braces} \\ $C_2$ #1', group: 'Ünïcode & Söhne', state: 'changed since',
