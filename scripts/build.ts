@@ -2,9 +2,11 @@
 
 import { readArguments } from './arguments.ts';
 import type { CommandTable } from './arguments.ts';
+import { holdContent, stampContent } from './content/stamp.ts';
 import { refit } from './database/refit.ts';
 import { exitCodes } from './exitCodes.ts';
 import { writePublication } from './export/writePublication.ts';
+import { whileLocked } from './lock.ts';
 import { cacheFile, places } from './places.ts';
 import { addressOf } from './publish/address.ts';
 import { buildPages, countPages } from './publish/pages.ts';
@@ -35,17 +37,24 @@ await runCommand(table.name, async () => {
   const out = given.path('out', places.site);
   const json = given.has('json');
 
-  const progress = progressLine('fitting', process.stderr);
-  const result = refit({ content, database, cache: given.has('cold') ? null : cacheFile(content), progress: progress.update });
-  progress.end();
-  if (!result.ok) return stoppedByFaults(result.faults, content, 'The database and the site were left as they were.', json);
-
-  if (process.stderr.isTTY) process.stderr.write('drawing pages ...');
-  await swapFolder(out, async (folder) => {
-    await buildPages(database, addressOf(result.refit.collection.group.url), folder);
-    writePublication(database, content, folder);
+  const result = await whileLocked(table.name, [database, out], async () => {
+    const stamp = stampContent(content);
+    const progress = progressLine('fitting', process.stderr);
+    const fitted = refit({ content, database, cache: given.has('cold') ? null : cacheFile(content), progress: progress.update });
+    progress.end();
+    if (!fitted.ok) return fitted;
+    if (process.stderr.isTTY) process.stderr.write('drawing pages ...');
+    await swapFolder(out, async (folder) => {
+      await buildPages(database, addressOf(fitted.refit.collection.group.url), folder);
+      // The files for download take the records as typed, so they must be those that were fitted.
+      holdContent(content, stamp);
+      writePublication(database, content, folder);
+      holdContent(content, stamp);
+    });
+    if (process.stderr.isTTY) process.stderr.write('\r\u001b[K');
+    return fitted;
   });
-  if (process.stderr.isTTY) process.stderr.write('\r\u001b[K');
+  if (!result.ok) return stoppedByFaults(result.faults, content, 'The database and the site were left as they were.', json);
 
   const pages = countPages(out);
   const milliseconds = performance.now() - started;

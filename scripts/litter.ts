@@ -19,7 +19,9 @@ export function removeLitter(target: string): void {
   }
 }
 
-function isRunning(pid: number): boolean {
+/** Whether a process of this number runs. */
+export function isRunning(pid: number): boolean {
+  if (!(pid > 0)) return false;
   try {
     process.kill(pid, 0);
     return true;

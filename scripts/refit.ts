@@ -6,6 +6,7 @@ import { refit } from './database/refit.ts';
 import { exitCodes } from './exitCodes.ts';
 import { explain } from './explain/explain.ts';
 import { rebuildFromExport } from './export/fromExport.ts';
+import { whileLocked } from './lock.ts';
 import { cacheFile, places } from './places.ts';
 import { progressLine } from './report/progress.ts';
 import { rebuildLines } from './report/rebuild.ts';
@@ -27,7 +28,7 @@ const table: CommandTable = {
   examples: ['', '--from-export dist/data', '--explain cr-am6/aq-295', '--content ../our-bands --database our-bands.sqlite'],
 };
 
-await runCommand(table.name, () => {
+await runCommand(table.name, async () => {
   const given = readArguments(table);
   const started = performance.now();
   const content = given.path('content', places.content);
@@ -38,7 +39,7 @@ await runCommand(table.name, () => {
   if (given.text('from-export') !== null) return rebuild(given.path('from-export', places.site), given.path('database', places.rebuilt), json);
 
   const progress = progressLine('fitting', process.stderr);
-  const result = refit({ content, database, cache: given.has('cold') ? null : cacheFile(content), progress: progress.update });
+  const result = await whileLocked(table.name, [database], () => refit({ content, database, cache: given.has('cold') ? null : cacheFile(content), progress: progress.update }));
   progress.end();
   if (!result.ok) return stoppedByFaults(result.faults, content, 'The database was left as it was.', json);
   const seconds = (performance.now() - started) / 1000;

@@ -23,6 +23,8 @@ export async function runCommand(name: string, body: () => number | Promise<numb
 
 const reasons: Readonly<Record<string, string>> = {
   ENOSPC: 'the disk is full',
+  EFBIG: 'the system does not let the file grow so large',
+  EDQUOT: 'the quota of the disk is used up',
   EACCES: 'there is no right to write there',
   EPERM: 'the system does not allow it',
   EROFS: 'the disk can only be read',

@@ -1,4 +1,5 @@
 import type { Reading, Verdict } from '#engine';
+import { holdContent, stampContent } from '../content/stamp.ts';
 import type { Collection, Fault } from '../content/types.ts';
 import { readContent } from '../release/readContent.ts';
 import { historyRows } from '../release/rows.ts';
@@ -37,11 +38,17 @@ export type RefitResult =
   | { readonly ok: true; readonly refit: Refit }
   | { readonly ok: false; readonly faults: readonly Fault[]; readonly records: number };
 
-/** Content to database: reads every record, fits every measurement, writes the file. Faults in the content leave the old file as it is. */
+/**
+ * Content to database: reads every record, fits every measurement, writes the file. Faults in the content leave the old file as it is.
+ *
+ * @throws ContentChangedError where a file of the content changed in between; the old file stays then too
+ */
 export function refit(order: RefitOrder): RefitResult {
+  const stamp = stampContent(order.content);
   const { collection, history, faults, filesRead } = readContent(order.content);
   if (collection === null) return { ok: false, faults, records: filesRead };
   const { refit: done, tables } = refitCollection(collection, history, filesRead, order);
+  holdContent(order.content, stamp);
   writeDatabase(order.database, tables);
   return { ok: true, refit: done };
 }

@@ -1,0 +1,35 @@
+import { readdirSync, statSync } from 'node:fs';
+import { join } from 'node:path';
+
+/** Content that was edited while it was being read or fitted: what came of it belongs to no one state of the folder. */
+export class ContentChangedError extends Error {}
+
+/** Every file of a content folder with its size, its time of change and its identity on the disk: told in milliseconds, without reading. */
+export type ContentStamp = ReadonlyMap<string, string>;
+
+export function stampContent(directory: string): ContentStamp {
+  const stamp = new Map<string, string>();
+  for (const name of filesUnder(directory)) {
+    const found = statSync(join(directory, name), { bigint: true, throwIfNoEntry: false });
+    if (found !== undefined) stamp.set(name, `${found.size} ${found.mtimeNs} ${found.ino}`);
+  }
+  return stamp;
+}
+
+function filesUnder(directory: string): string[] {
+  try {
+    return readdirSync(directory, { recursive: true, encoding: 'utf8' }).filter((name) => /\.(?:ya?ml|json)$/i.test(name)).sort();
+  } catch {
+    // Reading the content says what is wrong with the folder.
+    return [];
+  }
+}
+
+/** @throws ContentChangedError where the folder differs from the stamp */
+export function holdContent(directory: string, before: ContentStamp): void {
+  const now = stampContent(directory);
+  const changed = [...new Set([...before.keys(), ...now.keys()])].filter((name) => before.get(name) !== now.get(name));
+  if (changed.length === 0) return;
+  const more = changed.length > 3 ? ` and ${changed.length - 3} more` : '';
+  throw new ContentChangedError(`the content changed during the run: ${changed.slice(0, 3).join(', ')}${more}. What was being written was dropped; start again`);
+}
