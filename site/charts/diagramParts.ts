@@ -21,9 +21,11 @@ export interface DiagramMark {
 
 export const DIAGRAM_WIDTH = 760;
 export const DIAGRAM_HEIGHT = 620;
-export const DIAGRAM_MARGIN = { left: 46, right: 84, top: 68, bottom: 46 };
+export const DIAGRAM_MARGIN = { left: 46, right: 84, top: 76, bottom: 46 };
 export const DIAGRAM_GUTTER = 34;
 const LABEL = 12.5;
+/** What a term label takes across its line: the raised multiplicity of one must clear the lowered g of the next. */
+const PITCH = 1.26;
 
 /** Upper end of the E/B axis: room for every mark and for the spin-allowed levels over most of the field axis. */
 export function diagramCeiling(reach: number, marks: readonly DiagramMark[]): number {
@@ -65,16 +67,17 @@ function levelLabels({ x, y }: DiagramScales, diagram: LevelDiagram, ceiling: nu
     .filter((end): end is { curve: LevelCurve; piece: readonly { x: number; y: number }[] } => end.piece !== undefined);
   const right = ends.filter(({ piece }) => piece.at(-1)!.x === diagram.reach);
   const top = ends.filter(({ piece }) => piece.at(-1)!.x < diagram.reach);
-  const heights = spreadLabels(right.map(({ piece }) => y(piece.at(-1)!.y)), right.map(() => LABEL + 0.5), [DIAGRAM_MARGIN.top - 6, y(0) + 8]);
-  // Turned labels share the top edge: where there are many, they are set smaller rather than on each other.
+  // Where there are many labels at an edge, they are set smaller rather than on each other.
+  const [upper, lower] = [DIAGRAM_MARGIN.top - 6, y(0) + 8];
+  const pitch = Math.min(PITCH * LABEL, (lower - upper) / Math.max(1, right.length));
+  const heights = spreadLabels(right.map(({ piece }) => y(piece.at(-1)!.y)), right.map(() => pitch), [upper, lower]);
   const [from, to] = [x(0) - 20, x(diagram.reach) + 10];
-  const extent = Math.min(15, (to - from) / Math.max(1, top.length));
-  const size = Math.min(LABEL, 0.86 * extent);
+  const extent = Math.min(PITCH * LABEL, (to - from) / Math.max(1, top.length));
   const places = spreadLabels(top.map(({ piece }) => x(piece.at(-1)!.x)), top.map(() => extent), [from, to]);
   return right.map(({ curve, piece }, index) => label(labelParts(curve, diagram), x(diagram.reach) + 13, heights[index]!, 'start',
-    leader(x(diagram.reach), y(piece.at(-1)!.y), x(diagram.reach) + 11, heights[index]!), LABEL)).join('')
+    leader(x(diagram.reach), y(piece.at(-1)!.y), x(diagram.reach) + 11, heights[index]!), pitch / PITCH)).join('')
     + top.map(({ curve, piece }, index) => label(labelParts(curve, diagram), places[index]!, DIAGRAM_MARGIN.top - 19, 'turned',
-      leader(x(piece.at(-1)!.x), DIAGRAM_MARGIN.top, places[index]!, DIAGRAM_MARGIN.top - 16), size)).join('');
+      leader(x(piece.at(-1)!.x), DIAGRAM_MARGIN.top, places[index]!, DIAGRAM_MARGIN.top - 16), extent / PITCH)).join('');
 }
 
 function labelParts(curve: LevelCurve, { ion }: LevelDiagram): readonly TextPart[] {
