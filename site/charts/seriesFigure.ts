@@ -70,7 +70,7 @@ export function seriesFigure(
   const base = y(0);
   const over = rows.map((row) => (row.beside == null ? '' : `<path class="beside" d="${diamond(x(row.beside), y(row.index))}"/>`)
     + `<circle class="${row.open ? 'calculated' : 'point'}" cx="${c(x(row.value))}" cy="${c(y(row.index))}" r="3.6"/>`
-    + `<text x="${c(left - 10)}" y="${c(y(row.index) + 4.5)}" text-anchor="end" font-size="${SIZE}">${spans(row.label, SIZE)}</text>`).join('')
+    + `<text x="${c(left - 10)}" y="${c(y(row.index) + 4.5)}" text-anchor="end" font-size="${c(fitting(row.label, left - 14))}">${spans(row.label, fitting(row.label, left - 14))}</text>`).join('')
     + rows.map((row) => (row.note === undefined ? '' : `<text class="note-text" x="${c(WIDTH - right + noted)}" y="${c(y(row.index) + 4)}" text-anchor="end" font-size="${NOTE}">${escapeText(row.note)}</text>`)).join('')
     + (extras.noteHead === undefined ? '' : `<text class="note-text" x="${c(WIDTH - right + noted)}" y="${c(top - 10)}" text-anchor="end" font-size="${NOTE}">${spans(extras.noteHead, NOTE)}</text>`)
     + bracketMarks(extras.brackets ?? [], lanes.lanes, (place) => y(place), WIDTH - right + noted + 8)
@@ -78,6 +78,9 @@ export function seriesFigure(
     + `<text x="${c((left + WIDTH - right) / 2)}" y="${c(base + 38)}" text-anchor="middle" font-size="13.5">${spans(axis, 13.5)}</text>`;
   return dressed(drawing, { ...dress, over });
 }
+
+/** Size of a label: smaller where it would run out of its margin. */
+const fitting = (label: readonly TextPart[], room: number): number => Math.min(SIZE, (SIZE * room) / textWidth(label, SIZE));
 
 /** Ends of an axis that holds every value with its total uncertainty, what stands beside it and the upright line, with a little room. */
 export function seriesRange(points: readonly SeriesPoint[], upright?: number): readonly [low: number, high: number] {

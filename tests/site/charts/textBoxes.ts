@@ -4,6 +4,8 @@ import { parseHTML } from 'linkedom';
 export interface TextBox { readonly text: string; readonly whole: string; readonly owner: number; readonly size: number; readonly left: number; readonly right: number; readonly top: number; readonly bottom: number }
 
 const WIDTH = 0.5;
+/** Marks that stand over a letter take no room. */
+const letters = (text: string): number => [...text.replaceAll(/[\u0300-\u036f]/g, '')].length;
 const number = (element: Element, name: string, fallback: number): number => (element.hasAttribute(name) ? Number(element.getAttribute(name)!.replace('em', '')) * (element.getAttribute(name)!.endsWith('em') ? 12.5 : 1) : fallback);
 
 /** Boxes of every run of every text of a drawing, turned texts too. Widths are those of a book face, 0.5 of the size a letter. */
@@ -15,13 +17,13 @@ export function textBoxes(svg: string): readonly TextBox[] {
       const element = node.nodeType === 1 ? node as unknown as Element : null;
       return { text: node.textContent ?? '', size: element ? number(element, 'font-size', size) : size, dy: element ? number(element, 'dy', 0) : 0 };
     });
-    const total = runs.reduce((sum, run) => sum + [...run.text].length * WIDTH * run.size, 0);
+    const total = runs.reduce((sum, run) => sum + letters(run.text) * WIDTH * run.size, 0);
     const anchor = text.getAttribute('text-anchor') ?? text.parentElement?.closest('[text-anchor]')?.getAttribute('text-anchor') ?? 'start';
     let x = number(text, 'x', 0) - (anchor === 'middle' ? total / 2 : anchor === 'end' ? total : 0);
     let y = number(text, 'y', 0);
     return runs.map((run): TextBox => {
       y += run.dy;
-      const box = { left: x, right: x + [...run.text].length * WIDTH * run.size, top: y - 0.7 * run.size, bottom: y + (/[gjpqy(),]/.test(run.text) ? 0.22 : 0.02) * run.size };
+      const box = { left: x, right: x + letters(run.text) * WIDTH * run.size, top: y - 0.7 * run.size, bottom: y + (/[gjpqy(),]/.test(run.text) ? 0.22 : 0.02) * run.size };
       x = box.right;
       return { text: run.text, whole: text.textContent ?? '', owner, size: run.size, ...placed(text, box) };
     });

@@ -10,6 +10,7 @@ import { ownFigure, ownFigureIds } from '../../../site/data/ownFigures.ts';
 import { pngOf } from '../../../site/data/png.ts';
 import { type CollectionTree, collectionTree } from '../../../site/data/tree.ts';
 import { refittedDemonstration } from '../demonstration.ts';
+import { collisions, textBoxes } from '../charts/textBoxes.ts';
 import { characters } from './fontCharacters.ts';
 
 let tree: CollectionTree;
@@ -83,6 +84,12 @@ describe('every figure of the demonstration', () => {
       expect(missing, svg.slice(0, 200)).toEqual([]);
     }
     for (const { svg } of pictures(tree)) expect(picture(svg)).toContain('prefers-color-scheme: dark');
+  });
+
+  test('has no text on another', () => {
+    const drawn = [...publishedFigures(tree), ...tree.complexes.flatMap((complex) => ownFigureIds(tree, complex).map((name) => ({ id: `${complex.row.id} ${name}`, svg: ownFigure(tree, complex, name).svg })))];
+    const touching = drawn.flatMap(({ id, svg }) => collisions(textBoxes(svg), 0.6).map((pair) => `${id}: ${pair}`));
+    expect(touching).toEqual([]);
   });
 
   test('the rules that a saved figure carries are those its marks need', () => {
