@@ -1,13 +1,13 @@
-import { levelNames, parseIon, recordText, shownLabel, suggestedId, suggestedMeasurementId } from '#engine';
+import { type Reading, levelNames, parseIon, recordText, shownLabel, suggestedId, suggestedMeasurementId } from '#engine';
 import { fittedGeometry } from '../../../scripts/content/spin.ts';
 import { showFaults } from '../page/faults.ts';
 import { fetchJson } from '../page/fetchJson.ts';
 import type { ComparedComplex, ComparedMeasurement, PackedCollection } from './compareData.ts';
 import { formFields } from './formFields.ts';
-import { placementMarkup } from './placementMarkup.ts';
 import { type ReadForm, readForm } from './readForm.ts';
 import { readingMarkup, readingStatus } from './readingMarkup.ts';
-import { createReckoner } from './reckon.ts';
+import type { Placer } from './placing.ts';
+import { createReader } from './reckon.ts';
 import { type TypedForm, emptyForm, formOfQuery, formOfRecord, formQuery, holdsForm, recordOfForm } from './typedForm.ts';
 
 /** The measurement whose bands are read otherwise. */
@@ -26,12 +26,15 @@ export async function startTyped(part: HTMLElement): Promise<void> {
   const places = Object.fromEntries(['status', 'reading', 'placement', 'record', 'about'].map((name) => [name, part.querySelector<HTMLElement>(`[data-place=${name}]`)!])) as Record<'status' | 'reading' | 'placement' | 'record' | 'about', HTMLElement>;
   const fields = formFields(form);
   const [packed, original] = await Promise.all([fetchJson<PackedCollection>('data/compare.json'), fetchOriginal()]);
-  const reckoner = createReckoner(packed);
+  const readMeasurement = createReader(packed);
+  let place: Placer | null = null;
   const abbreviations = packed.ligands.flatMap(({ abbreviation }) => abbreviation ?? []);
   let resting: ReturnType<typeof setTimeout> | undefined;
+  let latest: TypedForm | null = null;
 
   const show = (): void => {
     const typed = fields.typed();
+    latest = typed;
     showDetails(form);
     offerTerms(typed);
     const read = readForm(typed, packed);
@@ -45,16 +48,18 @@ export async function startTyped(part: HTMLElement): Promise<void> {
       resting = setTimeout(() => writeAddress(typed), REST);
       return;
     }
-    const result = reckoner.read(measurement);
+    const result = readMeasurement(measurement);
     places.status.textContent = readingStatus(result.chosen);
     places.reading.innerHTML = readingMarkup(result, measurement, original?.published ?? null);
     resting = setTimeout(() => {
       writeAddress(typed);
-      showPlace(typed, read, result.chosen);
+      showPlace(typed, read, result.chosen).catch((error: unknown) => {
+        places.placement.textContent = `The place could not be worked out (${error instanceof Error ? error.message : 'unknown reason'}). Reload the page to try again.`;
+      });
     }, REST);
   };
 
-  const showPlace = (typed: TypedForm, read: ReadForm, reading: Parameters<typeof reckoner.place>[3]): void => {
+  const showPlace = async (typed: TypedForm, read: ReadForm, reading: Reading): Promise<void> => {
     const { identity, measurement, formula } = read;
     if (identity === null || measurement === null || formula === null) {
       places.placement.innerHTML = '<p class="note">Give the ligands to see where the complex stands.</p>';
@@ -64,7 +69,11 @@ export async function startTyped(part: HTMLElement): Promise<void> {
     const draft = recordOfForm(typed, formula, 'draft');
     const id = original?.complex ?? suggestedId(draft);
     const measurementId = original?.published.id ?? suggestedMeasurementId(draft.measurements![0]!);
-    const placement = reckoner.place({ ...identity, id }, measurementId, measurement, reading, original === null ? null : `${original.complex}/${original.published.id}`);
+    const { createPlacer, placementMarkup } = await import('./placing.ts');
+    // What was typed while the script came is placed by its own turn.
+    if (latest !== typed) return;
+    place ??= createPlacer(packed);
+    const placement = place({ ...identity, id }, measurementId, measurement, reading, original === null ? null : `${original.complex}/${original.published.id}`);
     places.placement.innerHTML = placementMarkup(placement, abbreviations);
     showRecord(places.record, id, recordText(recordOfForm(typed, formula, measurementId)));
   };

@@ -6,7 +6,8 @@ import { readCollection } from '../../../scripts/content/readCollection.ts';
 import { places } from '../../../scripts/places.ts';
 import { type PackedCollection, unpackCollection } from '../../../site/client/compare/compareData.ts';
 import { readForm } from '../../../site/client/compare/readForm.ts';
-import { createReckoner } from '../../../site/client/compare/reckon.ts';
+import { createPlacer } from '../../../site/client/compare/placing.ts';
+import { createReader } from '../../../site/client/compare/reckon.ts';
 import { formOfQuery, formOfRecord, formQuery } from '../../../site/client/compare/typedForm.ts';
 import { comparedCollection, comparedComplex } from '../../../site/data/compare.ts';
 import { readRows } from '../../../site/data/database.ts';
@@ -30,7 +31,8 @@ test('the page compares with the very numbers that the command reads from the da
 
 test('every measurement of the collection, opened to be read otherwise, is read and placed to the same bits as by the command', () => {
   const stored = readStoredCollection(demonstration);
-  const reckoner = createReckoner(packed);
+  const readBands = createReader(packed);
+  const place = createPlacer(packed);
   const read = readCollection(places.content);
   if (read.collection === null) throw new Error('the demonstration does not check');
   let compared = 0;
@@ -43,9 +45,9 @@ test('every measurement of the collection, opened to be read otherwise, is read 
     const { measurement, identity, faults } = readForm(form, packed);
     expect(faults, record.id).toEqual([]);
     if (policyId(command.measurement.policy) !== packed.policyId) continue;
-    const { chosen } = reckoner.read(measurement!);
+    const { chosen } = readBands(measurement!);
     expect(chosen, record.id).toEqual(command.reading);
-    const placement = reckoner.place({ ...identity!, id: record.id, formula: record.formula }, command.measurement.id, measurement!, chosen, measurementId(command.placement.result));
+    const placement = place({ ...identity!, id: record.id, formula: record.formula }, command.measurement.id, measurement!, chosen, measurementId(command.placement.result));
     expect(placement, record.id).toEqual(command.placement);
     compared += 1;
   }
