@@ -110,7 +110,7 @@ test('an ion page holds the free ion, its diagram with the complexes on it, and 
   expect(ionPage(tree, 'Ti(III)').freeIon).toBeNull();
 });
 
-test('every published figure has title, caption with n, source, data table, SVG and CSV', () => {
+test('every published figure has title, caption with n, source, data table, SVG, PNG and CSV', () => {
   const figures = tree.ions.flatMap(({ name }) => { const page = ionPage(tree, name); return [...page.diagrams, ...page.series.map(({ figure }) => figure)]; });
   expect(figures.length).toBeGreaterThan(5);
   for (const figure of figures) {
@@ -119,7 +119,7 @@ test('every published figure has title, caption with n, source, data table, SVG 
     expect(figure.source, figure.id).not.toBe('');
     expect(figure.svg, figure.id).toMatch(/^<svg/);
     expect(figure.csv!.split('\r\n').length, figure.id).toBeGreaterThan(2);
-    expect(figure.files.map(({ path }) => path), figure.id).toEqual([`figures/${figure.id}.svg`, `figures/${figure.id}.csv`]);
+    expect(figure.files.map(({ path }) => path), figure.id).toEqual([`figures/${figure.id}.svg`, `figures/${figure.id}.png`, `figures/${figure.id}.csv`]);
   }
 });
 
