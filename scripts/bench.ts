@@ -8,6 +8,8 @@ import { readArguments } from './arguments.ts';
 import type { CommandTable } from './arguments.ts';
 import { measurePages, measureRefit, prepareCollection } from './bench/collection.ts';
 import { measureBlocks, measureReadings } from './bench/engine.ts';
+import { measureLive } from './bench/live.ts';
+import { measureScale } from './bench/scale.ts';
 import { measureSeries } from './bench/series.ts';
 import { measureStartUp } from './bench/startUp.ts';
 import type { Measured } from './bench/stopwatch.ts';
@@ -20,6 +22,7 @@ const table: CommandTable = {
   summary: 'Measures how fast the engine, the refit and the pages are here, over generated records.',
   options: [
     { name: 'records', value: 'NUMBER', help: 'how many complexes to generate (1000)' },
+    { name: 'complexes', value: 'NUMBER', help: 'only the commands at scale: refit, one record changed, build, each in its own process with its memory, and the growth from a tenth of so many' },
     { name: 'without-pages', help: 'leave out the pages, which take longest' },
     { name: 'json', help: 'print the numbers as JSON' },
   ],
@@ -27,8 +30,10 @@ const table: CommandTable = {
 
 await runCommand(table.name, async () => {
   const given = readArguments(table);
-  const typed = given.text('records') ?? '1000';
-  if (!/^[1-9]\d{0,5}$/.test(typed)) throw new UsageError(`--records takes a whole number from 1 to 999999, not "${typed}".`);
+  const records = wholeNumber('records', given.text('records') ?? '1000');
+  const typed = given.text('complexes');
+  const complexes = typed === null ? null : wholeNumber('complexes', typed);
+  const pages = !given.has('without-pages');
   const json = given.has('json');
   const lines: Measured[] = [];
   const add = (more: readonly Measured[]): void => {
@@ -37,20 +42,32 @@ await runCommand(table.name, async () => {
   };
   const folder = mkdtempSync(join(tmpdir(), 'bandstead-bench-'));
   try {
-    add(await measureBlocks());
-    const prepared = await prepareCollection(folder, Number(typed));
-    add(prepared.lines);
-    add(await measureReadings(prepared.collection));
-    add(await measureSeries());
-    add(await measureRefit(folder));
-    if (!given.has('without-pages')) add(await measurePages(folder, prepared.collection));
-    add(await measureStartUp());
+    if (complexes !== null) await measureScale(folder, complexes, pages, add);
+    else await measureParts(folder, records, pages, add);
   } finally {
     rmSync(folder, { recursive: true, force: true });
   }
   if (json) process.stdout.write(`${JSON.stringify({ ok: true, node: process.versions.node, measured: lines })}\n`);
   return exitCodes.good;
 });
+
+/** The parts of the tool, one by one. */
+async function measureParts(folder: string, records: number, pages: boolean, add: (lines: readonly Measured[]) => void): Promise<void> {
+  add(await measureBlocks());
+  const prepared = await prepareCollection(folder, records);
+  add(prepared.lines);
+  add(await measureReadings(prepared.collection));
+  add(await measureSeries());
+  add(await measureRefit(folder));
+  if (pages) add(await measurePages(folder, prepared.collection));
+  if (pages) add(await measureLive(folder, records));
+  add(await measureStartUp());
+}
+
+function wholeNumber(option: string, typed: string): number {
+  if (!/^[1-9]\d{0,5}$/.test(typed)) throw new UsageError(`--${option} takes a whole number from 1 to 999999, not "${typed}".`);
+  return Number(typed);
+}
 
 function cells({ name, value, unit, over }: Measured): string[] {
   return [name.padEnd(28), significant(value, 3).padStart(8), unit.padEnd(14), over];

@@ -37,19 +37,25 @@ await runCommand(table.name, async () => {
   const out = given.path('out', places.site);
   const json = given.has('json');
 
+  const stages: Record<string, number> = {};
   const result = await whileLocked(table.name, [database, out], async () => {
     const stamp = stampContent(content);
     const progress = progressLine('fitting', process.stderr);
     const fitted = refit({ content, database, cache: given.has('cold') ? null : cacheFile(content), progress: progress.update });
     progress.end();
     if (!fitted.ok) return fitted;
+    stages['refit'] = since(started);
     if (process.stderr.isTTY) process.stderr.write('drawing pages ...');
     await swapFolder(out, async (folder) => {
+      const drawing = performance.now();
       await buildPages(database, addressOf(fitted.refit.collection.group.url), folder);
+      stages['pages'] = since(drawing);
+      const writing = performance.now();
       // The files for download take the records as typed, so they must be those that were fitted.
       holdContent(content, stamp);
       writePublication(database, content, folder);
       holdContent(content, stamp);
+      stages['files'] = since(writing);
     });
     if (process.stderr.isTTY) process.stderr.write('\r\u001b[K');
     return fitted;
@@ -58,7 +64,7 @@ await runCommand(table.name, async () => {
 
   const pages = countPages(out);
   const milliseconds = performance.now() - started;
-  if (json) process.stdout.write(`${JSON.stringify({ ok: true, ...refitFacts(result.refit), database, site: out, pages, seconds: milliseconds / 1000 })}\n`);
+  if (json) process.stdout.write(`${JSON.stringify({ ok: true, ...refitFacts(result.refit), database, site: out, pages, seconds: milliseconds / 1000, stages })}\n`);
   else {
     process.stdout.write(`${[
       ...refitLines(result.refit),
@@ -68,3 +74,8 @@ await runCommand(table.name, async () => {
   }
   return exitCodes.good;
 });
+
+/** Seconds. */
+function since(moment: number): number {
+  return (performance.now() - moment) / 1000;
+}
