@@ -1,6 +1,6 @@
-import { availableParallelism } from 'node:os';
 import { MessageChannel, receiveMessageOnPort, Worker } from 'node:worker_threads';
 import type { MessagePort } from 'node:worker_threads';
+import { threadsFor } from '../threads.ts';
 import { readOneAsJson } from './readOne.ts';
 import type { ReadingTask } from './readOne.ts';
 
@@ -31,8 +31,8 @@ const patience = 120_000;
  * done. Throws where the engine fails on one, naming it.
  */
 export function readAll(tasks: readonly ReadingTask[], progress: (done: number) => void = () => undefined): readonly string[] {
-  const threads = Math.min(availableParallelism(), 8);
-  if (tasks.length < worthThreads || threads < 2)
+  const threads = threadsFor(tasks.length, worthThreads);
+  if (threads < 2)
     return tasks.map((task, index) => {
       const json = readOneAsJson(task);
       progress(index + 1);

@@ -33,6 +33,12 @@ const houseRules: readonly (readonly [string, rules.Rule, readonly Source[]])[] 
     { path: 'engine/ions/c.ts', text: "const y = (1e6).toLocaleString('de');" },
     { path: 'engine/ions/d.ts', text: 'list.sort((a, b) => a.localeCompare(b));' },
   ]],
+  ['the clock is asked for the date of a release only, chance for a name in passing, the locale never', rules.noClockInBuilds, [
+    { path: 'scripts/export/a.ts', text: 'const made = new Date().toISOString();' },
+    { path: 'site/pages/a.astro', text: '---\nconst now = Date.now();\n---\n' },
+    { path: 'site/data/a.ts', text: 'const id = Math.random();' },
+    { path: 'scripts/keptBytes.ts', text: 'list.sort((a, b) => a.localeCompare(b));' },
+  ]],
   ["scripts and site reach the engine as '#engine' alone", rules.oneDoorToTheEngine, [
     { path: 'scripts/refit.ts', text: "import { levels } from '../engine/levels/levels.ts';" },
     { path: 'site/charts/a.ts', text: "import type { Ion } from '../../engine/ions/types.ts';" },
