@@ -19,7 +19,6 @@ import { places } from './places.ts';
 import { projectFolder } from './publish/pages.ts';
 import { folderName } from './report/faults.ts';
 import { stoppedByFaults } from './report/stoppedByFaults.ts';
-import { today } from './release/surroundings.ts';
 import { runCommand, UsageError } from './runCommand.ts';
 
 const table: CommandTable = {
