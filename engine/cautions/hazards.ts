@@ -1,6 +1,7 @@
 import type { Ion } from '../ions/types.ts';
 import type { Caution } from './types.ts';
 import { formulaGroups, formulaGroupsInProse, formulaWords } from './formulaGroups.ts';
+import type { FormulaGroup } from './formulaGroups.ts';
 import { hazardClasses } from './hazardClasses.ts';
 import type { HazardClass } from './hazardClasses.ts';
 
@@ -48,13 +49,21 @@ interface Place {
   readonly kind: 'formula' | 'ligand formula' | 'text' | 'medium';
 }
 
+/** A place with what its text holds, read once for all classes. */
+interface ReadPlace extends Pick<Place, 'where' | 'kind'> {
+  readonly plain: string;
+  readonly groups: readonly FormulaGroup[];
+  /** Groups that may be ligands. */
+  readonly bound: readonly FormulaGroup[];
+}
+
 /**
  * Hazard cautions of a complex, in the order of the table, at most one of each code. Triggers are looked for in the formula, the
  * metal ion, the ligands, and the samples, media and hosts of the measurements. A caution that is not raised says nothing:
  * the table knows common classes only. Source: common practice, from memory.
  */
 export function hazardCautions(subject: HazardSubject): readonly HazardCaution[] {
-  const places = placesOf(subject);
+  const places = placesOf(subject).map(readPlace);
   return hazardClasses.flatMap((hazard) => {
     if (subject.overridden.includes(hazard.code)) return [];
     const found = places.filter((place) => isRaised(hazard, place)).map(({ where }) => where);
@@ -84,13 +93,15 @@ function placesOf({ formula, name, ligands, measurements }: HazardSubject): read
   return places.filter((place): place is Place => place.text !== null);
 }
 
-function isRaised(hazard: HazardClass, { text, kind }: Place): boolean {
-  const plain = text.normalize('NFKC');
+function readPlace({ where, kind, text }: Place): ReadPlace {
+  const groups = groupsOf(text, kind);
+  return { where, kind, plain: text.normalize('NFKC'), groups, bound: kind === 'ligand formula' ? groups : bracketed(text) };
+}
+
+function isRaised(hazard: HazardClass, { plain, kind, groups, bound }: ReadPlace): boolean {
   if (hazard.words?.test(plain) === true) return true;
   if (kind === 'medium' && hazard.mediumWords?.test(plain) === true) return true;
-  const groups = groupsOf(text, kind);
   if (hazard.group !== undefined && groups.some(hazard.group)) return true;
-  const bound = kind === 'ligand formula' ? groups : bracketed(text);
   return hazard.ligandGroup !== undefined && bound.some(hazard.ligandGroup);
 }
 
