@@ -15,6 +15,7 @@ import { type Citation, citation } from './publication.ts';
 import { type Quote, quotes } from './quotes.ts';
 import { type RecordHistory, recordHistory } from './recordHistory.ts';
 import { groupBy } from './group.ts';
+import { oncePerCollection } from './memo.ts';
 import { complexSchematic } from './schematic.ts';
 import { tellingStructure } from './structure.ts';
 import { listed, parameterShown } from './show.ts';
@@ -66,6 +67,15 @@ export interface ComplexPage {
   readonly history: RecordHistory;
   readonly head: HeadData;
   readonly report: { readonly text: string; readonly address: string | null };
+}
+
+const byId = oncePerCollection((tree) => new Map(tree.complexes.map((complex) => [complex.row.id, complex])));
+
+/** The complex of a page. @throws RangeError where the collection has none of that id */
+export function complexOf(tree: CollectionTree, id: string): ComplexNode {
+  const found = byId(tree).get(id);
+  if (found === undefined) throw new RangeError(`the collection has no complex "${id}"`);
+  return found;
 }
 
 export function complexPage(tree: CollectionTree, complex: ComplexNode): ComplexPage {
