@@ -59,7 +59,7 @@ const fieldCodes = {
   FIELD_NOT_HERE: 'a field that goes with another value only, such as side: without a shoulder',
   UNKNOWN_CHOICE: 'a word that is not on the list of its field',
   TEXT_TOO_LONG: 'a text of more than 4000 characters',
-  CONTROL_CHARACTER: 'an invisible control character in a text',
+  CONTROL_CHARACTER: 'an invisible character in a text that controls a terminal or turns the direction of writing',
   BAD_COUNT: 'a whole number outside its limits',
   BAD_CHARGE: 'a charge that cannot be read',
   BAD_DATE: 'a date that is not year-month-day, or not in the calendar',

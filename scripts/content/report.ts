@@ -26,7 +26,7 @@ export interface Reporter {
 export function createReporter(file: string, root: ContentNode | null): Reporter {
   const faults: Fault[] = [];
   const atPlace = (place: Place, path: Path, finding: Finding): void => {
-    faults.push({ file, line: place.line, column: place.column, field: fieldName(path), ...shortened(finding) });
+    faults.push({ file, line: place.line, column: place.column, field: printable(fieldName(path)), ...shortened(finding) });
   };
   return {
     file,
@@ -44,9 +44,14 @@ export function typedText(text: string): string {
 /** The longest text that a message repeats. */
 const longestFound = 300;
 
+/** One line without characters that would steer a terminal: half letters, and those that turn the direction of what follows, are shown as a mark. */
+function printable(text: string): string {
+  return text.replace(/[\u0000-\u001f\u007f-\u009f\u2028\u2029]+/g, ' ').replace(/[\ud800-\udfff\u202a-\u202e\u2066-\u2069]/gu, '\ufffd');
+}
+
 function shortened(finding: Finding): Finding {
   const clip = (text: string) => {
-    const oneLine = text.replace(/[\u0000-\u001f\u007f-\u009f\u2028\u2029]+/g, ' ').replace(/[\ud800-\udfff]/gu, '\ufffd');
+    const oneLine = printable(text);
     return oneLine.length <= longestFound ? oneLine : `${oneLine.slice(0, longestFound)} ...`;
   };
   return { code: finding.code, found: clip(finding.found), expected: clip(finding.expected), mend: clip(finding.mend) };

@@ -36,7 +36,7 @@ export const text = () =>
   leaf<string>((typed) => {
     const value = typed.trim();
     if (value.length > longestText) return finding('TEXT_TOO_LONG', `${value.length} characters`, `at most ${longestText} characters`, 'shorten the text, or keep it in a file of its own');
-    if (/[\u0000-\u0008\u000b-\u001f\u007f-\u009f]/.test(value)) return finding('CONTROL_CHARACTER', value, 'text without control characters', 'delete the invisible character, or type the text again');
+    if (/[\u0000-\u0008\u000b-\u001f\u007f-\u009f\u202a-\u202e\u2066-\u2069]/.test(value)) return finding('CONTROL_CHARACTER', value, 'text without control characters and characters that turn the direction of writing', 'delete the invisible character, or type the text again');
     return { value };
   }).meta({ bare: 'number' });
 
