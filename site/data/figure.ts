@@ -5,7 +5,7 @@ import type { Parts } from './typeset.ts';
 export interface FigureFile {
   readonly name: string;
   readonly path: string;
-  /** Made in the browser from the drawing at `path`: the name under which it is saved. */
+  /** Made in the browser from the drawing at `path`: its name within that drawing. */
   readonly madeHere?: string;
 }
 
@@ -52,8 +52,8 @@ export function figureFiles(id: string, table = id): FigureShown['files'] {
   return [{ name: 'SVG', path: `figures/${id}.svg` }, { name: 'PNG', path: `figures/${id}.png` }, { name: 'CSV', path: `figures/${table}.csv` }];
 }
 
-/** Files of a figure of a complex's own page: the drawing beside the page, the picture made in the browser, the numbers in the table of its bands. */
+/** Files of a figure of a complex's own page: the sheet that holds it, the picture made of it in the browser, the numbers in the table of bands. */
 export function ownFigureFiles(complex: string, id: string): FigureShown['files'] {
-  const drawing = `${complexPath(complex)}${id}.svg`;
-  return [{ name: 'SVG', path: drawing }, { name: 'PNG', path: drawing, madeHere: `${complex}-${id}.png` }, { name: 'CSV', path: `${complexPath(complex)}bands.csv` }];
+  const drawing = `${complexPath(complex)}${/-(?:strip|readings)$/.test(id) ? 'strip' : 'levels'}.svg`;
+  return [{ name: 'SVG', path: drawing }, { name: 'PNG', path: drawing, madeHere: id }, { name: 'CSV', path: `${complexPath(complex)}bands.csv` }];
 }

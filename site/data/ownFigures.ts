@@ -1,11 +1,13 @@
 import { placeOnDiagram, hasPlace } from './diagram.ts';
-import type { FigureShown } from './figure.ts';
+import { svgElement } from '../charts/svg.ts';
+import { type FigureShown, drawingSize } from './figure.ts';
 import { hasScheme, levelFigure } from './measurementMeaning.ts';
 import { stripOf } from './measurementRead.ts';
 import { measurementRivals } from './measurementRivals.ts';
+import { counted } from './show.ts';
 import type { CollectionTree, ComplexNode } from './tree.ts';
 
-/** Names of the figures of a complex's own page, as their files are called: known without drawing them. */
+/** Names of the figures of a complex's own page: known without drawing them. */
 export function ownFigureIds(tree: CollectionTree, complex: ComplexNode): readonly string[] {
   return [
     ...complex.measurements.flatMap((measurement) => {
@@ -24,4 +26,25 @@ export function ownFigure(tree: CollectionTree, complex: ComplexNode, name: stri
   })[0];
   if (drawn === undefined) throw new RangeError(`complex ${complex.row.id} has no figure "${name}"`);
   return drawn;
+}
+
+/** The two files of drawings beside a complex's page: bands and their readings; levels and the place on the diagram. */
+export const SHEETS = ['strip', 'levels'] as const;
+export type Sheet = (typeof SHEETS)[number];
+
+const onSheet = (sheet: Sheet) => (name: string): boolean => (/-(?:strip|readings)$/.test(name) ? 'strip' : 'levels') === sheet;
+
+export const hasSheet = (tree: CollectionTree, complex: ComplexNode, sheet: Sheet): boolean => ownFigureIds(tree, complex).some(onSheet(sheet));
+
+/** All figures of one kind of a complex under one another, each a drawing of its own within the sheet, found by its name. */
+export function ownSheet(tree: CollectionTree, complex: ComplexNode, sheet: Sheet): string {
+  let [bottom, width] = [0, 0];
+  const inner = ownFigureIds(tree, complex).filter(onSheet(sheet)).map((name) => {
+    const { svg } = ownFigure(tree, complex, name);
+    const size = drawingSize(svg);
+    const placed = svg.replace('<svg ', `<svg id="${name}" y="${bottom}" `);
+    [bottom, width] = [bottom + size.height + 16, Math.max(width, size.width)];
+    return placed;
+  });
+  return svgElement({ id: sheet, title: `${complex.formula.text}: ${sheet === 'strip' ? 'band strips' : 'levels'}`, description: `${counted(inner.length, 'figure')} of the record ${complex.row.id}, under one another.` }, width, bottom, inner.join(''));
 }

@@ -6,7 +6,7 @@ import { readRows } from '../../../site/data/database.ts';
 import type { FigureShown } from '../../../site/data/figure.ts';
 import { keptFigure, picture } from '../../../site/data/figureFile.ts';
 import { numberFiles, pictures, publishedFigures } from '../../../site/data/figures.ts';
-import { ownFigure, ownFigureIds } from '../../../site/data/ownFigures.ts';
+import { SHEETS, ownFigure, ownFigureIds, ownSheet } from '../../../site/data/ownFigures.ts';
 import { pngOf } from '../../../site/data/png.ts';
 import { type CollectionTree, collectionTree } from '../../../site/data/tree.ts';
 import { refittedDemonstration } from '../demonstration.ts';
@@ -52,9 +52,13 @@ describe('every figure of the demonstration', () => {
     tree.complexes.forEach((complex, index) => {
       const page = pages[index]!;
       const shown = ownFigures(page);
-      const made = ownFigureIds(tree, complex).map((id) => `complexes/${page.id}/${id}.svg`);
-      const linked = [...shown.map(({ figure }) => figure.files), ...(page.diagram ? [page.diagram.files] : [])].map((files) => files[0]!.path);
-      expect(linked, page.id).toEqual(made);
+      const made = ownFigureIds(tree, complex);
+      const linked = [...shown.map(({ figure }) => figure.files), ...(page.diagram ? [page.diagram.files] : [])].map((files) => files[1]!);
+      expect(linked.map(({ madeHere }) => madeHere), page.id).toEqual(made);
+      for (const { path, madeHere } of linked) {
+        const sheet = SHEETS.find((one) => path === `complexes/${page.id}/${one}.svg`)!;
+        expect(ownSheet(tree, complex, sheet), page.id).toContain(`<svg id="${madeHere}" y=`);
+      }
       for (const { figure, rows } of shown) {
         walked++;
         expect(figure.title, figure.id).toMatch(/\.$/);
