@@ -152,9 +152,10 @@ describe('files for machines', () => {
     expect(found).toEqual([['complexes/co3-am6-new/', 'Dataset'], ['complexes/cr-am6/', 'Dataset'], ['data/', 'Dataset'], ['', 'DataCatalog']]);
   });
 
-  test('a complex has the files that are listed for it, at most eight', () => {
+  test('a complex has the files that are listed for it and its figures, each with a link on its page', () => {
     const files = readdirSync(join(site.folder, 'complexes/cr-am6')).sort();
-    expect(files.length).toBeLessThanOrEqual(8);
+    expect(files.filter((name) => !name.endsWith('.svg'))).toEqual(['bands.csv', 'cite.bib', 'cite.ris', 'index.html', 'record.json', 'record.yaml']);
+    expect(files).toEqual(expect.arrayContaining(['aq-298-levels.svg', 'aq-298-strip.svg']));
     for (const file of files.filter((name) => name !== 'index.html')) expect(documentOf('complexes/cr-am6/').querySelector(`main a[href="${base}complexes/cr-am6/${file}"]`), file).not.toBeNull();
   });
 
@@ -179,6 +180,25 @@ describe('files for machines', () => {
       expect(html(file), file).not.toMatch(/\b10\.\d{4,9}\//);
     }
   });
+});
+
+test('hazard cautions stand above the data in print, as on the screen', async () => {
+  const { page } = await watchedPage(browser, site);
+  await page.goto(`${site.address}complexes/cr-am6/`);
+  const { caution } = JSON.parse(html('complexes/cr-am6/record.json')) as { caution: { subject: string; text: string }[] };
+  const hazards = caution.filter(({ subject }) => subject === 'hazard');
+  expect(hazards.length).toBeGreaterThan(0);
+  for (const media of ['screen', 'print'] as const) {
+    await page.emulateMedia({ media });
+    for (const { text } of hazards) {
+      const name = page.getByText(/^.*?\./.exec(text)![0], { exact: true });
+      expect(await name.isVisible(), media).toBe(true);
+      const [above, below] = [await name.boundingBox(), await page.getByRole('heading', { name: 'What was read' }).first().boundingBox()];
+      expect(above!.y).toBeLessThan(below!.y);
+    }
+    expect(await page.getByText('No caution here does not mean no hazard.').isVisible(), media).toBe(true);
+  }
+  await page.context().close();
 });
 
 describe('how to cite', () => {
