@@ -10,6 +10,12 @@ import type { MeasurementDraft } from './complex.ts';
 /** How far beyond the typed end of a scan a band may be read: ends are round numbers, and the foot of a band shows its middle. */
 const beyondScan = 0.05;
 
+/**
+ * Below this, cm-1, lie vibrations and their overtones, and no maximum of a d-d or charge-transfer band: the smallest splittings of
+ * tetrahedral iodides are near 2600 (common practice, no source). Wavelengths of the near infrared have numbers up to here.
+ */
+const lowestElectronic = 2500;
+
 export function checkBands({ bands, scanned }: MeasurementDraft, path: readonly (string | number)[], report: Reporter): void {
   const looked = rangesScanned(scanned);
   const absent: { readonly low: number; readonly high: number; readonly typed: string; readonly index: number }[] = [];
@@ -37,6 +43,13 @@ export function checkBands({ bands, scanned }: MeasurementDraft, path: readonly 
         report.at(at('width'), { code: 'BAND_WIDTH', found: typedText(band.width.typed), expected: `a width smaller than the position, ${band.position.typed}`, mend: 'check the number and its unit' });
       }
     }
+    const asWavelength = wavelengthTypedAsWavenumber(band.position.typed, position, band.term);
+    if (asWavelength !== null && !wasScanned(position, looked) && !wasScanned(1e7 / position, looked)) {
+      report.at(at('position'), {
+        code: 'BAND_UNIT', found: typedText(band.position.typed), expected: `a position above ${lowestElectronic} cm-1, below which only vibrations lie`,
+        mend: `if it is a wavelength write ${asWavelength}; if it is a vibration add term: vibration; if it is a band, type scanned with its range`,
+      });
+    }
     if (looked.length > 0 && /cm|nm/.test(band.position.typed) && !wasScanned(position, looked) && wasScanned(1e7 / position, looked)) {
       report.at(at('position'), {
         code: 'BAND_UNIT', found: `${typedText(band.position.typed)}, scanned ${looked.map(({ typed }) => typed).join('; ')}`, expected: 'a position inside what was scanned',
@@ -51,6 +64,13 @@ export function checkBands({ bands, scanned }: MeasurementDraft, path: readonly 
       });
     }
   });
+}
+
+/** The typed wavenumber as a wavelength, where no electronic band can lie so low; null where one can, or the unit is another. */
+function wavelengthTypedAsWavenumber(typed: string, position: number, term: string | readonly (string | undefined)[] | undefined): string | null {
+  const known = [term].flat().some((one) => one === 'vibration' || one === 'impurity');
+  if (known || position >= lowestElectronic || !/cm/.test(typed)) return null;
+  return `${typed.replace(/\s*\/?\s*(1\s*\/\s*)?cm.*$/u, '').trim()} nm`;
 }
 
 /** All that was scanned; none where a part of it cannot be read. */
