@@ -31,8 +31,10 @@ export type { Caution } from './cautions/types.ts';
 export type { ParameterName, Standing, Verdict } from './words/types.ts';
 // Readings: what comes out
 export { readMeasurement, readWithRivals } from './readings/read.ts';
-export { fitAssignment, isFit, ratioFor } from './readings/fit.ts';
-export type { Assigned } from './readings/fit.ts';
+export { fitAssignment } from './readings/fit.ts';
+export { isFit } from './readings/fitTypes.ts';
+export { ratioFor } from './readings/ratioFor.ts';
+export type { Assigned } from './readings/fitTypes.ts';
 export type {
   Branch, DoubletOrder, Evidence, EvidenceCode, GroundState, HelpfulBand, Identifiability, LeftOut, PairAlone, Parameter, PredictedBand, RatioUsed,
   Reading, ReadingBand, ReadMeasurement, Stress,

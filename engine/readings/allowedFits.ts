@@ -1,7 +1,7 @@
 import { misfitOfOne, predictionOf } from './comparedLines.ts';
 import type { Prediction } from './comparedLines.ts';
 import { scoreOf } from './evidence.ts';
-import { isFit } from './fit.ts';
+import { isFit } from './fitTypes.ts';
 import { scoreChoices } from './scoring.ts';
 import type { Choice, ScoredReading, SearchTask } from './scoring.ts';
 import { floorOf, transitionOf } from './transitions.ts';

@@ -2,7 +2,7 @@ import { symmetricU } from '../measurement/observation.ts';
 import type { Observation } from '../measurement/observation.ts';
 import { quadratic } from './covariance.ts';
 import { transitionsAt } from './evaluate.ts';
-import type { Fit } from './fit.ts';
+import type { Fit } from './fitTypes.ts';
 import type { GroundCase } from './transitions.ts';
 
 /** Where a fit puts a transition that takes no part in it. */

@@ -6,7 +6,7 @@ import { misfitOfOne } from './comparedLines.ts';
 import { quadratic } from './covariance.ts';
 import { transitionsAt } from './evaluate.ts';
 import { absorptivityLimits, evidenceWeights, usualAbsorptivities, widthLimits } from './evidenceWeights.ts';
-import type { Assigned, Fit } from './fit.ts';
+import type { Assigned, Fit } from './fitTypes.ts';
 import { transitionOf, transitionsOf } from './transitions.ts';
 import type { GroundCase, Transition } from './transitions.ts';
 import type { Evidence } from './types.ts';

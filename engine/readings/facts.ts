@@ -6,7 +6,7 @@ import type { Measurement } from '../measurement/types.ts';
 import type { Policy } from '../policy/types.ts';
 import { concise } from '../quantity/print.ts';
 import { transitionsAt } from './evaluate.ts';
-import type { Assigned, Fit } from './fit.ts';
+import type { Assigned, Fit } from './fitTypes.ts';
 import type { GroundCheck } from './groundCheck.ts';
 import type { ScoredReading } from './scoring.ts';
 import { transitionOf } from './transitions.ts';

@@ -1,6 +1,6 @@
 import type { FreeIon } from '../ions/types.ts';
 import { lowestLevel } from '../levels/crossings.ts';
-import type { Fit } from './fit.ts';
+import type { Fit } from './fitTypes.ts';
 import type { GroundCase } from './transitions.ts';
 
 /**

@@ -1,7 +1,7 @@
 import type { FreeIon } from '../ions/types.ts';
 import { quadratic } from './covariance.ts';
 import { transitionsAt } from './evaluate.ts';
-import type { Fit } from './fit.ts';
+import type { Fit } from './fitTypes.ts';
 import { spinCrossing } from './groundCheck.ts';
 import { levelPlace } from './table.ts';
 import type { GroundCase } from './transitions.ts';

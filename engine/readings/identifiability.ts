@@ -1,7 +1,7 @@
 import { symmetricU } from '../measurement/observation.ts';
 import { singularValues } from './covariance.ts';
 import type { Row } from './covariance.ts';
-import type { Assigned, Fit } from './fit.ts';
+import type { Assigned, Fit } from './fitTypes.ts';
 import type { Identifiability, Parameter } from './types.ts';
 import type { ParameterName } from '../words/types.ts';
 import { combinationSentence } from '../words/combination.ts';

@@ -1,5 +1,5 @@
-import type { Assigned, Fit } from './fit.ts';
-import { targetOf } from './fit.ts';
+import type { Assigned, Fit } from './fitTypes.ts';
+import { targetOf } from './fitTask.ts';
 import { isBent, profileLimits } from './profile.ts';
 import type { Limits, ProfileTask } from './profile.ts';
 import type { GroundCase } from './transitions.ts';

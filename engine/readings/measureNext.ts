@@ -6,7 +6,7 @@ import { helpfulBandSentence } from '../words/measureNext.ts';
 import type { Gain } from '../words/measureNext.ts';
 import type { ParameterName } from '../words/types.ts';
 import { transitionsAt } from './evaluate.ts';
-import type { Assigned, Fit } from './fit.ts';
+import type { Assigned, Fit } from './fitTypes.ts';
 import { floorOf, transitionOf } from './transitions.ts';
 import type { GroundCase } from './transitions.ts';
 import type { HelpfulBand, Parameter, PredictedBand } from './types.ts';

@@ -3,7 +3,7 @@ import type { Policy } from '../policy/types.ts';
 import type { Range } from '../quantity/range.ts';
 import { quadratic } from './covariance.ts';
 import { transitionsAt } from './evaluate.ts';
-import type { Assigned, Fit } from './fit.ts';
+import type { Assigned, Fit } from './fitTypes.ts';
 import { floorOf, transitionsOf } from './transitions.ts';
 import type { GroundCase } from './transitions.ts';
 import type { PredictedBand } from './types.ts';

@@ -4,7 +4,7 @@ import type { Policy } from '../policy/types.ts';
 import { concise } from '../quantity/print.ts';
 import { aboveCeiling } from '../words/verdict.ts';
 import type { ParameterName, Standing } from '../words/types.ts';
-import type { Fit } from './fit.ts';
+import type { Fit } from './fitTypes.ts';
 import type { Parameter } from './types.ts';
 
 const withheld = (name: ParameterName, reason: string): Parameter => ({ name, value: null, u: null, uTotal: null, limits: null, standing: 'withheld', reason });

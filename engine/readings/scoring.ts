@@ -3,8 +3,9 @@ import type { Measurement } from '../measurement/types.ts';
 import type { Policy } from '../policy/types.ts';
 import type { Item, NotFitted } from './candidates.ts';
 import { gatherEvidence, scoreOf } from './evidence.ts';
-import { fitAssignment, isFit } from './fit.ts';
-import type { Assigned, FitOutcome } from './fit.ts';
+import { fitAssignment } from './fit.ts';
+import { isFit } from './fitTypes.ts';
+import type { Assigned, FitOutcome } from './fitTypes.ts';
 import type { GroundCase } from './transitions.ts';
 import type { Evidence, RatioUsed } from './types.ts';
 

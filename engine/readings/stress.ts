@@ -3,8 +3,9 @@ import type { Policy } from '../policy/types.ts';
 import { symmetricU } from '../measurement/observation.ts';
 import { quadratic } from './covariance.ts';
 import { transitionsAt } from './evaluate.ts';
-import { fitAssignment, isFit } from './fit.ts';
-import type { Assigned, Fit } from './fit.ts';
+import { fitAssignment } from './fit.ts';
+import { isFit } from './fitTypes.ts';
+import type { Assigned, Fit } from './fitTypes.ts';
 import type { GroundCase } from './transitions.ts';
 import type { LeftOut, PairAlone, RatioUsed, Stress } from './types.ts';
 

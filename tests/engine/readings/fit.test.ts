@@ -1,8 +1,8 @@
 import { describe, expect, test } from 'vitest';
 import { defaultPolicy, freeIon } from '#engine';
 import type { Policy } from '#engine';
-import { isFit } from '../../../engine/readings/fit.ts';
-import type { Fit } from '../../../engine/readings/fit.ts';
+import { isFit } from '../../../engine/readings/fitTypes.ts';
+import type { Fit } from '../../../engine/readings/fitTypes.ts';
 import { assumed, exactFit, fitOf, forAllThree, forFieldAlone, forFieldAndB, planted, readings, standingFit, transitionEnergies, valuesOf } from './planted.ts';
 import type { Planted } from './planted.ts';
 

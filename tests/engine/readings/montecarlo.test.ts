@@ -2,7 +2,7 @@ import { describe, expect, test } from 'vitest';
 import { defaultPolicy } from '#engine';
 import type { FieldParameters, Policy } from '#engine';
 import { transitionsAt } from '../../../engine/readings/evaluate.ts';
-import { isFit } from '../../../engine/readings/fit.ts';
+import { isFit } from '../../../engine/readings/fitTypes.ts';
 import { floorOf } from '../../../engine/readings/transitions.ts';
 import { groundLabel } from '../../../engine/levels/labels.ts';
 import { seeded } from '../../published/random.ts';

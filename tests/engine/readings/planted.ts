@@ -1,7 +1,8 @@
 import { defaultPolicy, freeIon, levels } from '#engine';
 import type { FieldParameters, FreeIon, Policy } from '#engine';
-import { fitAssignment, isFit } from '../../../engine/readings/fit.ts';
-import type { Assigned, Fit, FitOutcome } from '../../../engine/readings/fit.ts';
+import { fitAssignment } from '../../../engine/readings/fit.ts';
+import { isFit } from '../../../engine/readings/fitTypes.ts';
+import type { Assigned, Fit, FitOutcome } from '../../../engine/readings/fitTypes.ts';
 import type { GroundCase } from '../../../engine/readings/transitions.ts';
 import type { RatioUsed } from '../../../engine/readings/types.ts';
 

@@ -1,7 +1,7 @@
 import { defaultPolicy, freeIon, groundLabel, shownLabel } from '#engine';
 import type { Band, FreeIon, Measurement } from '#engine';
 import { transitionsAt } from '../../../engine/readings/evaluate.ts';
-import { ratioFor } from '../../../engine/readings/fit.ts';
+import { ratioFor } from '../../../engine/readings/ratioFor.ts';
 import type { SearchTask } from '../../../engine/readings/scoring.ts';
 import { transitionsOf } from '../../../engine/readings/transitions.ts';
 import type { GroundCase, Transition } from '../../../engine/readings/transitions.ts';

@@ -2,7 +2,7 @@ import { describe, expect, test } from 'vitest';
 import { defaultPolicy, freeIon, readWithRivals } from '#engine';
 import { gatherItems } from '../../../engine/readings/candidates.ts';
 import type { Freedom } from '../../../engine/readings/candidates.ts';
-import { isFit } from '../../../engine/readings/fit.ts';
+import { isFit } from '../../../engine/readings/fitTypes.ts';
 import { scoreChoices } from '../../../engine/readings/scoring.ts';
 import type { Choice, ScoredReading, SearchTask } from '../../../engine/readings/scoring.ts';
 import { keepWithin, readingsAtMost, searchReadings } from '../../../engine/readings/search.ts';
