@@ -9,6 +9,7 @@ import type { Draft } from './draft.ts';
 import { openContent } from './files.ts';
 import type { OpenedFile } from './files.ts';
 import { pathAt } from './node.ts';
+import type { ContentNode } from './node.ts';
 import { complexRecord } from './records/complex.ts';
 import { policyOf } from './records/policy.ts';
 import { groupOf, ligandRecord, sourceRecord } from './records/small.ts';
@@ -30,20 +31,24 @@ interface ReadFile<S extends RecordSchema> {
   readonly report: Reporter;
 }
 
+/** Files that were read without a fault, by path: a file that has not changed since is not read again. */
+export type ReadMemory = Map<string, { readonly hash: string; readonly schema: RecordSchema; readonly root: ContentNode; readonly draft: unknown }>;
+
 /**
  * Reads every file of a content folder and checks all records.
  * A collection without complexes is legal. Never throws for what stands in the folder.
  * @param directory the content folder; `file` of a fault is the path within it
+ * @param memory what earlier calls in this process read, for a command that reads the same folder again and again
  * @returns the collection where there is no fault, else all faults by file, line and column
  */
-export function readCollection(directory: string): ReadResult {
+export function readCollection(directory: string, memory: ReadMemory | null = null): ReadResult {
   const content = openContent(directory);
   const faults: Fault[] = [...content.faults];
-  const ligands = content.records.ligands.map((opened) => readFile(ligandSchema, opened));
-  const sources = content.records.sources.map((opened) => readFile(sourceSchema, opened));
-  const complexes = content.records.complexes.map((opened) => readFile(complexSchema, opened));
-  const group = content.group === null ? null : readFile(groupSchema, content.group);
-  const policyFile = content.policy === null ? null : readFile(policySchema, content.policy);
+  const ligands = content.records.ligands.map((opened) => readFile(ligandSchema, opened, memory));
+  const sources = content.records.sources.map((opened) => readFile(sourceSchema, opened, memory));
+  const complexes = content.records.complexes.map((opened) => readFile(complexSchema, opened, memory));
+  const group = content.group === null ? null : readFile(groupSchema, content.group, memory);
+  const policyFile = content.policy === null ? null : readFile(policySchema, content.policy, memory);
   if (group === null && content.present && !faults.some((fault) => fault.file === 'group.yaml')) faults.push(noGroup);
 
   for (const { draft, report } of ligands) checkLigand(draft, report);
@@ -96,7 +101,9 @@ function whole<S extends RecordSchema>(read: ReadFile<S>): z.output<S> {
   return read.draft as unknown as z.output<S>;
 }
 
-function readFile<S extends RecordSchema>(schema: S, opened: OpenedFile): ReadFile<S> {
+function readFile<S extends RecordSchema>(schema: S, opened: OpenedFile, memory: ReadMemory | null): ReadFile<S> {
+  const known = memory?.get(opened.file);
+  if (known?.hash === opened.hash && known.schema === schema) return { opened, draft: known.draft as Draft<S>, report: createReporter(opened.file, known.root) };
   const { root, faults } = readYaml(opened.text);
   const report = createReporter(opened.file, root);
   for (const { place, finding, path } of faults.slice(0, mostFaults + 1)) report.atPlace(place, path ?? (root === null ? [] : pathAt(root, place)), finding);
@@ -104,5 +111,7 @@ function readFile<S extends RecordSchema>(schema: S, opened: OpenedFile): ReadFi
     if (faults.length === 0) report.at([], { code: 'FILE_EMPTY', found: 'a file without any field', expected: 'a record', mend: 'type the record, or delete the file' });
     return { opened, draft: undefined as unknown as Draft<S>, report };
   }
-  return { opened, draft: readDraft(schema, root, report) as unknown as Draft<S>, report };
+  const draft = readDraft(schema, root, report) as unknown as Draft<S>;
+  if (report.faults.length === 0) memory?.set(opened.file, { hash: opened.hash, schema, root, draft });
+  return { opened, draft, report };
 }

@@ -1,5 +1,6 @@
 import type { Reading, Verdict } from '#engine';
 import { holdContent, stampContent } from '../content/stamp.ts';
+import type { ReadMemory } from '../content/readCollection.ts';
 import type { Collection, Fault } from '../content/types.ts';
 import { readContent } from '../release/readContent.ts';
 import { historyRows } from '../release/rows.ts';
@@ -22,6 +23,8 @@ export interface RefitOrder {
   readonly database: string;
   /** Cache file, or null for a cold run that leaves no cache. */
   readonly cache: string | null;
+  /** Records that this process has read before. */
+  readonly memory?: ReadMemory;
   readonly progress?: (done: number, of: number) => void;
 }
 
@@ -45,7 +48,7 @@ export type RefitResult =
  */
 export function refit(order: RefitOrder): RefitResult {
   const stamp = stampContent(order.content);
-  const { collection, history, faults, filesRead } = readContent(order.content);
+  const { collection, history, faults, filesRead } = readContent(order.content, order.memory ?? null);
   if (collection === null) return { ok: false, faults, records: filesRead };
   const { refit: done, tables } = refitCollection(collection, history, filesRead, order);
   holdContent(order.content, stamp);

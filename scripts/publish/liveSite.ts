@@ -1,3 +1,4 @@
+import { join } from 'node:path';
 import type { Plugin, ViteDevServer } from 'vite';
 import type { Address } from './address.ts';
 import { misleading, projectFolder, siteSettings } from './pages.ts';
@@ -37,10 +38,12 @@ function setEnvironment(settings: Readonly<Record<string, string>>): void {
   Object.assign(process.env, settings);
 }
 
-// The site's data modules read the database when they are loaded: forgetting every loaded module makes the next page read it anew.
+// The site's own modules keep what they made of the database: forgetting them makes the next page read it anew. The engine and the
+// libraries keep nothing of it, and loading them again would take most of the time.
 function reloadAll(server: ViteDevServer): void {
+  const own = join(projectFolder, 'site');
   for (const environment of Object.values(server.environments)) {
-    environment.moduleGraph.invalidateAll();
+    for (const module of environment.moduleGraph.idToModuleMap.values()) if (module.file?.startsWith(own) !== false) environment.moduleGraph.invalidateModule(module);
     environment.hot.send({ type: 'full-reload', path: '*' });
   }
 }

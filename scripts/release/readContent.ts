@@ -1,4 +1,5 @@
 import { readCollection } from '../content/readCollection.ts';
+import type { ReadMemory } from '../content/readCollection.ts';
 import { sortedFaults } from '../content/report.ts';
 import type { Collection, Fault } from '../content/types.ts';
 import { permanenceFaults } from './permanence.ts';
@@ -15,8 +16,8 @@ export interface Content {
 }
 
 /** Reads a content folder with its releases, and holds the one against the other. Never throws for what stands in the folder. */
-export function readContent(directory: string): Content {
-  const { collection, faults, filesRead } = readCollection(directory);
+export function readContent(directory: string, memory: ReadMemory | null = null): Content {
+  const { collection, faults, filesRead } = readCollection(directory, memory);
   const read = readHistory(directory);
   const found = [...faults, ...read.faults];
   const all = found.length > 0 || collection === null ? found : permanenceFaults(read.history, collection);

@@ -1,6 +1,7 @@
 import { spawn } from 'node:child_process';
 import type { ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
+import { writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
@@ -58,6 +59,15 @@ describe('dev', { timeout: 60_000 }, () => {
     changeChromium('21610(60) cm-1');
     await until(() => (/\(1 fitted now, 3 unchanged\)/.test(said) ? true : null));
     await until(async () => ((await page('complexes/cr-am6/')).includes('21610(60) cm-1') ? true : null));
+  });
+
+  it('gives a new record a page, and draws its figure files anew', async () => {
+    const type = (position: string): void => writeFileSync(join(content, 'complexes', 'cr-new.yaml'), sampleFile('complexes/cr-am6.yaml').replace('21550(60) cm-1', position));
+    type('21710(60) cm-1');
+    await until(async () => ((await page('complexes/cr-new/')).includes('21710(60) cm-1') ? true : null));
+    expect(await page('complexes/cr-new/aq-295-strip.svg')).toMatch(/<svg[\s\S]*21.710/u);
+    type('22710(60) cm-1');
+    await until(async () => (/22.710/u.test(await page('complexes/cr-new/aq-295-strip.svg')) ? true : null));
   });
 
   it('prints a fault with its place and keeps the last good results', async () => {
