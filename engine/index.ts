@@ -138,3 +138,7 @@ export type { FormulaOptions } from './formula/parse.ts';
 export type { FormulaMatch, MatchKind, NormalisedQuery, QueryWord } from './formula/search.ts';
 export { folded, nameWords, squeezed } from './formula/words.ts';
 export type { Formula, FormulaCode, FormulaFault, FormulaNode, FormulaPart, TextPart } from './formula/types.ts';
+// What the bench measures the engine's own speed by
+export { symmetricEigen } from './linear/symmetricEigen.ts';
+export { shellBlocks } from './shell/blocks.ts';
+export type { Block } from './shell/blocks.ts';

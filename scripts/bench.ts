@@ -1,6 +1,6 @@
 // npm run bench: rates and ratios of this machine. Nothing here is a test.
 
-import { mkdtempSync, rmSync } from 'node:fs';
+import { mkdirSync, mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { significant } from '#engine';
@@ -9,11 +9,15 @@ import type { CommandTable } from './arguments.ts';
 import { measurePages, measureRefit, prepareCollection } from './bench/collection.ts';
 import { measureBlocks, measureReadings } from './bench/engine.ts';
 import { measureLive } from './bench/live.ts';
+import { measureShares } from './bench/parts.ts';
+import { measureSlowest, measureThreads } from './bench/records.ts';
 import { measureScale } from './bench/scale.ts';
 import { measureSeries } from './bench/series.ts';
 import { measureStartUp } from './bench/startUp.ts';
 import type { Measured } from './bench/stopwatch.ts';
+import { readCollection } from './content/readCollection.ts';
 import { exitCodes } from './exitCodes.ts';
+import { places } from './places.ts';
 import { aligned } from './report/columns.ts';
 import { runCommand, UsageError } from './runCommand.ts';
 
@@ -27,6 +31,9 @@ const table: CommandTable = {
     { name: 'json', help: 'print the numbers as JSON' },
   ],
 };
+
+/** What is read on threads; generated complexes have four measurements in three, so these are enough. */
+const atScale = { measurements: 10_000, complexes: 7_700 };
 
 await runCommand(table.name, async () => {
   const given = readArguments(table);
@@ -56,7 +63,13 @@ async function measureParts(folder: string, records: number, pages: boolean, add
   add(await measureBlocks());
   const prepared = await prepareCollection(folder, records);
   add(prepared.lines);
+  add(measureShares(folder));
   add(await measureReadings(prepared.collection));
+  const many = join(folder, 'many');
+  mkdirSync(many);
+  add(await measureThreads((await prepareCollection(many, atScale.complexes)).collection, atScale.measurements));
+  const own = readCollection(places.content).collection;
+  if (own) add(await measureSlowest(own));
   add(await measureSeries());
   add(await measureRefit(folder));
   if (pages) add(await measurePages(folder, prepared.collection));

@@ -1,6 +1,7 @@
 import { fitAssignment, freeIon, levels, ratioFor, readWithRivals, significant } from '#engine';
 import type { Assigned, Geometry, Reading } from '#engine';
 import type { Collection, MeasurementRecord } from '../content/types.ts';
+import { measureFloor } from './floor.ts';
 import { median, timed } from './stopwatch.ts';
 import type { Measured } from './stopwatch.ts';
 
@@ -30,6 +31,7 @@ export async function measureReadings(collection: Collection): Promise<Measured[
   const kinds = new Set(tasks.map(({ ion }) => `${ion.electrons} ${ion.geometry} ${ion.multiplicity}`)).size;
   const allThree = tasks.filter(({ fitted }) => fitted).length;
   return [
+    ...(await measureFloor(tasks)),
     { name: 'fits', value: fits, unit: 'a second', over: `${tasks.length} assignments of ${kinds} kinds of ion (${allThree} with C free): all branches and covariance, tables standing` },
     { name: 'readings', value: readings, unit: 'a second', over: `${records.length} measurements: search for rivals, every fit, limits, predictions, words` },
     {
@@ -39,7 +41,8 @@ export async function measureReadings(collection: Collection): Promise<Measured[
   ];
 }
 
-interface Task {
+/** The chosen assignment of a measurement. */
+export interface Task {
   readonly ion: { readonly electrons: number; readonly geometry: Geometry; readonly multiplicity: number };
   readonly assigned: readonly Assigned[];
   readonly record: MeasurementRecord;

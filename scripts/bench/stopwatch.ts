@@ -13,6 +13,14 @@ export function median(values: readonly number[]): number {
   return middle;
 }
 
+/** The middle time of three passes after one to warm up, in milliseconds. */
+export async function middleTime(work: () => void): Promise<number> {
+  work();
+  const passes: number[] = [];
+  while (passes.length < 3) passes.push((await timed(work)).milliseconds);
+  return median(passes);
+}
+
 /** One measured line of the bench. */
 export interface Measured {
   readonly name: string;
