@@ -107,7 +107,7 @@ test('a column sorts by value up and down with what is withheld last, and a thir
   await page.context().close();
 });
 
-test('by keyboard alone: search, filter, sort, and the rows shown saved as CSV and JSON', async () => {
+test('by keyboard alone: search, filter, sort, the rows shown saved as CSV and JSON, and two complexes compared', async () => {
   const { page, trouble } = await watchedPage(browser, site, { acceptDownloads: true });
   await page.goto(site.address);
   const focused = () => page.evaluate(() => (document.activeElement?.textContent ?? '') + (document.activeElement?.getAttribute('value') ?? ''));
@@ -140,6 +140,19 @@ test('by keyboard alone: search, filter, sort, and the rows shown saved as CSV a
     expect(text).not.toContain('cr-am6');
     if (kind === 'JSON') expect((JSON.parse(text) as { results: unknown[] }).results).toHaveLength(2);
   }
+  await page.goto(site.address);
+  await tabTo(/^Compare$/);
+  await page.keyboard.press('Enter');
+  await page.waitForURL('**/compare/');
+  for (const [query, picked] of [['Ni(NH3)6', 1], ['Ni(H2O)6', 2]] as const) {
+    while (await page.evaluate(() => document.activeElement?.id) !== 'pick') await page.keyboard.press('Tab');
+    await page.keyboard.type(query);
+    await expect.poll(() => page.locator('[data-place=offers] button').count()).toBeGreaterThan(0);
+    await page.keyboard.press('Tab');
+    await page.keyboard.press('Enter');
+    await expect.poll(() => page.getByRole('status').first().textContent()).toBe(`${picked} picked.`);
+  }
+  await expect.poll(() => page.locator('[data-place=answer] table').count()).toBeGreaterThan(0);
   expect(trouble).toEqual([]);
   await page.context().close();
 });
