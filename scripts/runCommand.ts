@@ -30,6 +30,7 @@ const reasons: Readonly<Record<string, string>> = {
   EROFS: 'the disk can only be read',
   EADDRINUSE: 'the port is in use; choose another with --port',
   ENOTDIR: 'a part of the path is a file, not a folder',
+  EEXIST: 'a part of the path is a file, not a folder',
   EISDIR: 'there is a folder where a file should be',
 };
 

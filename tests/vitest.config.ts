@@ -13,6 +13,8 @@ export default defineConfig({
     // A test left focused would hide the others.
     allowOnly: false,
     globalSetup: ['tests/run/folder.ts'],
+    // By itself the runner would leave one processor idle.
+    maxWorkers: '100%',
     // Modules are evaluated once a worker: half the time, and a test that leaves something behind in a module shows up.
     isolate: false,
     testTimeout: 60_000,

@@ -95,8 +95,9 @@ describe('a build', { timeout: 120_000 }, () => {
     const words = ['--content', sampleContent(), '--database', join(place, 'c.sqlite'), '--out', join(place, 'file', 'site')];
     const failed = runScript('build', words, { BANDSTEAD_CACHE: second.path });
     expect(failed.code).toBe(3);
-    expect(failed.stderr).toMatch(/^npm run build failed: .*\n$/);
-    expect(readdirSync(place).sort()).toEqual(['c.sqlite', 'file']);
+    expect(failed.stderr).toMatch(/^npm run build failed: a part of the path is a file, not a folder: .*\n$/);
+    // Found before anything is fitted: no database without its site.
+    expect(readdirSync(place)).toEqual(['file']);
   });
 
   it('of a collection without complexes makes a site and names the next step; --json says it to a program', () => {
