@@ -1,7 +1,8 @@
 import { spawn } from 'node:child_process';
-import { readdirSync } from 'node:fs';
+import { cpSync, mkdirSync, readdirSync, renameSync, rmSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
-import { join } from 'node:path';
+import { dirname, isAbsolute, join, relative } from 'node:path';
+import { besideTarget, removeLitter } from '../litter.ts';
 import type { Address } from './address.ts';
 
 /** The folder of the software itself: where the site's sources and its page builder are found, wherever the user stands. */
@@ -19,10 +20,40 @@ export function siteSettings(databaseFile: string, { origin, base }: Address, ou
   };
 }
 
-/** Builds the pages into `out`. Throws with what the page builder said where it fails. */
+/**
+ * Builds the pages into `out`. Throws with what the page builder said where it fails.
+ *
+ * The page builder keeps its bundles within a target inside the project, and in one common place for every target outside it, where
+ * two builds at once would mix: a target outside is made inside first and then moved.
+ */
 export async function buildPages(databaseFile: string, address: Address, out: string): Promise<void> {
+  const away = relative(projectFolder, out);
+  if (!away.startsWith('..') && !isAbsolute(away)) return buildInside(databaseFile, address, out);
+  const target = join(projectFolder, '.cache', 'pages');
+  mkdirSync(dirname(target), { recursive: true });
+  removeLitter(target);
+  const made = besideTarget(target, 'new');
+  try {
+    await buildInside(databaseFile, address, made);
+    move(made, out);
+  } finally {
+    rmSync(made, { recursive: true, force: true });
+  }
+}
+
+async function buildInside(databaseFile: string, address: Address, out: string): Promise<void> {
   const { code, said } = await run(['build', '--silent'], siteSettings(databaseFile, address, out));
   if (code !== 0) throw new Error(`the pages could not be built:\n${said.trim() === '' ? `the page builder ended with code ${code}` : said.trim()}`);
+}
+
+/** A rename, or a copy where the two folders are on different disks. */
+function move(from: string, to: string): void {
+  try {
+    renameSync(from, to);
+  } catch (error) {
+    if (!(error instanceof Error && 'code' in error && error.code === 'EXDEV')) throw error;
+    cpSync(from, to, { recursive: true });
+  }
 }
 
 /** How many pages (HTML files) a folder holds. */
