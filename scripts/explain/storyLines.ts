@@ -1,7 +1,6 @@
-import { concise, conciseTwoSided, evidenceWords, plain, policyId, shownLabel, significant, wavelengthShown } from '#engine';
+import { concise, conciseTwoSided, evidenceWords, plain, policyId, shownLabel, significant, spinName, wavelengthShown } from '#engine';
 import type { Band, HazardCaution, Parameter, Reading } from '#engine';
 import type { ComplexRecord, MeasurementRecord } from '../content/types.ts';
-import { spinWord } from '../database/rows/spin.ts';
 import { aligned } from '../report/columns.ts';
 import { stressLines } from './stressLines.ts';
 
@@ -61,13 +60,13 @@ function verdictLine({ verdict, reason }: Reading): string {
 }
 
 function identity(complex: ComplexRecord, measurement: MeasurementRecord, reading: Reading): string[][] {
-  const spin = spinWord(reading.multiplicity ?? complex.multiplicity);
+  const multiplicity = reading.multiplicity ?? complex.multiplicity;
   const { engine } = measurement;
   const source = measurement.cite === null
     ? [measurement.notebook, measurement.by, measurement.date].filter((part) => part !== null).join('; ')
     : [measurement.cite, measurement.where].filter((part) => part !== null).join(', ');
   return [
-    ['ion', `${complex.ion.name}, d${complex.ion.electrons}, ${complex.geometryName}${spin === null ? '' : `, ${spin}`}${complex.spinAssumed ? ' (spin assumed)' : ''}`],
+    ['ion', `${complex.ion.name}, d${complex.ion.electrons}, ${complex.geometryName}${multiplicity === null ? '' : `, ${spinName(multiplicity)}`}${complex.spinAssumed ? ' (spin assumed)' : ''}`],
     ['sample', measurement.sample ?? 'not recorded'],
     ['conditions', `${engine.phase}, ${measurement.medium ?? 'medium not recorded'}, ${measurement.temperatureTyped ?? 'temperature not recorded'}, ${engine.technique ?? 'technique not recorded'}`],
     ['source', source === '' ? 'not recorded' : source],

@@ -1,6 +1,5 @@
-import { defaultPolicy, plain, shownLabel, significant, wavelengthShown } from '#engine';
+import { defaultPolicy, plain, shownLabel, significant, spinName, wavelengthShown } from '#engine';
 import type { Geometry, Ion } from '#engine';
-import { spinWord } from '../database/rows/spin.ts';
 import { aligned } from '../report/columns.ts';
 import type { PredictedTransition, Prediction } from './prediction.ts';
 
@@ -26,7 +25,7 @@ export function predictionLines(asked: Asked, prediction: Prediction): string[] 
   return [
     `${ion.name}, d${electrons}, ${geometry}: Delta ${plain(delta, 0)}, B ${plain(racahB, 0)}, C ${plain(racahC, 0)} cm-1` +
       (racahB > 0 ? `; Delta/B ${significant(delta / racahB, 4)}` : ''),
-    `Ground level ${shownLabel(prediction.ground, electrons)} (${spinWord(prediction.multiplicity)})`,
+    `Ground level ${shownLabel(prediction.ground, electrons)} (${spinName(prediction.multiplicity)})`,
     `Assumed: ${assumed.length === 0 ? 'nothing' : assumed.join('; ')}`,
     ...(prediction.lowest === prediction.ground ? [] : [
       `Note: at these parameters ${shownLabel(prediction.lowest, electrons)} lies below the declared ground level.`,

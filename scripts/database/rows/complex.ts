@@ -1,9 +1,8 @@
-import { policyId } from '#engine';
+import { policyId, spinName } from '#engine';
 import type { Band, HazardCaution, Range } from '#engine';
 import type { BandRecord, ComplexRecord, MeasurementRecord, QuotedRecord } from '../../content/types.ts';
 import { flag, list, mergeTables } from './row.ts';
 import type { Row, Tables } from './row.ts';
-import { spinWord } from './spin.ts';
 
 const quotedParameters = ['Delta', 'Dq', 'B', 'C', 'beta'] as const;
 
@@ -33,7 +32,7 @@ function complexRow(complex: ComplexRecord, multiplicity: number | null): Row {
     id: complex.id, file: complex.file, hash: complex.hash, formula: complex.formula, name: complex.name,
     charge: complex.charge, charge_note: complex.chargeNote,
     ion: complex.ion.name, geometry: complex.geometryName, fitted: flag(complex.geometry !== null),
-    isomer: complex.isomer, spin: spinWord(multiplicity), multiplicity, spin_typed: complex.spinTyped,
+    isomer: complex.isomer, spin: multiplicity === null ? null : spinName(multiplicity), multiplicity, spin_typed: complex.spinTyped,
     spin_assumed: flag(complex.spinAssumed), notes: complex.notes,
   };
 }
