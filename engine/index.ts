@@ -77,6 +77,7 @@ export { expectations, trendSteps } from './series/trends.ts';
 export { averageFactor, inversions } from './series/inversions.ts';
 export { kendallTauB, rankAgreement } from './series/rankAgreement.ts';
 export { planeCorrelation, planePoints } from './series/correlation.ts';
+export { seededRandom } from './series/random.ts';
 export type { Expectation, TrendKind, TrendStep } from './series/trends.ts';
 export type { Inversion } from './series/inversions.ts';
 export type { PlaneCorrelation, PlanePoint } from './series/correlation.ts';

@@ -1,5 +1,7 @@
-/** Seeded random numbers for resampling: the same seed gives the same numbers in every run. */
+/** Seeded random numbers: the same seed gives the same numbers in every run. */
 export interface Random {
+  /** Uniform in [0, 1). */
+  readonly uniform: () => number;
   /** Normal with mean 0 and standard deviation 1. */
   readonly normal: () => number;
 }
@@ -20,7 +22,7 @@ export function seededRandom(seed: number): Random {
     mixed ^= mixed >>> 16;
     return (mixed >>> 0) / 0x100000000;
   };
-  return { normal: () => Math.sqrt(-2 * Math.log(1 - uniform())) * Math.cos(2 * Math.PI * uniform()) };
+  return { uniform, normal: () => Math.sqrt(-2 * Math.log(1 - uniform())) * Math.cos(2 * Math.PI * uniform()) };
 }
 
 /** The value below which a share of the sorted numbers lies, by linear interpolation between neighbours. */

@@ -1,5 +1,7 @@
 // Seeded random numbers: the same seed and key give the same numbers on every machine.
 
+import { seededRandom } from '#engine';
+
 export interface Random {
   /** Uniform in [low, high). */
   readonly between: (low: number, high: number) => number;
@@ -17,30 +19,21 @@ export interface Random {
  * A stream of random numbers for one purpose. Streams of different keys do not disturb one another, so that a record
  * keeps its numbers when another record is added.
  *
- * Method: 32-bit FNV-1a of seed and key starts a 32-bit Weyl sequence with the finaliser of MurmurHash3; normal numbers
- * by the polar-free form of Box and Muller, Ann. Math. Stat. 29, 610 (1958).
+ * Method: 32-bit FNV-1a of seed and key is the seed of the engine's own numbers.
  */
 export function randomFrom(seed: number, key: string): Random {
   let state = 0x811c9dc5;
   for (const letter of `${seed}:${key}`) state = Math.imul(state ^ letter.codePointAt(0)!, 0x01000193);
-  const next = (): number => {
-    state = (state + 0x9e3779b9) | 0;
-    let mixed = state ^ (state >>> 16);
-    mixed = Math.imul(mixed, 0x85ebca6b);
-    mixed ^= mixed >>> 13;
-    mixed = Math.imul(mixed, 0xc2b2ae35);
-    mixed ^= mixed >>> 16;
-    return (mixed >>> 0) / 0x100000000;
-  };
-  const between = (low: number, high: number): number => low + (high - low) * next();
+  const { uniform, normal } = seededRandom(state);
+  const between = (low: number, high: number): number => low + (high - low) * uniform();
   return {
     between,
-    normal: (mean, deviation) => mean + deviation * Math.sqrt(-2 * Math.log(1 - next())) * Math.cos(2 * Math.PI * next()),
+    normal: (mean, deviation) => mean + deviation * normal(),
     logBetween: (low, high) => Math.exp(between(Math.log(low), Math.log(high))),
-    chance: (probability) => next() < probability,
+    chance: (probability) => uniform() < probability,
     pick: (list) => {
       if (list.length === 0) throw new RangeError('pick: an empty list');
-      return list[Math.floor(next() * list.length)]!;
+      return list[Math.floor(uniform() * list.length)]!;
     },
     whole: (low, high) => Math.floor(between(low, high + 1)),
   };
