@@ -1,6 +1,6 @@
 import type { FactorComplex, FactorFit, FactorKind } from './factorTypes.ts';
 import { donorAtoms, ionKey, onlyLigand } from './identity.ts';
-import { predictFromFactors } from './predictFromFactors.ts';
+import { possiblePrediction, predictFromFactors } from './predictFromFactors.ts';
 import type { Predicted } from './predictFromFactors.ts';
 import type { ComplexIdentity } from './types.ts';
 
@@ -37,7 +37,7 @@ export function factorMap(fit: FactorFit): FactorMap {
     ions, ligands,
     rows: ions.map((ion) => ligands.map((ligand): MapCell => {
       const own = found.get(`${ion} | ${ligand}`) ?? null;
-      return { ion, ligand, found: own, predicted: own === null ? predictFromFactors(fit, withOnly(complexOf.get(ion)!, ligand)) : (own.leftOut ?? noOther) };
+      return { ion, ligand, found: own, predicted: own === null ? predictFromFactors(fit, withOnly(complexOf.get(ion)!, ligand)) : own.leftOut === null ? noOther : possiblePrediction(fit.parameter, own.leftOut) };
     })),
   };
 }

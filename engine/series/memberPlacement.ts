@@ -3,7 +3,7 @@ import { zOf } from './difference.ts';
 import { toModelScale } from './factorModel.ts';
 import type { FactorFit } from './factorTypes.ts';
 import { complexKey } from './identity.ts';
-import { isPrediction, predictFromFactors } from './predictFromFactors.ts';
+import { isPrediction, possiblePrediction, predictFromFactors } from './predictFromFactors.ts';
 import type { Predicted } from './predictFromFactors.ts';
 import { normalOfStudent } from './student.ts';
 import type { SeriesParameter, SeriesResult } from './types.ts';
@@ -48,7 +48,7 @@ export function memberPlacements(results: readonly SeriesResult[], fit: FactorFi
     const own = inFit.get(key);
     const factors: Predicted = own === undefined
       ? (result.complex.multiplicity === null ? { reason: 'the spin state is not declared' } : predictFromFactors(fit, result.complex))
-      : (own.leftOut ?? { reason: 'without its own data nothing fixes its factors' });
+      : own.leftOut === null ? { reason: 'without its own data nothing fixes its factors' } : possiblePrediction(fit.parameter, own.leftOut);
     return {
       result,
       placed: [

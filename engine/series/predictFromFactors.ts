@@ -5,7 +5,7 @@ import { isFixed } from './identifiable.ts';
 import { ionWords } from './identity.ts';
 import { isLoose } from './looseness.ts';
 import { effectiveDegrees } from './student.ts';
-import type { ComplexIdentity } from './types.ts';
+import type { ComplexIdentity, SeriesParameter } from './types.ts';
 
 /** A prediction, or the reason why there is none. */
 export type Predicted = FactorPrediction | { readonly reason: string };
@@ -13,10 +13,19 @@ export type Predicted = FactorPrediction | { readonly reason: string };
 export const isPrediction = (predicted: Predicted): predicted is FactorPrediction => 'predicted' in predicted;
 
 /**
+ * A prediction, unless it is a beta at or below 0: beta = 1 - k h is linear, so factors from few complexes carried far leave what a
+ * B in a complex can be. Delta, fitted by its logarithm, is always above 0.
+ */
+export function possiblePrediction<T extends FactorPrediction>(parameter: SeriesParameter, prediction: T): T | { readonly reason: string } {
+  return parameter === 'beta' && prediction.predicted <= 0 ? { reason: noFactorPrediction.notPositive } : prediction;
+}
+
+/**
  * Delta or beta of a complex from the factors of a fit, with the uncertainty of the factors (their correlations included) and of the
  * residual scatter. The complex's own measurements must not be in the fit.
  *
- * @returns the reason in words where an ion or ligand has no factor, where they stand in different islands, and where the fit leaves the product open
+ * @returns the reason in words where an ion or ligand has no factor, where they stand in different islands, where the fit
+ * leaves the product open, and where it gives a beta at or below 0
  */
 export function predictFromFactors(fit: FactorFit, complex: ComplexIdentity): Predicted {
   if (complex.geometry !== fit.geometry) return { reason: noFactorPrediction.geometry(complex.geometryName) };
@@ -39,5 +48,5 @@ export function predictFromFactors(fit: FactorFit, complex: ComplexIdentity): Pr
   if (isLoose(fit.parameter, 'prediction', Math.sqrt(variance))) return { reason: noFactorPrediction.loose };
   const scaled = fromModelScale(fit.parameter, value, Math.sqrt(variance));
   const { standing, share, spare } = fit.scatter;
-  return { predicted: scaled.value, u: scaled.u, degrees: standing === 'fitted' ? effectiveDegrees(share, spare) : null };
+  return possiblePrediction(fit.parameter, { predicted: scaled.value, u: scaled.u, degrees: standing === 'fitted' ? effectiveDegrees(share, spare) : null });
 }

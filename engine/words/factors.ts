@@ -34,6 +34,7 @@ export const noFactorPrediction = {
   islands: 'its ion and ligands stand in different islands of the collection, whose factors cannot be multiplied',
   open: 'the complexes of the collection do not fix this product of factors',
   loose: 'the complexes of the collection hardly fix this product of factors',
+  notPositive: 'the factors put beta at 0 or below, which no complex can have: carried so far, the rule does not hold',
   geometry: (geometry: string): string => `factors are fitted to octahedral and tetrahedral complexes, not to ${geometry} ones`,
 } as const;
 

@@ -1,4 +1,4 @@
-import { type FactorFit, type FactorPrediction, type Geometry, type MapCell, type Predicted, type SeriesParameter, distinguishableAbove, factorMap, isPrediction, reviewAbove } from '#engine';
+import { type FactorFit, type Geometry, type MapCell, type SeriesParameter, distinguishableAbove, factorMap, isPrediction, reviewAbove } from '#engine';
 import { csvText } from '../../scripts/export/csv.ts';
 import { type MapMark, mapFigure } from '../charts/mapFigure.ts';
 import { ionWithoutGeometry } from './factorNames.ts';
@@ -36,7 +36,7 @@ function shownMap(tree: CollectionTree, fit: FactorFit): MapShown {
   const title = `${parameter === 'Delta' ? 'Δ' : 'β'} of ${geometry} complexes with one kind of ligand`;
   const cells = rows.flat();
   const found = cells.filter((cell) => cell.found !== null).length;
-  const predicted = cells.filter((cell) => cell.found === null && isPossible(cell.predicted)).length;
+  const predicted = cells.filter((cell) => cell.found === null && isPrediction(cell.predicted)).length;
   const parts = inParts(ligands, COLUMNS);
   return {
     parameter, geometry,
@@ -50,7 +50,7 @@ function shownMap(tree: CollectionTree, fit: FactorFit): MapShown {
           id: own, title: ownTitle, description: `${ions.length} ions in rows, ${columns.length} ligands in columns, each in the order of its factor. The numbers stand in the table under the figure.`,
         }),
         caption: [
-          `${parameter === 'Delta' ? 'In 1000 cm⁻¹. ' : ''}Framed: measured, n = ${found}. Slanted: not measured, predicted by the factors of the collection, ${predicted}. Dot: neither, ${cells.length - found - predicted}.`,
+          `${parameter === 'Delta' ? 'In 1000 cm⁻¹. ' : ''}Framed: measured, n = ${found}. Slanted: not measured, predicted by the factors of the collection, ${predicted}. Dot: neither, ${cells.length - found - predicted}; the CSV file says why.`,
           `Triangle at the upper right: found above what the other complexes predict by more than ${distinguishableAbove} combined standard uncertainties; at the lower right: below; full: by more than ${reviewAbove}.`,
           'Ions and ligands in the order of their factors; complexes with several kinds of ligand are in the fit but have no cell. The rule knows nothing of spin: a prediction does not say that the complex would have the spin of its row.',
         ],
@@ -62,12 +62,9 @@ function shownMap(tree: CollectionTree, fit: FactorFit): MapShown {
   };
 }
 
-/** A prediction that can be a number of its kind: the rule also gives β below 0 where factors from few complexes are carried far. */
-const isPossible = (predicted: Predicted): predicted is FactorPrediction => isPrediction(predicted) && predicted.predicted > 0;
-
 function markOf({ found, predicted }: MapCell, parameter: SeriesParameter): MapMark {
   const text = (value: number): string => (parameter === 'Delta' ? plainNumber(value / 1000, 1) : plainNumber(value, 2));
-  if (found === null) return isPossible(predicted) ? { form: 'slanted', text: text(predicted.predicted), flag: null } : { form: 'dot', text: '', flag: null };
+  if (found === null) return isPrediction(predicted) ? { form: 'slanted', text: text(predicted.predicted), flag: null } : { form: 'dot', text: '', flag: null };
   return { form: 'framed', text: text(found.result.parameters[parameter].value!), flag: flagOf(found.leftOut?.z ?? 0) };
 }
 
@@ -84,7 +81,7 @@ function mapTable(tree: CollectionTree, parameter: SeriesParameter, geometry: Ge
     rows: rows.map((cells): readonly Cell[] => [
       { parts: words(ionWithoutGeometry(cells[0]!.ion, geometry)), path: ionPath(cells[0]!.ion.split(' ')[0]!) },
       ...cells.map(({ found, predicted }): Cell => {
-        if (found === null) return isPossible(predicted) ? soft(`p ${energy(predicted.predicted, predicted.u)}`) : soft(isPrediction(predicted) ? 'p below 0' : '–');
+        if (found === null) return isPrediction(predicted) ? soft(`p ${energy(predicted.predicted, predicted.u)}`) : soft('–');
         const node = nodeOf(tree, found.result);
         return { parts: words(parameterShown(node.chosen.parameters[parameter]).total.text!), path: complexPath(node.complex.row.id) };
       }),

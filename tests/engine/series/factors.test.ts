@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { fitFactors, predictFromFactors } from '#engine';
+import { factorMap, fitFactors, predictFromFactors } from '#engine';
 import type { FactorFit, SeriesParameter, SeriesResult } from '#engine';
 import { randomFrom } from '../../../scripts/generate/random.ts';
 import { identity, result, testPolicy } from './sample.ts';
@@ -183,6 +183,17 @@ describe('awkward collections', () => {
     expect(Math.abs(factor(one, 'ammine').value! / 1.4 - 1)).toBeLessThan(0.1);
     const above = fit(['aqua', 'ammine'].flatMap((ligand) => ['Cr(III)', 'V(II)'].map((ion) => planted(ion, { [ligand]: 6 }, undefined, { beta: 1.1 }))), 'beta');
     expect(factor(above, quartet('Cr(III)')).value).toBeCloseTo(-0.1, 8);
+  });
+  test('a beta that the factors put at 0 or below is refused as a prediction, with the reason; the datum itself stays', () => {
+    // k = 0.7 and h = 0.8/0.5: 1 - k h = -0.12.
+    const far = fit([['Cr(III)', 'aqua', 0.5], ['Cr(III)', 'cyanido', 0.2], ['V(II)', 'aqua', 0.3]].map(([ion, ligand, beta]) => result({ ion: ion as string, ligands: { [ligand as string]: 6 }, beta: beta as number, uBetaTotal: 0.005 })), 'beta');
+    expect(factor(far, quartet('V(II)')).value! * factor(far, 'cyanido').value!).toBeCloseTo(1.12, 6);
+    const reason = 'the factors put beta at 0 or below, which no complex can have: carried so far, the rule does not hold';
+    expect(predictFromFactors(far, identity({ ion: 'V(II)', ligands: { cyanido: 6 } }))).toEqual({ reason });
+    // Half way it is above 0 and is predicted.
+    expect(predictFromFactors(far, identity({ ion: 'V(II)', ligands: { aqua: 3, cyanido: 3 } }))).toMatchObject({ predicted: expect.closeTo(1 - 0.7 * 1.3, 6) });
+    const empty = factorMap(far).rows.flat().filter(({ found }) => found === null);
+    expect(empty.map(({ ion, ligand, predicted }) => [ion, ligand, predicted])).toEqual([[quartet('V(II)'), 'cyanido', { reason }]]);
   });
   test('all complexes equal: every f is 1, nothing scatters and nothing is far', () => {
     const one = fit(Object.keys(f).flatMap((ligand) => Object.keys(g).map((ion) => planted(ion, { [ligand]: 6 }, undefined, { delta: 20000 }))));
