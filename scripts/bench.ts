@@ -7,6 +7,7 @@ import { significant } from '#engine';
 import { readArguments } from './arguments.ts';
 import type { CommandTable } from './arguments.ts';
 import { measurePages, measureRefit, prepareCollection } from './bench/collection.ts';
+import { measureCompare } from './bench/compare.ts';
 import { measureBlocks, measureReadings } from './bench/engine.ts';
 import { measureLive } from './bench/live.ts';
 import { measureShares } from './bench/parts.ts';
@@ -72,6 +73,7 @@ async function measureParts(folder: string, records: number, pages: boolean, add
   if (own) add(await measureSlowest(own));
   add(await measureSeries());
   add(await measureRefit(folder));
+  add(await measureCompare(folder, records));
   if (pages) add(await measurePages(folder, prepared.collection));
   if (pages) add(await measureLive(folder, records));
   add(await measureStartUp());
