@@ -60,7 +60,7 @@ function predictionTable({ predictions }: Placement): Table {
 
 function nearestTable({ nearest }: Placement, abbreviations: readonly string[]): Table {
   return {
-    caption: 'Nearest earlier complexes in Δ/g and β', columns: [rowColumn('Complex'), column('Kind'), quantity('Δ/g', 'cm-1'), quantity('β', null), longColumn('What differs')],
+    caption: 'Nearest earlier complexes in Δ/g and β', columns: [rowColumn('Complex'), column('Kind'), quantity('Δ/g', null), quantity('β', null), longColumn('What differs')],
     rows: nearest.complexes.map(({ result, deltaOverG, beta, differs }): readonly Cell[] => [
       { parts: formulaShown(result.complex.formula, result.complex.isomer, abbreviations).parts, path: `${complexPath(result.complex.id)}#${result.measurement}` }, ionWords(result.complex),
       figures(deltaOverG, 3), beta === null ? soft('withheld') : plainNumber(beta, 2), differs.join('; '),

@@ -6,7 +6,7 @@ import { readCollection } from '../../../scripts/content/readCollection.ts';
 import { places } from '../../../scripts/places.ts';
 import { type PackedCollection, unpackCollection } from '../../../site/client/compare/compareData.ts';
 import { readForm } from '../../../site/client/compare/readForm.ts';
-import { createPlacer } from '../../../site/client/compare/placing.ts';
+import { createPlacer, placementMarkup } from '../../../site/client/compare/placing.ts';
 import { createReader } from '../../../site/client/compare/reckon.ts';
 import { formOfQuery, formOfRecord, formQuery } from '../../../site/client/compare/typedForm.ts';
 import { comparedCollection, comparedComplex } from '../../../site/data/compare.ts';
@@ -52,4 +52,12 @@ test('every measurement of the collection, opened to be read otherwise, is read 
     compared += 1;
   }
   expect(compared).toBeGreaterThan(60);
+});
+
+test('Delta/g is a bare ratio: no unit stands at its head', () => {
+  const stored = readStoredCollection(demonstration);
+  const record = readCollection(places.content).collection!.complexes.find(({ id }) => id === 'cr-am6')!;
+  const html = placementMarkup(placeRecord(record, stored).measurements[0]!.placement, []);
+  const heads = [...html.slice(html.indexOf('Nearest earlier complexes')).matchAll(/<th scope="col"[^>]*>(.*?)<\/th>/g)].map(([, head]) => head!.replaceAll(/<[^>]+>/g, ''));
+  expect(heads).toEqual(['Complex', 'Kind', 'Δ/g', 'β', 'What differs']);
 });
