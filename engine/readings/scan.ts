@@ -37,7 +37,8 @@ export function minimaOnCurve(table: LevelTable, ion: GroundCase, labels: readon
       const i = turn.cell;
       const s = rootOfRising((fraction) => slopeInCell(curve, i, fraction), turn);
       const exact = correct(table, evaluator, segment.ground, targets, columns.weights !== null, (i + s) * table.step, curvatureInCell(curve, i, s));
-      if (exact && isLowest(table, ion, segment.ground, exact.t)) found.push(exact);
+      // The outermost cells are not scanned: a step that leads there leads to an end, which is no solution.
+      if (exact && exact.t > table.step / 2 && exact.t < Math.PI / 2 - table.step / 2 && isLowest(table, ion, segment.ground, exact.t)) found.push(exact);
     }
   }
   return found.sort((a, b) => a.chi2 - b.chi2);
