@@ -23,10 +23,14 @@ export function pageScriptBytes(site: ServedSite, html: string): number {
   return weight(folderOf(site), seen);
 }
 
-/** Bytes of script, compressed, that a part of a page fetches when it is asked for, all that it needs counted. */
-export function partScriptBytes(site: ServedSite, part: string): number {
+/** Bytes of script, compressed, that parts of a page fetch together when they are asked for, all that they need counted once. */
+export function partScriptBytes(site: ServedSite, ...parts: readonly string[]): number {
   const folder = folderOf(site);
-  const name = readdirSync(folder).find((one) => one.startsWith(`${part}.`) && one.endsWith('.js'));
-  if (name === undefined) throw new Error(`no script ${part}`);
-  return weight(folder, reached(folder, name, new Set()));
+  const seen = new Set<string>();
+  for (const part of parts) {
+    const name = readdirSync(folder).find((one) => one.startsWith(`${part}.`) && one.endsWith('.js'));
+    if (name === undefined) throw new Error(`no script ${part}`);
+    reached(folder, name, seen);
+  }
+  return weight(folder, seen);
 }

@@ -5,9 +5,9 @@ import { fetchJson } from '../page/fetchJson.ts';
 import type { ComparedComplex, ComparedMeasurement, PackedCollection } from './compareData.ts';
 import { formFields } from './formFields.ts';
 import { type ReadForm, readForm } from './readForm.ts';
-import { readingMarkup, readingStatus } from './readingMarkup.ts';
 import type { Placer } from './placing.ts';
-import { createReader } from './reckon.ts';
+import { readingMarkup, readingStatus } from './readingMarkup.ts';
+import type { Reader } from './reckon.ts';
 import { type TypedForm, emptyForm, formOfQuery, formOfRecord, formQuery, holdsForm, recordOfForm } from './typedForm.ts';
 
 /** The measurement whose bands are read otherwise. */
@@ -20,13 +20,15 @@ interface Original {
 /** How long typing must rest before the place is looked for, and the address written, ms. */
 const REST = 180;
 
+const notFetched = (what: string, error: unknown): string => `${what} could not be loaded (${error instanceof Error ? error.message : 'unknown reason'}). Reload the page to try again.`;
+
 /** Starts the part where bands are typed: the engine reads them at every keystroke, and places them when typing rests. */
 export async function startTyped(part: HTMLElement): Promise<void> {
   const form = part.querySelector('form')!;
   const places = Object.fromEntries(['status', 'reading', 'placement', 'record', 'about'].map((name) => [name, part.querySelector<HTMLElement>(`[data-place=${name}]`)!])) as Record<'status' | 'reading' | 'placement' | 'record' | 'about', HTMLElement>;
   const fields = formFields(form);
   const [packed, original] = await Promise.all([fetchJson<PackedCollection>('data/compare.json'), fetchOriginal()]);
-  const readMeasurement = createReader(packed);
+  let readMeasurement: Reader | null = null;
   let place: Placer | null = null;
   const abbreviations = packed.ligands.flatMap(({ abbreviation }) => abbreviation ?? []);
   let resting: ReturnType<typeof setTimeout> | undefined;
@@ -48,15 +50,33 @@ export async function startTyped(part: HTMLElement): Promise<void> {
       resting = setTimeout(() => writeAddress(typed), REST);
       return;
     }
+    if (readMeasurement === null) {
+      places.status.textContent = 'The engine is on its way.';
+      fetchReader();
+      return;
+    }
     const result = readMeasurement(measurement);
     places.status.textContent = readingStatus(result.chosen);
     places.reading.innerHTML = readingMarkup(result, measurement, original?.published ?? null);
     resting = setTimeout(() => {
       writeAddress(typed);
       showPlace(typed, read, result.chosen).catch((error: unknown) => {
-        places.placement.textContent = `The place could not be worked out (${error instanceof Error ? error.message : 'unknown reason'}). Reload the page to try again.`;
+        places.placement.textContent = notFetched('The place', error);
       });
     }, REST);
+  };
+
+  let fetching = false;
+  const fetchReader = (): void => {
+    if (fetching) return;
+    fetching = true;
+    import('./reckon.ts').then(({ createReader }) => {
+      readMeasurement = createReader(packed);
+      show();
+    }).catch((error: unknown) => {
+      fetching = false;
+      places.status.textContent = notFetched('The engine', error);
+    });
   };
 
   const showPlace = async (typed: TypedForm, read: ReadForm, reading: Reading): Promise<void> => {
