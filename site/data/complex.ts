@@ -32,8 +32,8 @@ export interface MeasurementShown {
   readonly meaning: MeasurementMeaning;
   readonly sure: MeasurementSure;
   readonly rivals: Rivals | null;
-  /** The compare page opened with these bands; null where the engine does not fit the geometry. */
-  readonly otherwise: string | null;
+  /** The compare page opened with these bands. */
+  readonly otherwise: string;
   readonly origin: Origin;
   readonly notes: string | null;
 }
@@ -155,7 +155,7 @@ function measurementShown(tree: CollectionTree, measurement: MeasurementNode): M
     id: row.id, heading: conditions(measurement), sample: row.sample, notes: row.notes,
     read: measurementRead(measurement, row.id), meaning: measurementMeaning(measurement, row.id),
     sure: measurementSure(measurement), rivals: measurementRivals(measurement, row.id),
-    otherwise: measurement.complex.row.fitted === 1 && measurement.bands.length > 0 ? otherwisePath(row.complex, row.id) : null,
+    otherwise: otherwisePath(row.complex, row.id),
     origin: measurementOrigin(tree, measurement),
   };
 }

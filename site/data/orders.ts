@@ -29,7 +29,7 @@ export function ordersPage(tree: CollectionTree): OrdersPage {
       return {
         sentence: sentenceShown(pairs === 0
           ? `${parameter}: no ion has two comparable complexes whose ligands all have factors.`
-          : `${parameter}: ${counted(pairs, 'pair')} of complexes of one ion, ${found} the other way round than the factors have it; ${rows.length} of these beyond two standard uncertainties of their difference, ${found - rows.length} not distinguishable.`),
+          : `${parameter}: ${counted(pairs, 'pair')} of complexes of one ion, ${found} the other way round than the factors have it; ${rows.length} of these beyond two standard uncertainties of their difference, ${found - rows.length} not distinguishable. ${rows.length === 0 ? '' : `The factors’ order is itself beyond two standard uncertainties for ${rows.filter(({ distinguishable }) => distinguishable).length} of those ${rows.length}: only these contradict it.`}`.trim()),
         table: rows.length === 0 ? null : inversionTable(tree, rows, parameter), more: moreInversions(rows),
       };
     }),

@@ -46,6 +46,22 @@ describe('inversions against the pooled order', () => {
     expect(found[0]!.difference).toMatchObject({ value: 500, distinguishable: true });
     expect(found[0]!.difference.z).toBeCloseTo(500 / Math.hypot(60, 60, 50), 9);
     expect(found[0]!.pooled).toBeGreaterThan(0);
+    expect(found[0]).toMatchObject({ z: Math.min(found[0]!.difference.z, found[0]!.zPooled), distinguishable: found[0]!.difference.z > 2 && found[0]!.zPooled > 2 });
+  });
+  test('the pooled order carries the uncertainty of its factors, as redrawn factors spread it', () => {
+    const odd = [...regular.filter(({ complex }) => complex.ion.name !== 'V(II)'), ...[[{ fluorido: 6 }, 12500], [{ aqua: 4, ammine: 2 }, 11800]].map(([ligands, delta]) => result({ ion: 'V(II)', ligands: ligands as Record<string, number>, delta: delta as number }))];
+    const factors = fit(odd);
+    const [pair] = inversions(seriesOf(odd), factors, testFloor);
+    const { names, values, covariance } = factors.islands[0]!.solution;
+    const free = names.flatMap(({ kind, name }, place) => (kind === 'ligand' ? [{ name, place }] : []));
+    const order = (moved: (name: string) => number): number => (4 + 2 * moved('ammine')) / 6 / moved('fluorido') - 1;
+    const at = (shift: ReadonlyMap<string, number>) => order((name) => Math.exp(values[free.find((one) => one.name === name)!.place]! + (shift.get(name) ?? 0)));
+    // Central differences of the order itself, through the covariance of the fit.
+    const slopes = free.map(({ name }) => (at(new Map([[name, 1e-5]])) - at(new Map([[name, -1e-5]]))) / 2e-5);
+    const variance = slopes.reduce((sum, a, i) => sum + slopes.reduce((inner, b, j) => inner + a * b * covariance[free[i]!.place]![free[j]!.place]!, 0), 0);
+    expect(pair!.higher.complex.ligands[0]!.ligand).toBe('fluorido');
+    expect(pair!.uPooled / Math.sqrt(variance)).toBeCloseTo(1, 6);
+    expect(pair!.uPooled).toBeGreaterThan(0);
   });
   test('a ligand without a factor takes no part', () => {
     expect(averageFactor(fit(regular), identity({ ligands: { en: 6 } }))).toBeNull();

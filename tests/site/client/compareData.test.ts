@@ -1,5 +1,7 @@
-import { beforeAll, expect, test } from 'vitest';
-import { type ComparedCollection, measurementId, policyId } from '#engine';
+import { cpSync, writeFileSync } from 'node:fs';
+import { join } from 'node:path';
+import { beforeAll, expect, inject, test } from 'vitest';
+import { type ComparedCollection, measurementId, policyId, recordText } from '#engine';
 import { readStoredCollection } from '../../../scripts/compare/collection.ts';
 import { placeRecord } from '../../../scripts/compare/place.ts';
 import { readCollection } from '../../../scripts/content/readCollection.ts';
@@ -8,7 +10,7 @@ import { type PackedCollection, unpackCollection } from '../../../site/client/co
 import { readForm } from '../../../site/client/compare/readForm.ts';
 import { createPlacer, placementMarkup } from '../../../site/client/compare/placing.ts';
 import { createReader } from '../../../site/client/compare/reckon.ts';
-import { formOfQuery, formOfRecord, formQuery } from '../../../site/client/compare/typedForm.ts';
+import { formOfQuery, formOfRecord, formQuery, recordOfForm } from '../../../site/client/compare/typedForm.ts';
 import { comparedCollection, comparedComplex } from '../../../site/data/compare.ts';
 import { readRows } from '../../../site/data/database.ts';
 import { type CollectionTree, collectionTree } from '../../../site/data/tree.ts';
@@ -52,6 +54,20 @@ test('every measurement of the collection, opened to be read otherwise, is read 
     compared += 1;
   }
   expect(compared).toBeGreaterThan(60);
+});
+
+test('a record that the page offers passes the check in content/complexes, and is the record that was typed', () => {
+  const content = join(inject('runFolder'), 'offered');
+  cpSync(places.content, content, { recursive: true });
+  const offered = tree.complexes.filter(({ measurements }) => measurements.length > 0).map((complex) => {
+    const form = formOfRecord(comparedComplex(tree, complex).typed[0]!);
+    return { id: `again-${complex.row.id}`, of: complex.row.id, text: recordText(recordOfForm({ ...form, notebook: 'VII p. 3' }, complex.row.formula, complex.measurements[0]!.row.id)) };
+  });
+  for (const { id, text } of offered) writeFileSync(join(content, 'complexes', `${id}.yaml`), text);
+  const read = readCollection(content);
+  expect(read.faults).toEqual([]);
+  const records = new Map(read.collection!.complexes.map((record) => [record.id, record]));
+  for (const { id, of } of offered) expect(records.get(id)!.measurements[0]!.engine, id).toEqual(records.get(of)!.measurements[0]!.engine);
 });
 
 test('Delta/g is a bare ratio: no unit stands at its head', () => {

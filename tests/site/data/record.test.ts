@@ -85,7 +85,7 @@ test('predictions from the rest of the collection carry z and what follows; one 
   expect(page('cr-am6').placements).toEqual({ table: null, reasons: [] });
 });
 
-test('a measurement that the engine fits can be read otherwise', () => {
+test('every measurement can be read otherwise', () => {
   expect(rivalled.otherwise).toBe('compare/?otherwise=cr-am6/aq-295');
 });
 

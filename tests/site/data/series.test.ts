@@ -152,10 +152,16 @@ describe('orders, trends and correlation', () => {
     const page = ordersPage(tree);
     const z = page.inversions[0]!.table!.rows.map((row) => Number(row[4]));
     expect(z.every((value) => value >= 2)).toBe(true);
-    expect(z).toEqual([...z].sort((a, b) => b - a));
+    const surest = page.inversions[0]!.table!.rows.map((row) => Math.min(Number(row[4]), Number(row.at(-1))));
+    expect(surest).toEqual([...surest].sort((a, b) => b - a));
     const file = numberFiles(tree).find(({ id }) => id === 'inversions')!.csv.trimEnd().split('\r\n').slice(1);
-    expect(file.filter((line) => line.startsWith('Delta') && line.endsWith(',1')).length).toBe(z.length);
-    expect(file.some((line) => line.endsWith(',0'))).toBe(true);
+    const fields = file.filter((line) => line.startsWith('Delta')).map((line) => line.split(',').slice(-6).map(Number));
+    expect(fields.filter(([differenceZ]) => differenceZ! > 2).length).toBe(z.length);
+    for (const [differenceZ, pooled, u, pooledZ, least, sure] of fields) {
+      expect(pooledZ).toBeCloseTo(pooled! / u!, 9);
+      expect(least).toBe(Math.min(differenceZ!, pooledZ!));
+      expect(sure).toBe(least! > 2 ? 1 : 0);
+    }
   });
   test('each trend counts its steps and names the records that break it', () => {
     for (const { counts, against, figure } of ordersPage(tree).trends) {
