@@ -19,5 +19,7 @@ export default defineConfig({
     isolate: false,
     testTimeout: 60_000,
     hookTimeout: 180_000,
+    // What a page shows after scripts are fetched may take long on a busy machine.
+    expect: { poll: { timeout: 20_000 } },
   },
 });
