@@ -25,8 +25,12 @@ export function problemsUnderOwn(schema: object, value: unknown): readonly strin
   return problems(new Ajv2020({ allErrors: true, strict: false, validateFormats: false }), schema, value);
 }
 
+/** Compiled once a schema: that takes far longer than a check. */
+const compiled = new WeakMap<object, ReturnType<Ajv['compile']>>();
+
 function problems(ajv: Pick<Ajv, 'compile'>, schema: object, value: unknown): readonly string[] {
-  const check = ajv.compile(schema);
+  const check = compiled.get(schema) ?? ajv.compile(schema);
+  compiled.set(schema, check);
   check(value);
   return (check.errors ?? []).map(({ instancePath, message }) => `${instancePath}: ${message}`);
 }

@@ -17,6 +17,9 @@ export interface FineCurve {
   readonly energies: ReadonlyMap<string, Float64Array>;
   /** Energy of the lowest level of the declared multiplicity, and which one it is. */
   readonly lowest: Float64Array;
+  readonly names: readonly string[];
+  /** Place in `names` of the lowest level at each point. */
+  readonly which: Uint8Array;
   readonly lowestLabel: (i: number) => string;
   /** Grid indices just above which another level becomes lowest. */
   readonly changes: readonly number[];
@@ -52,7 +55,7 @@ export function fineCurve(ion: GroundCase, ratio: number, labels: readonly strin
   const changes: number[] = [];
   // At the very ends levels coincide, and rounding decides which is lowest.
   for (let i = 2; i < finePieces; i++) if (which[i] !== which[i - 1]) changes.push(i - 1);
-  return { ion, ratio, step, energies, lowest, lowestLabel: (i) => names[which[i]!]!, changes };
+  return { ion, ratio, step, energies, lowest, names, which, lowestLabel: (i) => names[which[i]!]!, changes };
 }
 
 /** Readings with u on each side, as plain columns for the inner loop. */
@@ -98,16 +101,45 @@ function misfitOf({ observed, below, above }: Columns, energies: Float64Array, r
   return sum;
 }
 
-/** Least chi2 at every grid point; NaN where no positive scale is best. */
+/**
+ * Least chi2 at every grid point; NaN where no positive scale is best. From point to point the sides on which the readings lie rarely
+ * change, so each point starts with those of the last: the best scale of a set of sides is right where it leaves them as they are.
+ */
 export function trialMisfits(curve: FineCurve, labels: readonly string[], targets: readonly Target[], into: Float64Array): Float64Array {
   const levels = labels.map((label) => curve.energies.get(label)!);
-  const columns = columnsOf(targets);
-  const energies = new Float64Array(labels.length);
+  const { observed, below, above } = columnsOf(targets);
+  const size = labels.length;
+  const energies = new Float64Array(size);
+  const weights = Float64Array.from(below);
+  // From the ground level to itself there is no transition.
+  const itself = curve.names.map((name) => labels.includes(name));
+  const { lowest, which } = curve;
   for (let i = 0; i <= finePieces; i++) {
-    for (let k = 0; k < levels.length; k++) energies[k] = levels[k]![i]! - curve.lowest[i]!;
-    const rho = bestByNewton(columns, energies);
-    // From the ground level to itself there is no transition.
-    into[i] = rho > 0 && !labels.includes(curve.lowestLabel(i)) ? misfitOf(columns, energies, rho) : Number.NaN;
+    const ground = lowest[i]!;
+    for (let k = 0; k < size; k++) energies[k] = levels[k]![i]! - ground;
+    let rho = 0;
+    for (let round = 0, changed = true; changed && round < 50; round++) {
+      let products = 0;
+      let squares = 0;
+      for (let k = 0; k < size; k++) {
+        const weighted = weights[k]! * energies[k]!;
+        products += weighted * observed[k]!;
+        squares += weighted * energies[k]!;
+      }
+      rho = products / squares;
+      changed = false;
+      for (let k = 0; k < size; k++) {
+        const weight = rho * energies[k]! > observed[k]! ? above[k]! : below[k]!;
+        if (weight !== weights[k]!) changed = true;
+        weights[k] = weight;
+      }
+    }
+    let sum = 0;
+    for (let k = 0; k < size; k++) {
+      const miss = observed[k]! - rho * energies[k]!;
+      sum += weights[k]! * miss * miss;
+    }
+    into[i] = rho > 0 && !itself[which[i]!] ? sum : Number.NaN;
   }
   return into;
 }

@@ -1,0 +1,30 @@
+import { readFileSync } from 'node:fs';
+import { createRequire } from 'node:module';
+import type { Page } from 'playwright-core';
+
+const script = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
+const TAGS = ['wcag2a', 'wcag2aa', 'wcag21aa', 'wcag22aa', 'best-practice'];
+
+interface AxeResult { readonly violations: readonly { readonly id: string; readonly nodes: readonly { readonly html: string }[] }[] }
+
+/** What axe finds on the page as it stands: "id: the first elements". */
+export async function violationsOf(page: Page): Promise<readonly string[]> {
+  if (!(await page.evaluate(() => 'axe' in globalThis))) await page.evaluate(script);
+  const { violations } = await page.evaluate(
+    async (tags) => (globalThis as unknown as { axe: { run: (options: unknown) => Promise<AxeResult> } }).axe.run({ runOnly: { type: 'tag', values: tags }, resultTypes: ['violations'] }), TAGS,
+  );
+  return violations.map(({ id, nodes }) => `${id}: ${nodes.slice(0, 3).map(({ html }) => html.slice(0, 160)).join(' | ')}`);
+}
+
+/** The same by day, by night and at 320 pixels, with the page loaded once. */
+export async function violationsEverywhere(page: Page): Promise<readonly string[]> {
+  const found: string[] = [];
+  for (const [colorScheme, width] of [['light', 1280], ['dark', 1280], ['light', 320]] as const) {
+    await page.emulateMedia({ colorScheme });
+    await page.setViewportSize({ width, height: 900 });
+    found.push(...(await violationsOf(page)).map((one) => `${colorScheme} ${width} ${one}`));
+  }
+  await page.emulateMedia({ colorScheme: 'light' });
+  await page.setViewportSize({ width: 1280, height: 900 });
+  return found;
+}
