@@ -9,6 +9,7 @@ import type { CommandTable } from './arguments.ts';
 import { measurePages, measureRefit, prepareCollection } from './bench/collection.ts';
 import { measureCompare } from './bench/compare.ts';
 import { measureBlocks, measureReadings } from './bench/engine.ts';
+import { measureKeystroke } from './bench/keystroke.ts';
 import { measureLive } from './bench/live.ts';
 import { measureShares } from './bench/parts.ts';
 import { measureSlowest, measureThreads } from './bench/records.ts';
@@ -19,6 +20,7 @@ import type { Measured } from './bench/stopwatch.ts';
 import { readCollection } from './content/readCollection.ts';
 import { exitCodes } from './exitCodes.ts';
 import { places } from './places.ts';
+import { addressOf } from './publish/address.ts';
 import { aligned } from './report/columns.ts';
 import { runCommand, UsageError } from './runCommand.ts';
 
@@ -74,7 +76,10 @@ async function measureParts(folder: string, records: number, pages: boolean, add
   add(await measureSeries());
   add(await measureRefit(folder));
   add(await measureCompare(folder, records));
-  if (pages) add(await measurePages(folder, prepared.collection));
+  if (pages) {
+    add(await measurePages(folder, prepared.collection));
+    add(await measureKeystroke(folder, addressOf(prepared.collection.group.url).base));
+  }
   if (pages) add(await measureLive(folder, records));
   add(await measureStartUp());
 }

@@ -67,7 +67,7 @@ function strips(picked: readonly Picked[]): string {
   const svg = alignedStrips(picked.map((one) => ({ name: [...named(one), ...words(`, ${one.measurement.conditions}`)], row: one.measurement.strip })), {
     id: 'picked-strips', title, description: picked.map(({ key, formula, measurement }) => `${key}, ${formula.text}: ${measurement.stripTitle}.`).join(' '),
   });
-  return figureMarkup(svg, words(title), 'Solid line: scanned; dotted line: not scanned or not recorded.');
+  return figureMarkup(svg, words(title), words('Solid line: scanned; dotted line: not scanned or not recorded.'));
 }
 
 /** What the levels of a measurement are drawn from; null where it has no Delta and B. */
@@ -83,6 +83,6 @@ function levelFigure(picked: readonly Picked[]): string {
   const reach = commonReach(solved.map(({ reading }) => reading));
   const title = 'Levels side by side at the fitted parameters.';
   const svg = levelColumns(solved.map(({ one, reading }) => levelColumn(named(one), reading, reach)), { id: 'picked-levels', title, description: `Levels of ${solved.map(({ one }) => one.formula.text).join(', ')}, ground level at 0.` });
-  const left = without.length === 0 ? '' : ` Not drawn, because B is withheld: ${without.map(({ key, formula }) => `${key} ${formula.text}`).join(', ')}.`;
-  return figureMarkup(svg, words(title), `Full strokes: same multiplicity as the ground level; dashed: others, where assigned or few. Dots: observed bands, open where only compared.${left}`);
+  const left = without.length === 0 ? [] : [...words(' Not drawn, without both Δ and B: '), ...without.flatMap((one, place) => [...words(place > 0 ? ', ' : ''), ...named(one)]), ...words('.')];
+  return figureMarkup(svg, words(title), [...words('Full strokes: same multiplicity as the ground level; dashed: others, where assigned or few. Dots: observed bands, open where only compared.'), ...left]);
 }

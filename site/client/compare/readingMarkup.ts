@@ -52,7 +52,7 @@ function strip({ bands, predicted }: Reading, measurement: Measurement): string 
   const names = bands.map(({ observed, label }) => ({ position: observed, parts: termShown(label, electrons) }));
   const description = `Bands at ${listed(measurement.bands.map(({ position }) => plain(position, 0)))} cm⁻¹.`;
   return figureMarkup(stripFigure(row, names, calculated, { id: 'typed-strip', title: 'Band strip of the typed bands.', description }), words('Band strip of the typed bands.'),
-    'Triangles under the line: spin-allowed and assigned transitions as the fit puts them. Dotted stem: kept, not fitted.');
+    words('Triangles under the line: spin-allowed and assigned transitions as the fit puts them. Dotted stem: kept, not fitted.'));
 }
 
 const SYMBOLS = { Delta: 'Δ', B: 'B', C: 'C', beta: 'β' } as const;

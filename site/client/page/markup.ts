@@ -25,9 +25,9 @@ function inner(cell: Cell): string {
 }
 
 /** A figure with its title and caption around a drawing. */
-export function figureMarkup(svg: string, title: Parts, caption: string): string {
+export function figureMarkup(svg: string, title: Parts, caption: Parts): string {
   return `<figure><div class="scroll" role="group" aria-label="${escapeText(title.map(({ text }) => text).join(''))}" tabindex="0">${svg}</div>`
-    + `<figcaption><p><strong>${partsMarkup(title)}</strong> ${escapeText(caption)}</p></figcaption></figure>`;
+    + `<figcaption><p><strong>${partsMarkup(title)}</strong> ${partsMarkup(caption)}</p></figcaption></figure>`;
 }
 
 export const paragraph = (parts: Parts, cls = ''): string => `<p${cls === '' ? '' : ` class="${cls}"`}>${partsMarkup(parts)}</p>`;

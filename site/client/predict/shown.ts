@@ -45,7 +45,7 @@ function strip({ ion: { name, electrons } }: Asked, allowed: readonly PredictedT
   const names = allowed.map(({ label, position }) => ({ position, parts: termShown(label, electrons) }));
   const description = `Spin-allowed bands at ${listed(allowed.map(({ position }) => energy(position, null)))} cm⁻¹; ${forbidden.length} spin-forbidden.`;
   return figureMarkup(stripFigure(row, names, [], { id: 'predicted-strip', title, description }), words(title),
-    'Full strokes: spin-allowed, named. Thin strokes with a dot: spin-forbidden. Bands outside the axis are arrowheads at its ends. The line is dotted: nothing was measured.');
+    words('Full strokes: spin-allowed, named. Thin strokes with a dot: spin-forbidden. Bands outside the axis are arrowheads at its ends. The line is dotted: nothing was measured.'));
 }
 
 function bandTable(caption: string, rows: readonly PredictedTransition[], { ion: { electrons } }: Asked): Table {
@@ -73,7 +73,7 @@ function diagram({ ion, geometry, delta, racahB, racahC }: Asked, { transitions 
   const svg = liveLevelDiagram(cached(ion.electrons, geometry, cOverB, reach), ceiling, [inside], {
     id: 'predicted-levels', title, description: `Tanabe-Sugano diagram; upright at Δ/B = ${figures(x, 4)}.`,
   });
-  return figureMarkup(svg, words(title), `E/B against Δ/B at C/B = ${ratio(cOverB, 2)}. Solid: the ground level’s multiplicity; thin and dashed: others. Upright at Δ/B = ${figures(x, 4)}: full dots spin-allowed, open dots spin-forbidden.`);
+  return figureMarkup(svg, words(title), sentenceShown(`E/B against Δ/B at C/B = ${ratio(cOverB, 2)}. Solid: the ground level’s multiplicity; thin and dashed: others. Upright at Δ/B = ${figures(x, 4)}: full dots spin-allowed, open dots spin-forbidden.`));
 }
 
 let last: { readonly key: string; readonly diagram: ReturnType<typeof levelDiagram> } | null = null;

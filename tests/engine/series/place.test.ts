@@ -1,3 +1,4 @@
+import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { averageEnvironment, fitFactors, memberPlacements, parentsOf, placeResult, placeWords, placingGround } from '#engine';
 import type { ComparedCollection, Placement, SeriesResult } from '#engine';
@@ -65,6 +66,7 @@ describe('a new complex', () => {
     const far = place(planted('Cr(III)', { ammine: 6 }, { delta: 1.35 * 17400 * 1.25 }));
     expect(prediction(far, 'Delta', 'factors').z).toBeGreaterThan(3);
     expect(codes(far)).toEqual(['ALREADY_THERE', 'FAR_FROM_PREDICTION']);
+    expect(far.cautions[1]!.text).toMatch(/^Delta lies \d+\.\d standard uncertainties from what the factors predict: look at the assignment, or there is something new\.$/);
   });
 });
 
@@ -101,6 +103,11 @@ describe('what cannot be concluded is said', () => {
   test('a series of one', () => {
     const placement = place(planted('Cr(III)', { ammine: 6 }), [planted('Cr(III)', { aqua: 6 })]);
     expect(codes(placement)).toEqual(['SERIES_OF_ONE', 'LIGAND_NEVER_SEEN']);
+    expect(placement.cautions.map(({ text }) => text)).toEqual([
+      'Only one other complex of Cr(III), octahedral, quartet can be compared: above, below or alike is all that can be said.',
+      'ammine is in no other complex of this geometry: nothing predicts what it does.',
+    ]);
+    expect(placeWords(placement.places[0]!, placement.result).sentence).toBe('Delta, against the one comparable complex of Cr(III), octahedral, quartet: above [Cr(III) (aqua)6].');
     expect(placement.places[0]!.members).toBe(1);
   });
   test('an empty collection', () => {
@@ -129,6 +136,40 @@ describe('what cannot be concluded is said', () => {
   });
   test('an id that another complex has', () => {
     expect(codes(place(planted('Cr(III)', { ammine: 3, aqua: 3 }, { id: 'criii--aqua6' })))).toEqual(['ID_TAKEN']);
+  });
+});
+
+describe('every caution of a placement', () => {
+  const mixed = planted('Cr(III)', { ammine: 3, chlorido: 3 });
+  const at = (delta: number, more: Partial<Invented> = {}) => planted('Cr(III)', { ammine: 3, chlorido: 3 }, { delta, ...more });
+  const ownDelta = mixed.parameters.Delta.value!;
+  const earlier = (away: number) => [...regular, at(ownDelta - away, { id: 'old-name', measurement: 'aq-1998' })];
+  const withoutTemperature = (kept: number) => regular.map((one, i) => (i === kept ? one : { ...one, temperature: null }));
+  const iron = { ion: 'Mn(IV)', ligands: { thiourea: 6 }, delta: 16000 };
+  const pairs: Readonly<Record<string, readonly [trigger: () => Placement, nearMiss: () => Placement]>> = {
+    ALREADY_THERE: [() => place(mixed, [...regular, mixed]), () => place(mixed, [...regular, planted('Cr(III)', { ammine: 4, chlorido: 2 })])],
+    ID_TAKEN: [() => place({ ...mixed, complex: { ...mixed.complex, id: 'criii--aqua6' } }), () => place({ ...mixed, complex: { ...mixed.complex, id: 'criii--aqua5' } })],
+    NO_OTHER_RECORD: [() => place(result({ ion: 'Mn(IV)', ligands: { ammine: 6 }, delta: 30000 })), () => place(result({ ion: 'Mn(IV)', ligands: { ammine: 6 }, delta: 30000 }), [...regular, result(iron)])],
+    SERIES_OF_ONE: [() => place(mixed, [planted('Cr(III)', { aqua: 6 })]), () => place(mixed, [planted('Cr(III)', { aqua: 6 }), planted('Cr(III)', { cyanido: 6 })])],
+    LIGAND_NEVER_SEEN: [() => place(result({ ligands: { thiourea: 6 }, delta: 17000 })), () => place(result({ ligands: { thiourea: 6 }, delta: 17000 }), [...regular, result(iron)])],
+    ISLAND_OF_ITS_OWN: [() => place(result({ ...iron, ligands: { thiourea: 5, urea: 1 } }), [...regular, result(iron)]), () => place(result({ ...iron, ligands: { thiourea: 5, aqua: 1 } }), [...regular, result(iron), result({ ...iron, ligands: { aqua: 6 } })])],
+    OTHER_POLICY: [() => place({ ...mixed, policy: 'own-1' }), () => place(mixed)],
+    TEMPERATURE_NOT_RECORDED: [() => place({ ...mixed, temperature: null }), () => place(mixed)],
+    TEMPERATURES_MIXED: [() => place(mixed, withoutTemperature(-1)), () => place(mixed, withoutTemperature(regular.findIndex(({ complex }) => complex.ion.name === 'Cr(III)')).filter(({ complex }) => complex.ion.name === 'Cr(III)'))],
+    PHASES_MIXED: [() => place({ ...mixed, phase: 'crystal' }), () => place(mixed)],
+    EARLIER_DISAGREES: [() => place(mixed, earlier(400)), () => place(mixed, earlier(100))],
+    FAR_FROM_PREDICTION: [() => place(at(1.3 * ownDelta)), () => place(at(1.03 * ownDelta))],
+    SCATTER_ASSUMED: [() => place(mixed, regular.slice(0, 6)), () => place(mixed)],
+  };
+  test.each(Object.keys(pairs))('%s: said where it applies, not at a near miss', (code) => {
+    const [trigger, nearMiss] = pairs[code]!;
+    expect(codes(trigger())).toContain(code);
+    expect(codes(nearMiss())).not.toContain(code);
+    expect(trigger().cautions.find((one) => one.code === code)!.text).toMatch(/^\S[^\n]{40,}\.$/);
+  });
+  test('has its pair here', () => {
+    const source = readFileSync(new URL('../../../engine/series/placingCautions.ts', import.meta.url), 'utf8');
+    expect([...source.matchAll(/'([A-Z_]{6,})'/g)].map(([, code]) => code).sort()).toEqual(Object.keys(pairs).sort());
   });
 });
 
