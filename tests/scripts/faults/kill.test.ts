@@ -63,7 +63,10 @@ describe('a refit that is killed', () => {
       const folder = at(`refit-${n}`);
       copyOf(at('old.sqlite'), join(folder, 'c.sqlite'));
       const words = ['--content', at('new'), '--database', join(folder, 'c.sqlite'), ...(n % 2 === 0 ? ['--cold'] : [])];
-      if (await killAfter('refit', words, full * (0.3 + 0.8 * next()), true)) killed += 1;
+      const started = performance.now();
+      if (await killAfter('refit', words, full * (0.2 + 0.85 * next()), true)) killed += 1;
+      // The machine may have become quicker than when the whole run was timed.
+      else full = Math.min(full, performance.now() - started);
       expect([oldHash, newHash]).toContain(hashOf(join(folder, 'c.sqlite')));
       if (n % 5 === 0) {
         expect(runScript('refit', words, settings).code).toBe(0);
@@ -85,13 +88,15 @@ describe('a build that is killed', () => {
       expect(runScript('build', words(state), settings)).toMatchObject({ code: 0, stderr: '' });
       return performance.now() - started;
     };
-    const whole = build('old');
+    let whole = build('old');
     const oldSite = folderHash(join(folder, 'dist'));
     const next = seeded(12);
     const seen = new Set([oldSite]);
     let killed = 0;
     for (let n = 0; n < kills.build; n++) {
-      if (await killAfter('build', words('new'), whole * (0.15 + 0.95 * next()), n % 2 === 0)) killed += 1;
+      const started = performance.now();
+      if (await killAfter('build', words('new'), whole * (0.15 + 0.85 * next()), n % 2 === 0)) killed += 1;
+      else whole = Math.min(whole, performance.now() - started);
       expect([oldHash, newHash]).toContain(hashOf(join(folder, 'c.sqlite')));
       seen.add(folderHash(join(folder, 'dist')));
       if (n % 10 === 9) build('old');
