@@ -59,4 +59,6 @@ export interface Measurement {
   readonly innocenceDoubtful: boolean;
   /** Number of metal centres; 1 where not typed. */
   readonly nuclearity: number;
+  /** Donor atoms about the one metal centre, counted from its ligands; null: not known, or more than one centre. */
+  readonly donors: number | null;
 }

@@ -99,6 +99,13 @@ function unseenEvidence(measurement: Measurement, ion: GroundCase, assigned: rea
   });
 }
 
+const corners = { octahedral: 6, tetrahedral: 4 } as const;
+
+/** The formula of the sample speaks against a geometry of another number of corners; what absorbs may be another species all the same. */
+function donorEvidence({ donors }: Measurement, { geometry }: GroundCase): Evidence[] {
+  return donors === null || donors === corners[geometry] ? [] : [{ code: 'donors', penalty: evidenceWeights.donors, label: '', value: donors }];
+}
+
 /** Everything that speaks against a fitted reading; entries without a penalty are left out. */
 export function gatherEvidence(
   measurement: Measurement, ion: GroundCase, assigned: readonly Assigned[], leftOver: number, fit: Fit, freeIon: FreeIon | null,
@@ -109,6 +116,7 @@ export function gatherEvidence(
     { code: 'misfit', penalty: chi2 + misfitOfCompared(assigned, fit), label: '', value: null },
     { code: 'parameters', penalty: evidenceWeights.parameter * parametersOf[fit.mode], label: '', value: null },
     { code: 'left over', penalty: evidenceWeights.leftOver * leftOver, label: '', value: leftOver },
+    ...donorEvidence(measurement, ion),
     { code: 'beta', penalty: beta, label: '', value: freeIon && beta > 0 ? at.racahB / freeIon.racahB0 : null },
     ...assigned.flatMap((one) => one.observation.bands.flatMap((index) => bandEvidence(ion, one.label, measurement.bands[index]!))),
     ...unseenEvidence(measurement, ion, assigned, fit),

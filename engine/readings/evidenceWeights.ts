@@ -22,6 +22,8 @@ export const evidenceWeights = {
   absorptivityDecade: 4,
   /** A line where a broad band is expected, or the reverse. */
   width: 4,
+  /** Another number of donor atoms in the record than the geometry has corners. */
+  donors: 5,
   /** A broad band of unrecorded strength taken for a spin-forbidden transition. */
   forbiddenBroad: 4,
 } as const;

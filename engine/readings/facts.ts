@@ -24,7 +24,7 @@ export interface ReadingParts {
   readonly ground: GroundCheck;
   readonly predicted: readonly PredictedBand[];
   readonly policy: Policy;
-  readonly rivals: { readonly best: 'near' | 'better' | null; readonly otherGeometry: boolean; readonly words: string };
+  readonly rivals: { readonly best: 'near' | 'better' | null; readonly otherGeometry: boolean; readonly sameNumbers: boolean; readonly words: string };
 }
 
 /** Ions whose octahedral ground level is an E level: their one spin-allowed band is split by a Jahn-Teller distortion. */
@@ -172,6 +172,7 @@ export function spectralFacts({ measurement, ion, chosen, fit, parameters, groun
     groundContradicted: ground === 'contradicts',
     rival: rivals.best,
     rivalGeometry: rivals.otherGeometry,
+    rivalSameNumbers: rivals.sameNumbers,
     rivalWords: rivals.words,
     forbiddenUsedAsAllowed: ion ? strengthMismatch(measurement, ion, fittedBands, (expected, epsilon) => expected && epsilon < weakBelow) : [],
     chargeTransferUsed: ion ? strengthMismatch(measurement, ion, fittedBands, (_, epsilon) => epsilon > strongAbove) : [],

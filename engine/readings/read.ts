@@ -45,11 +45,13 @@ interface Context {
 export interface Rivalry {
   readonly best: 'near' | 'better' | null;
   readonly otherGeometry: boolean;
+  /** true where every rival within the margin has the Delta and B of the chosen reading, within their total uncertainty. */
+  readonly sameNumbers: boolean;
   /** The best rival in words: "4T2g 17 400, a4T1g 24 600 (octahedral, quartet)". */
   readonly words: string;
 }
 
-const noRivalry: Rivalry = { best: null, otherGeometry: false, words: '' };
+const noRivalry: Rivalry = { best: null, otherGeometry: false, sameNumbers: false, words: '' };
 
 /**
  * Reads one measurement: assigns its bands (as typed, or the best assignment where nothing is typed), fits
@@ -89,8 +91,19 @@ function rivalry(chosen: ScoredReading, rivals: readonly ScoredReading[], policy
   if (!best || !beatable) return noRivalry;
   const difference = best.score - chosen.score;
   if (!(difference <= policy.rivalMargin)) return noRivalry;
-  const otherGeometry = rivals.some((rival) => rival.score - chosen.score <= policy.rivalMargin && rival.ion.geometry !== chosen.ion.geometry);
-  return { best: difference < -policy.rivalMargin ? 'better' : 'near', otherGeometry, words: rivalWords(best, chosen) };
+  const near = rivals.filter((rival) => rival.score - chosen.score <= policy.rivalMargin);
+  return {
+    best: difference < -policy.rivalMargin ? 'better' : 'near', otherGeometry: near.some((rival) => rival.ion.geometry !== chosen.ion.geometry),
+    sameNumbers: near.every((rival) => hasSameNumbers(rival, chosen)), words: rivalWords(best, chosen),
+  };
+}
+
+/** Whether two readings of one geometry and spin differ in the names of bands only: their Delta and B agree within one total uncertainty. */
+function hasSameNumbers(rival: ScoredReading, chosen: ScoredReading): boolean {
+  if (rival.ion.geometry !== chosen.ion.geometry || rival.ion.multiplicity !== chosen.ion.multiplicity || !isFit(rival.outcome) || !isFit(chosen.outcome)) return false;
+  const [theirs, own] = [rival.outcome.solutions[0]!.at, chosen.outcome.solutions[0]!.at];
+  const { total } = chosen.outcome;
+  return (theirs.delta - own.delta) ** 2 <= total[0]![0]! && (theirs.racahB - own.racahB) ** 2 <= total[1]![1]!;
 }
 
 /** What a rival makes of the bands, and of what ion where that differs from the declared one. */
@@ -163,7 +176,7 @@ function withoutFit(context: Context, reading: ScoredReading, verdict: 'refused'
   const { ion } = reading;
   const contradicted = fit !== null;
   return {
-    ...nothingFitted, verdict, reason: verdictSentence({ ...noFacts, verdict, reason }) + rivalSentence(rivals.best, false), assignment: reading.origin,
+    ...nothingFitted, verdict, reason: verdictSentence({ ...noFacts, verdict, reason }) + rivalSentence(rivals, false), assignment: reading.origin,
     geometry: ion.geometry, multiplicity: ion.multiplicity, ground: groundLabel(ion.electrons, ion.geometry, ion.multiplicity),
     bands: readingBands(reading, fit, policy), notFitted: reading.notFitted, branches: fit ? branchesOf(fit, false) : [],
     parameters: nothingPublished(reason), chi2: fit?.solutions[0]?.chi2 ?? null,
@@ -198,7 +211,7 @@ function fitted(context: Context, reading: ScoredReading, fit: Fit, ground: Grou
       verdict, bandsUsed: used.length, spareBands: fit.spare, chi2: best.chi2, probability,
       reason: verdict === 'not determinable' ? `no number stays under the policy's ceilings; Delta is withheld because ${parameters[0]!.reason}` : null,
       resting: resting?.names ?? [], assumed: resting?.assumed ?? null,
-    }) + rivalSentence(rivals.best, secondSolution);
+    }) + rivalSentence(rivals, secondSolution);
   const groundState = groundStateOf(ion, fit);
   const order = doubletOrder(ion, fit, freeIon);
   const ratioText = resting ? resting.assumed.replace('the assumed ', '') : null;

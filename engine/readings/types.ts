@@ -70,7 +70,7 @@ export interface RatioUsed {
 
 /** What speaks against a reading, on the scale of chi2. */
 export type EvidenceCode =
-  | 'misfit' | 'parameters' | 'left over' | 'gap' | 'unseen' | 'below' | 'line skipped' | 'beta' | 'absorptivity' | 'width' | 'forbidden and broad';
+  | 'misfit' | 'parameters' | 'left over' | 'gap' | 'unseen' | 'below' | 'line skipped' | 'beta' | 'absorptivity' | 'width' | 'forbidden and broad' | 'donors';
 
 export interface Evidence {
   readonly code: EvidenceCode;

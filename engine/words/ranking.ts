@@ -35,6 +35,8 @@ export function evidenceWords({ code, penalty, label, value }: EvidenceFacts): s
       return value === null ? `the band's shape is not usual for ${label}` : `a width of ${wholeNumber(value)} cm⁻¹ is not usual for ${label}`;
     case 'forbidden and broad':
       return `${label} is spin-forbidden, yet the band is broad`;
+    case 'donors':
+      return `the ligands of the record bind with ${value} donor atoms`;
     default:
       return code;
   }
@@ -68,6 +70,8 @@ export function evidenceHeading(code: string, label: string): string {
       return `width not usual for ${label}`;
     case 'forbidden and broad':
       return `${label} spin-forbidden, yet the band is broad`;
+    case 'donors':
+      return 'donor atoms of the record do not make this geometry';
     default:
       return code;
   }

@@ -23,10 +23,10 @@ export function doubletSentence(order: { gap: number; u: number; decidable: bool
 export const searchStopped = 'These bands may be read in more ways than were tried: better readings may exist. Terms, or lists of candidates, typed for some bands shorten the search.';
 
 /** What the verdict adds where a rival or a second solution stands beside the chosen reading. */
-export function rivalSentence(rival: 'near' | 'better' | null, secondSolution: boolean): string {
+export function rivalSentence(rival: { readonly best: 'near' | 'better' | null; readonly sameNumbers: boolean }, secondSolution: boolean): string {
   const parts = [
-    rival === 'better' ? ' Another reading fits these bands clearly better: see the rivals.' : '',
-    rival === 'near' ? ' Another reading fits these bands as well: see the rivals.' : '',
+    rival.best === 'better' ? ' Another reading fits these bands clearly better: see the rivals.' : '',
+    rival.best === 'near' ? (rival.sameNumbers ? ' Other names for these bands fit as well, and leave Delta and B as they are: see the rivals.' : ' Another reading fits these bands as well: see the rivals.') : '',
     secondSolution ? ' Two solutions of this reading fit equally well; both are listed.' : '',
   ];
   return parts.join('');

@@ -1,6 +1,6 @@
 // A collection rebuilt from the rows that hold what was typed: the way back from an export to the fits.
 
-import { parseIon } from '#engine';
+import { donorCount, parseIon } from '#engine';
 import type { Band, FreeIonSetName, Policy, Range } from '#engine';
 import { fittedGeometry, resolvedSpin } from '../content/spin.ts';
 import type { ComplexRecord, Collection, Group, LigandRecord, MeasurementRecord, QuotedRecord, SourceRecord } from '../content/types.ts';
@@ -124,18 +124,19 @@ function complexOf(row: Row, find: Find, policies: ReadonlyMap<string, Policy>):
   // The column `multiplicity` may come from a reading; what was typed, or what ion and geometry leave, is found as the record reader finds it.
   const spin = resolvedSpin(parsed.ion.electrons, geometryName, spinTyped);
   const complex = { ion: parsed.ion, geometryName, geometry: fittedGeometry(geometryName), multiplicity: spinTyped === null ? null : spin.multiplicity };
+  const ligands = find('complex_ligand', id).map((link) => ({ ligand: text(link, 'ligand'), count: number(link, 'count'), bound: number(link, 'bound') }));
   return {
     id, file: text(row, 'file'), hash: text(row, 'hash'), formula: text(row, 'formula'), name: orNull(row, 'name'), charge: number(row, 'charge'),
     chargeNote: orNull(row, 'charge_note'), ion: complex.ion, geometryName, geometry: complex.geometry, isomer: text(row, 'isomer'),
-    ligands: find('complex_ligand', id).map((link) => ({ ligand: text(link, 'ligand'), count: number(link, 'count'), bound: number(link, 'bound') })),
+    ligands,
     spinTyped, multiplicity: spin.multiplicity, spinAssumed: row['spin_assumed'] === 1, notes: orNull(row, 'notes'),
     hazardOverrides: Object.fromEntries(find('hazard_override', id).map((override) => [text(override, 'code'), text(override, 'reason')])),
-    measurements: find('measurement', id).map((measurement) => measurementOf(measurement, complex, find, policies)),
+    measurements: find('measurement', id).map((measurement) => measurementOf(measurement, complex, donorCount(ligands), find, policies)),
   };
 }
 
 function measurementOf(
-  row: Row, complex: Pick<ComplexRecord, 'ion' | 'geometryName' | 'geometry' | 'multiplicity'>, find: Find, policies: ReadonlyMap<string, Policy>,
+  row: Row, complex: Pick<ComplexRecord, 'ion' | 'geometryName' | 'geometry' | 'multiplicity'>, donors: number, find: Find, policies: ReadonlyMap<string, Policy>,
 ): MeasurementRecord {
   const [owner, id] = [text(row, 'complex'), text(row, 'id')];
   const bands = find('band', owner, id);
@@ -151,6 +152,7 @@ function measurementOf(
       technique: orNull<NonNullable<MeasurementRecord['engine']['technique']>>(row, 'technique'),
       bands: bands.map(bandOf), absent: rangesOf('absent').map(rangeOf), scanned: rangesOf('scanned').map(rangeOf),
       innocenceDoubtful: row['innocence_doubtful'] === 1, nuclearity: number(row, 'nuclearity'),
+      donors: number(row, 'nuclearity') === 1 ? donors : null,
     },
     bands: bands.map((band) => ({ positionTyped: text(band, 'position_typed'), widthTyped: orNull(band, 'width_typed'), notes: orNull(band, 'notes') })),
     absentNotes: rangesOf('absent').map((range) => orNull(range, 'notes')),

@@ -27,6 +27,7 @@ export function evidenceTable(): Table {
       row('absorptivity', HEADS.width, `${w.absorptivityDecade} × the square of the decades outside the usual range`),
       row('width', HEADS.width, `${w.width}: a line under ${widthLimits.line} cm⁻¹ for a broad transition, or more than ${energy(widthLimits.spinFlip, null)} cm⁻¹ for a spin flip`),
       row('forbidden and broad', HEADS.forbidden, `${w.forbiddenBroad}, where no strength is recorded`),
+      row('donors', '', `${w.donors}: the other geometry of a rival`),
     ],
   };
 }

@@ -1,6 +1,6 @@
 // A complex record turned from what was typed into what the rest of the project reads.
 
-import { toWavenumber } from '#engine';
+import { donorCount, toWavenumber } from '#engine';
 import type { Policy, Quantity } from '#engine';
 import type { z } from 'zod';
 import type { OpenedFile } from '../files.ts';
@@ -40,14 +40,14 @@ export function complexRecord({ id, file, hash }: OpenedFile, typed: ComplexFile
     spinAssumed: spin.assumed,
     notes: typed.notes ?? null,
     hazardOverrides: typed.hazards ?? {},
-    measurements: (typed.measurements ?? []).map((measurement) => measurementRecord(typed, measurement, policy)),
+    measurements: (typed.measurements ?? []).map((measurement) => measurementRecord(typed, measurement, donorCount(bound), policy)),
   };
 }
 
-function measurementRecord(complex: ComplexFile, typed: MeasurementFile, policy: Policy): MeasurementRecord {
+function measurementRecord(complex: ComplexFile, typed: MeasurementFile, donors: number, policy: Policy): MeasurementRecord {
   return {
     id: typed.id,
-    engine: engineMeasurement(complex, typed),
+    engine: engineMeasurement(complex, typed, donors),
     bands: typed.bands.flatMap((band) => ('position' in band
       ? [{ positionTyped: band.position.typed, widthTyped: band.width?.typed ?? null, notes: band.notes ?? null }]
       : [])),

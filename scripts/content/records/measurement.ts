@@ -10,7 +10,8 @@ type BandFile = Extract<MeasurementFile['bands'][number], { readonly position: u
 /** Words of `term` that say what a band is instead of naming a level. */
 export const bandRoles: readonly string[] = ['CT', 'ligand', 'vibration', 'impurity'] satisfies readonly BandRole[];
 
-export function engineMeasurement(complex: ComplexFile, typed: MeasurementFile): Measurement {
+/** @param donors donor atoms of all ligands of the complex together */
+export function engineMeasurement(complex: ComplexFile, typed: MeasurementFile, donors: number): Measurement {
   const spin = resolvedSpin(complex.ion.electrons, complex.geometry, complex.spin ?? null);
   return {
     ion: complex.ion,
@@ -26,6 +27,7 @@ export function engineMeasurement(complex: ComplexFile, typed: MeasurementFile):
     scanned: typed.scanned === undefined ? [] : [typed.scanned].flat().flatMap((range) => range.ranges),
     innocenceDoubtful: complex.innocence === 'doubtful',
     nuclearity: complex.nuclearity ?? 1,
+    donors: (complex.nuclearity ?? 1) === 1 ? donors : null,
   };
 }
 

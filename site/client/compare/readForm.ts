@@ -44,13 +44,16 @@ export function readForm(form: TypedForm, known: KnownCollection): ReadForm {
     readTerms(whole, filled.map(({ place }) => place), { ion, geometry, multiplicity: spin.multiplicity, ratio: known.parentRatios[ion.name] ?? null }, say);
   }
   if (whole !== null && absent !== null) checkAbsent(whole, absent, say);
-  const measurement: Measurement | null = faults.length > 0 || ion === null || spin === null || whole === null || absent === null || scanned === null || whole.length + absent.length === 0 ? null : {
+  // A reading does not wait for ligands that are half typed.
+  const spectrumStands = faults.length === 0;
+  const held = readLigands(form, ion, known, say);
+  const nuclearity = Number(form.nuclearity || 1);
+  const measurement: Measurement | null = !spectrumStands || ion === null || spin === null || whole === null || absent === null || scanned === null || whole.length + absent.length === 0 ? null : {
     ion, geometry, geometryName: form.geometry, multiplicity: form.spin === '' ? null : spin.multiplicity, phase: form.phase as Measurement['phase'],
     medium: form.medium.trim() === '' ? null : form.medium.trim(), temperature, technique: form.technique === '' ? null : form.technique as Measurement['technique'],
-    bands: whole, absent, scanned, innocenceDoubtful: form.innocence === 'doubtful', nuclearity: Number(form.nuclearity || 1),
+    bands: whole, absent, scanned, innocenceDoubtful: form.innocence === 'doubtful', nuclearity, donors: held === null || nuclearity > 1 ? null : donorCount(held),
   };
-  const held = readLigands(form, ion, known, say);
-  const formula = form.formula.trim() !== '' ? form.formula.trim() : ion === null || held === null ? null : composedFormula(ion.metal, ion.oxidation, held.map(({ ligand, count }) => ({ ...known.ligands.find(({ id }) => id === ligand)!, count })), Number(form.nuclearity || 1));
+  const formula = form.formula.trim() !== '' ? form.formula.trim() : ion === null || held === null ? null : composedFormula(ion.metal, ion.oxidation, held.map(({ ligand, count }) => ({ ...known.ligands.find(({ id }) => id === ligand)!, count })), nuclearity);
   const identity: ComplexIdentity | null = ion === null || held === null || formula === null || spin === null ? null : {
     id: '', formula, ion, geometry, geometryName: form.geometry, multiplicity: spin.multiplicity, isomer: form.isomer, ligands: held,
   };

@@ -14,7 +14,7 @@ const everything: SpectralFacts = {
   componentsMerged: true, componentWithoutDegeneracy: true, mixesOriginsAndMaxima: true, innocenceDoubtful: true, nuclearity: 2, emission: true,
   ratioAssumed: '4.5(9)', betaAssumed: '0.75(12)', beta: 1.2, uBeta: 0.01, groundNearCrossing: true, ratioAtEdge: true, ratiosOutside: ['4A2g/4T2g = 1.98 (2.00 to 2.25)'],
   sparseLowSpin: true, singletGap: 100, octahedralCobaltTwo: true, notScanned: ['4T1g'], equallyGoodBranch: true, groundContradicted: true, rival: 'near', rivalGeometry: true,
-  rivalWords: 'a rival', forbiddenUsedAsAllowed: ['4T2g'], chargeTransferUsed: ['4T1g'], dipBetweenMaxima: true, roughBandCarriesFit: '4T2g',
+  rivalWords: 'a rival', rivalSameNumbers: false, forbiddenUsedAsAllowed: ['4T2g'], chargeTransferUsed: ['4T1g'], dipBetweenMaxima: true, roughBandCarriesFit: '4T2g',
   nearSolventOvertone: { band: 8500, solvent: 'water' },
 };
 

@@ -26,6 +26,6 @@ export function termBand(position: number, term: string, u: number | readonly [n
 export function measurement(ion: string, bands: readonly Band[], given: Partial<Omit<Measurement, 'ion' | 'bands'>> = {}): Measurement {
   return {
     ion: ionNamed(ion), geometry: 'octahedral', geometryName: given.geometry ?? 'octahedral', multiplicity: null, phase: 'solution', medium: null, temperature: null,
-    technique: 'absorption', bands, absent: [], scanned: [], innocenceDoubtful: false, nuclearity: 1, ...given,
+    technique: 'absorption', bands, absent: [], scanned: [], innocenceDoubtful: false, nuclearity: 1, donors: null, ...given,
   };
 }

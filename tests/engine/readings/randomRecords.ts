@@ -65,7 +65,7 @@ export function randomTask({ name, ion, deltaOverB: [low, high] }: RecordKind, n
   const measurement: Measurement = {
     ion: { name, metal: name.slice(0, 2), oxidation: 0, electrons: ion.electrons, row: '3d' }, geometry: ion.geometry, geometryName: ion.geometry,
     multiplicity: ion.multiplicity, phase: 'solution', medium: null, temperature: null, technique: null, bands, absent: [],
-    scanned: next() < 0.5 ? [] : [{ low: 5000, high: 35_000 }], innocenceDoubtful: false, nuclearity: 1,
+    scanned: next() < 0.5 ? [] : [{ low: 5000, high: 35_000 }], innocenceDoubtful: false, nuclearity: 1, donors: null,
   };
   return { measurement, ion, policy: defaultPolicy, ratio: ratioFor(defaultPolicy, name), freeIon: free };
 }

@@ -271,6 +271,26 @@ describe('traps of the trade end in the right refusal or caution', () => {
     expect(rivals[0]!.score!).toBeLessThan(chosen.score!);
   });
 
+  test('six donor atoms in the record speak against a tetrahedron, and bands as strong as a tetrahedron has outweigh them', () => {
+    const told = (epsilon: readonly [number | null, number | null], donors: number | null): readonly string[] => codesOf(read(measurement('Co(II)', [
+      termBand(5460, '4T2g', 100, { epsilon: epsilon[0] }), termBand(14_700, '4T1g(P)', 100, { epsilon: epsilon[1] }),
+    ], { multiplicity: 4, donors })));
+    expect(told([null, null], null)).toContain('GEOMETRY_RIVAL');
+    expect(told([null, null], 6)).not.toContain('GEOMETRY_RIVAL');
+    expect(told([90, 550], 6)).toContain('GEOMETRY_RIVAL');
+    const strong = measurement('Co(II)', [termBand(5460, '4T2g', 100, { epsilon: 90 }), termBand(14_700, '4T1g(P)', 100, { epsilon: 550 })], { multiplicity: 4, donors: 6 });
+    const rival = readWithRivals(strong, defaultPolicy, freeIon('published', strong.ion)).rivals.find(({ geometry }) => geometry === 'tetrahedral');
+    expect(rival!.ranking).toContain('the ligands of the record bind with 6 donor atoms');
+  });
+
+  test('a rival that only gives neighbouring lines other names is told quietly; one that moves Delta or B is not', () => {
+    const lines = (wide: number) => read(measurement('Cr(III)', [termBand(14_893, '2Eg(G)', 10, { kind: 'line' }), termBand(17_920, '4T2g'), termBand(22_408, '2T2g(G)', 10, { kind: 'line' }), termBand(24_900, '4T1g(F)', wide)], { donors: 6 }));
+    expect(lines(100).reason).toContain('Other names for these bands fit as well, and leave Delta and B as they are');
+    expect(lines(100).cautions.find(({ code }) => code === 'NEAR_RIVAL')!.text).toMatch(/^Other names for these bands .*: a2T1g 14\u2009893,/);
+    const cobalt = read(measurement('Co(II)', [termBand(5460, '4T2g'), termBand(14_700, '4T1g(P)')], { multiplicity: 4 }));
+    expect(cobalt.reason).toContain('Another reading fits these bands as well');
+  });
+
   test('Cr(III) 24 600 and 37 800 alone, read as the two T1g: they move together, so neither number is given', () => {
     const reading = read(measurement('Cr(III)', [termBand(24_600, '4T1g(F)'), termBand(37_800, '4T1g(P)')]));
     expect(['refused', 'not determinable']).toContain(reading.verdict);

@@ -44,13 +44,13 @@ describe('order of 2Eg and 4T2g', () => {
 
 describe('what the verdict adds', () => {
   test('nothing where nothing rivals', () => {
-    expect(rivalSentence(null, false)).toBe('');
+    expect(rivalSentence({ best: null, sameNumbers: false }, false)).toBe('');
   });
 
   test('a near rival, a better one and a second solution each have their own sentence', () => {
-    const sentences = [rivalSentence('near', false), rivalSentence('better', false), rivalSentence(null, true)];
+    const sentences = [rivalSentence({ best: 'near', sameNumbers: false }, false), rivalSentence({ best: 'better', sameNumbers: false }, false), rivalSentence({ best: null, sameNumbers: false }, true)];
     expect(new Set(sentences).size).toBe(3);
-    expect(rivalSentence('near', true)).toBe(sentences[0]! + sentences[2]!);
+    expect(rivalSentence({ best: 'near', sameNumbers: false }, true)).toBe(sentences[0]! + sentences[2]!);
     for (const sentence of sentences) expect(sentence).toMatch(/^ [A-Z].*\.$/);
   });
 });

@@ -21,7 +21,7 @@ export function measurement(bands: readonly Band[], changes: Partial<Measurement
   return {
     ion: ion('Cr(III)'), geometry: 'octahedral', geometryName: 'octahedral', multiplicity: 4, phase: 'solution', medium: null, temperature: 295,
     technique: 'absorption', bands, absent: [{ low: 28600, high: 33300 }], scanned: [{ low: 9091, high: 33333 }],
-    innocenceDoubtful: false, nuclearity: 1, ...changes,
+    innocenceDoubtful: false, nuclearity: 1, donors: null, ...changes,
   };
 }
 

@@ -13,7 +13,7 @@ const page = methodsPage(tree);
 test('every weight of evidence that the engine uses stands on the methods page', () => {
   const cells = page.evidence.rows.map((row) => text(row[1])).join(' ; ');
   for (const [name, weight] of Object.entries(evidenceWeights)) expect(cells, name).toMatch(new RegExp(`(?<![\\d.])${weight}(?![\\d.])`));
-  expect(page.evidence.rows).toHaveLength(11);
+  expect(page.evidence.rows).toHaveLength(12);
   expect(page.limits.strained).toBe(String(strainedBelow));
 });
 
