@@ -2,6 +2,10 @@ import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { expect, test } from 'vitest';
 import { type CautionSubject, cautionMeanings, hazardCodes } from '#engine';
+import { complexCases } from './complexCases.ts';
+import { hazardCases } from './hazardCases.ts';
+import { placingCases } from './placingCases.ts';
+import { spectralCases } from './spectralCases.ts';
 
 const engine = join(import.meta.dirname, '../../../engine');
 
@@ -18,6 +22,14 @@ test.each([['reading', 'cautions/spectral.ts', 30], ['complex', 'cautions/ofComp
 
 test('every hazard class is in the catalogue', () => {
   expect(listedFor('hazard')).toEqual([...hazardCodes].sort());
+});
+
+/** Every table of pairs: a record that raises a code, and one that comes near and does not. Each has its test beside it. */
+const pairs: Readonly<Record<CautionSubject, Readonly<Record<string, unknown>>>> = { hazard: hazardCases, reading: spectralCases, complex: complexCases, comparison: placingCases };
+
+test('no code of the catalogue is without its pair, and no pair is for another code', () => {
+  const listed = (Object.keys(pairs) as CautionSubject[]).flatMap((subject) => Object.keys(pairs[subject]).map((code) => `${subject} ${code}`));
+  expect(listed.sort()).toEqual(cautionMeanings.map(({ subject, code }) => `${subject} ${code}`).sort());
 });
 
 test('a code stands once and its meaning is one whole text', () => {

@@ -6,8 +6,9 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import Database from 'better-sqlite3';
 import { afterAll, describe, expect, test } from 'vitest';
-import { complexCautions, hazardCodes } from '#engine';
+import { hazardCodes } from '#engine';
 import { refit } from '../../../scripts/database/refit.ts';
+import { complexCases } from './complexCases.ts';
 
 const folder = mkdtempSync(join(tmpdir(), 'bandstead-cautions-'));
 afterAll(() => rmSync(folder, { recursive: true }));
@@ -71,27 +72,7 @@ describe('cautions of a complex', () => {
   const { cautions } = storedOf('cautions');
   const has = (id: string, code: string): boolean => cautions.some((row) => `${row.complex}/${row.measurement}` === id && row.code === code);
 
-  const cases: Readonly<Record<string, { readonly raise: string; readonly spare: readonly string[] }>> = {
-    TRIGONAL_FIELD: { raise: 'cr-en3/first', spare: ['cr-en2-cl2-cis/first', 'cr-am6/warm'] },
-    MEASUREMENTS_DISAGREE: { raise: 'cr-en3/again', spare: ['cr-en2-cl2-cis/first', 'cr-en2-cl2-cis/again', 'cr-am6/warm', 'cr-am6/cold'] },
-    CONDITIONS_DIFFER: { raise: 'cr-am6/warm', spare: ['cr-en3/first', 'cr-en2-cl2-cis/again'] },
-    QUOTED_VALUE_DISAGREES: { raise: 'cr-am6/cold', spare: ['cr-am6/warm'] },
-  };
-
-  test('every one has a case', () => {
-    const number = (value: number) => ({ value, u: 1 });
-    const facts = { phase: 'solution', racahB: null, quotedDisagrees: ['Delta 1 against 2'] };
-    const all = complexCautions({
-      trisChelate: true,
-      measurements: [
-        { ...facts, id: 'a', temperature: 295, delta: number(1) }, { ...facts, id: 'b', temperature: 295, delta: number(9) },
-        { ...facts, id: 'c', temperature: 4, delta: number(1) },
-      ],
-    });
-    expect([...new Set([...all.values()].flat().map(({ code }) => code))].toSorted()).toEqual(Object.keys(cases).toSorted());
-  });
-
-  test.each(Object.entries(cases))('%s: raised by its record, not by those that come near', (code, { raise, spare }) => {
+  test.each(Object.entries(complexCases))('%s: raised by its record, not by those that come near', (code, { raise, spare }) => {
     expect(has(raise, code)).toBe(true);
     expect(spare.filter((id) => has(id, code))).toEqual([]);
   });

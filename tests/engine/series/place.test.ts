@@ -1,25 +1,9 @@
-import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
-import { averageEnvironment, fitFactors, memberPlacements, parentsOf, placeResult, placeWords, placingGround } from '#engine';
-import type { ComparedCollection, Placement, SeriesResult } from '#engine';
-import { randomFrom } from '../../../scripts/generate/random.ts';
-import { identity, result, testFloor, testPolicy } from './sample.ts';
-import type { Invented } from './sample.ts';
+import { averageEnvironment, fitFactors, memberPlacements, parentsOf, placeWords } from '#engine';
+import type { Placement, SeriesResult } from '#engine';
+import { codes, place, planted, regular } from './plantedSeries.ts';
+import { identity, result, testPolicy } from './sample.ts';
 
-const f: Readonly<Record<string, number>> = { aqua: 1, chlorido: 0.78, ammine: 1.25, cyanido: 1.7 };
-const h: Readonly<Record<string, number>> = { aqua: 1, chlorido: 2, ammine: 1.4, cyanido: 2 };
-const g: Readonly<Record<string, number>> = { 'Cr(III)': 17400, 'V(II)': 12000, 'Mo(III)': 24600 };
-const k: Readonly<Record<string, number>> = { 'Cr(III)': 0.21, 'V(II)': 0.08, 'Mo(III)': 0.15 };
-const average = (values: Readonly<Record<string, number>>, set: Readonly<Record<string, number>>): number => Object.entries(set).reduce((sum, [one, count]) => sum + (count * values[one]!) / 6, 0);
-const planted = (ion: string, set: Readonly<Record<string, number>>, more: Partial<Invented> = {}): SeriesResult =>
-  result({ ion, ligands: set, delta: g[ion]! * average(f, set), beta: 1 - k[ion]! * average(h, set), ...more });
-const random = randomFrom(4, 'place');
-const regular = Object.keys(g).flatMap((ion) => ['aqua', 'chlorido', 'ammine', 'cyanido'].map((ligand) => planted(ion, { [ligand]: 6 }))).map((one): SeriesResult => ({
-  ...one, parameters: { ...one.parameters, Delta: { ...one.parameters.Delta, value: one.parameters.Delta.value! * Math.exp(random.normal(0, 0.02)) } },
-}));
-const collectionOf = (results: readonly SeriesResult[]): ComparedCollection => ({ policy: { id: testPolicy, differentialFloor: testFloor }, aqua: 'aqua', results });
-const place = (one: SeriesResult, results: readonly SeriesResult[] = regular): Placement => placeResult(placingGround(collectionOf(results), one.complex, [`${one.complex.id}/${one.measurement}`]), one);
-const codes = (placement: Placement): readonly string[] => placement.cautions.map(({ code }) => code);
 const prediction = (placement: Placement, parameter: string, method: string) => placement.predictions.find((one) => one.parameter === parameter && one.method === method)!;
 
 describe('a new complex', () => {
@@ -136,40 +120,6 @@ describe('what cannot be concluded is said', () => {
   });
   test('an id that another complex has', () => {
     expect(codes(place(planted('Cr(III)', { ammine: 3, aqua: 3 }, { id: 'criii--aqua6' })))).toEqual(['ID_TAKEN']);
-  });
-});
-
-describe('every caution of a placement', () => {
-  const mixed = planted('Cr(III)', { ammine: 3, chlorido: 3 });
-  const at = (delta: number, more: Partial<Invented> = {}) => planted('Cr(III)', { ammine: 3, chlorido: 3 }, { delta, ...more });
-  const ownDelta = mixed.parameters.Delta.value!;
-  const earlier = (away: number) => [...regular, at(ownDelta - away, { id: 'old-name', measurement: 'aq-1998' })];
-  const withoutTemperature = (kept: number) => regular.map((one, i) => (i === kept ? one : { ...one, temperature: null }));
-  const iron = { ion: 'Mn(IV)', ligands: { thiourea: 6 }, delta: 16000 };
-  const pairs: Readonly<Record<string, readonly [trigger: () => Placement, nearMiss: () => Placement]>> = {
-    ALREADY_THERE: [() => place(mixed, [...regular, mixed]), () => place(mixed, [...regular, planted('Cr(III)', { ammine: 4, chlorido: 2 })])],
-    ID_TAKEN: [() => place({ ...mixed, complex: { ...mixed.complex, id: 'criii--aqua6' } }), () => place({ ...mixed, complex: { ...mixed.complex, id: 'criii--aqua5' } })],
-    NO_OTHER_RECORD: [() => place(result({ ion: 'Mn(IV)', ligands: { ammine: 6 }, delta: 30000 })), () => place(result({ ion: 'Mn(IV)', ligands: { ammine: 6 }, delta: 30000 }), [...regular, result(iron)])],
-    SERIES_OF_ONE: [() => place(mixed, [planted('Cr(III)', { aqua: 6 })]), () => place(mixed, [planted('Cr(III)', { aqua: 6 }), planted('Cr(III)', { cyanido: 6 })])],
-    LIGAND_NEVER_SEEN: [() => place(result({ ligands: { thiourea: 6 }, delta: 17000 })), () => place(result({ ligands: { thiourea: 6 }, delta: 17000 }), [...regular, result(iron)])],
-    ISLAND_OF_ITS_OWN: [() => place(result({ ...iron, ligands: { thiourea: 5, urea: 1 } }), [...regular, result(iron)]), () => place(result({ ...iron, ligands: { thiourea: 5, aqua: 1 } }), [...regular, result(iron), result({ ...iron, ligands: { aqua: 6 } })])],
-    OTHER_POLICY: [() => place({ ...mixed, policy: 'own-1' }), () => place(mixed)],
-    TEMPERATURE_NOT_RECORDED: [() => place({ ...mixed, temperature: null }), () => place(mixed)],
-    TEMPERATURES_MIXED: [() => place(mixed, withoutTemperature(-1)), () => place(mixed, withoutTemperature(regular.findIndex(({ complex }) => complex.ion.name === 'Cr(III)')).filter(({ complex }) => complex.ion.name === 'Cr(III)'))],
-    PHASES_MIXED: [() => place({ ...mixed, phase: 'crystal' }), () => place(mixed)],
-    EARLIER_DISAGREES: [() => place(mixed, earlier(400)), () => place(mixed, earlier(100))],
-    FAR_FROM_PREDICTION: [() => place(at(1.3 * ownDelta)), () => place(at(1.03 * ownDelta))],
-    SCATTER_ASSUMED: [() => place(mixed, regular.slice(0, 6)), () => place(mixed)],
-  };
-  test.each(Object.keys(pairs))('%s: said where it applies, not at a near miss', (code) => {
-    const [trigger, nearMiss] = pairs[code]!;
-    expect(codes(trigger())).toContain(code);
-    expect(codes(nearMiss())).not.toContain(code);
-    expect(trigger().cautions.find((one) => one.code === code)!.text).toMatch(/^\S[^\n]{40,}\.$/);
-  });
-  test('has its pair here', () => {
-    const source = readFileSync(new URL('../../../engine/series/placingCautions.ts', import.meta.url), 'utf8');
-    expect([...source.matchAll(/'([A-Z_]{6,})'/g)].map(([, code]) => code).sort()).toEqual(Object.keys(pairs).sort());
   });
 });
 
