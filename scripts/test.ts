@@ -24,9 +24,11 @@ await runCommand(table.name, async () => {
   };
   const scores: Score[] = [];
   if (given.values.length === 0) {
-    scores.push(await runCheck('types of the engine, without Node or a browser', 'tsc', ['--noEmit', '-p', 'engine/tsconfig.json'], say));
-    scores.push(await runCheck('types of the project, pages included', 'astro', ['check'], say));
-    scores.push(await runCheck('form of the code', 'biome', ['check', '--config-path=tests/biome.json', '.'], say));
+    scores.push(...await Promise.all([
+      runCheck('types of the project, pages included', 'astro', ['check'], say),
+      runCheck('types of the engine, without Node or a browser', 'tsc', ['--noEmit', '-p', 'engine/tsconfig.json'], say),
+      runCheck('form of the code', 'biome', ['check', '--config-path=tests/biome.json', '.'], say),
+    ]));
   }
   const browser = findChromium();
   scores.push(await runTests(given.values, browser !== null));

@@ -1,3 +1,4 @@
+import { availableParallelism } from 'node:os';
 import { fileURLToPath } from 'node:url';
 import { configDefaults, defineConfig } from 'vitest/config';
 import { testsLeftOut } from '../scripts/test/demonstrationTests.ts';
@@ -13,8 +14,8 @@ export default defineConfig({
     // A test left focused would hide the others.
     allowOnly: false,
     globalSetup: ['tests/run/folder.ts'],
-    // By itself the runner would leave one processor idle.
-    maxWorkers: '100%',
+    // By itself the runner would leave one processor idle; one worker more than processors works while others wait for a process or a page.
+    maxWorkers: availableParallelism() + 1,
     // Modules are evaluated once a worker: half the time, and a test that leaves something behind in a module shows up.
     isolate: false,
     testTimeout: 60_000,

@@ -40,7 +40,8 @@ describe.each(['/', '/bands/'])('the site under %s', (base) => {
 
   test('every page opens without a console line, an error or a request to another host', async () => {
     const { page, trouble } = await watchedPage(browser, site);
-    for (const { path } of builtPages(site)) {
+    // What hangs on the base path shows on one page of each kind.
+    for (const path of base === '/' ? builtPages(site).map((one) => one.path) : PAGE_KINDS) {
       await page.goto(site.address + path);
       expect(trouble, path).toEqual([]);
     }

@@ -3,10 +3,12 @@ import { defaultPolicy } from '#engine';
 import type { FieldParameters, Policy } from '#engine';
 import { transitionsAt } from '../../../engine/readings/evaluate.ts';
 import { isFit } from '../../../engine/readings/fitTypes.ts';
+import { profileTaskOf } from '../../../engine/readings/limits.ts';
+import { isBent, profileLimits } from '../../../engine/readings/profile.ts';
 import { floorOf } from '../../../engine/readings/transitions.ts';
 import { groundLabel } from '../../../engine/levels/labels.ts';
 import { seeded } from '../../published/random.ts';
-import { assumed, fitOf, planted, readings, valuesOf } from './planted.ts';
+import { assumed, fitOf, planted, readings, transitionEnergies, valuesOf } from './planted.ts';
 import type { Planted } from './planted.ts';
 
 // Known parameters, noise of the stated size, 10 000 draws: an interval of one standard uncertainty must hold the truth
@@ -14,6 +16,8 @@ import type { Planted } from './planted.ts';
 
 const long = process.env['BANDSTEAD_LONG'] === '1';
 const draws = long ? 50_000 : 10_000;
+/** A profile costs a hundred fits. */
+const profileDraws = long ? 10_000 : 2000;
 
 /** Normal deviates of mean 0 and variance 1 (G. E. P. Box and M. E. Muller, Ann. Math. Stat. 29, 610 (1958)). */
 function normalDeviates(seed: number): () => number {
@@ -51,6 +55,12 @@ const experiments: readonly (readonly [string, Experiment])[] = [
 const freeExperiments: readonly (readonly [string, Experiment])[] = [
   ['Cr(III), two bands and 2Eg, C free, none spare', experiment(planted('Cr(III)', 3, 'octahedral', 4, 'a4T2g a4T1g a2Eg', 17_400, 700, 4.6), [100, 100, 20], ['Delta', 'B', 'C'], withFloors(40))],
   ['Mn(II), five spin-forbidden bands, C free, two spare', experiment(planted('Mn(II)', 5, 'octahedral', 6, 'a4T1g a4T2g a4A1g/a4Eg b4T2g b4Eg', 8000, 780, 4.3), [80, 80, 20, 60, 30], ['Delta', 'B', 'C'], withFloors(30))],
+];
+
+/** Curves of chi2 that are no parabolas: large u beside a number that moves the bands less and less. Their intervals come from the profile. */
+const bentExperiments: readonly (readonly [string, Experiment])[] = [
+  ['Cr(III), two bands, none spare, B loose', experiment(planted('Cr(III)', 3, 'octahedral', 4, 'a4T2g a4T1g', 17_400, 725), [150, 500])],
+  ['Ni(II), three bands, one spare, B loose', experiment(planted('Ni(II)', 8, 'octahedral', 3, 'a3T2g a3T1g b3T1g', 9500, 900), [400, 600, 1500])],
 ];
 
 /** What is drawn: readings with their u alone, or with the model's floor and a true C/B that is not the assumed one. */
@@ -92,6 +102,33 @@ function coverage({ one, u, policy, uRatio, counted }: Experiment, { noise, inte
   return Object.fromEntries(counted.map((name, c) => [name, hits[c]!.map((hit) => (100 * hit) / count) as [number, number]]));
 }
 
+/** The same by the profile, with floors in the noise and C/B known; `bent` is the share of draws whose curve is no parabola. */
+function profileCoverage({ one, u, policy, counted }: Experiment, count: number, seed: number): { readonly found: Record<string, [number, number]>; readonly bent: number } {
+  const deviate = normalDeviates(seed);
+  const exact = transitionEnergies(one.ion, one.labels, one.at);
+  const floors = one.labels.map((label) => floorOf(one.ion, label, policy));
+  const ratio = one.at.racahC / one.at.racahB;
+  const hits = counted.map((): [number, number] => [0, 0]);
+  let bent = 0;
+  for (let n = 0; n < count; n++) {
+    const assigned = readings(one.labels, exact.map((position, k) => position + deviate() * Math.hypot(u[k]!, floors[k]!)), u);
+    const fit = fitOf(one, assigned, { policy, ratio: assumed(ratio, 0) });
+    if (!isFit(fit)) continue;
+    const task = profileTaskOf(one.ion, assigned, fit)!;
+    const covariance = [0, 1].map((i) => [0, 1].map((j) => fit.total[i]![j]!));
+    if ([0, 1].some((i) => isBent(task, i, covariance))) bent += 1;
+    counted.forEach((name, c) => {
+      const i = ['Delta', 'B'].indexOf(name);
+      [1, 1.959964 ** 2].forEach((rise, which) => {
+        const limits = profileLimits(task, i, Math.sqrt(covariance[i]![i]!), rise);
+        const truth = valuesOf(one.at)[i]!;
+        if (limits !== null && limits.low < truth && truth < limits.high) hits[c]![which]! += 1;
+      });
+    });
+  }
+  return { found: Object.fromEntries(counted.map((name, c) => [name, hits[c]!.map((hit) => (100 * hit) / count) as [number, number]])), bent: bent / count };
+}
+
 function expectCoverage(found: Record<string, [number, number]>): void {
   const bad = Object.entries(found).filter(([, [inner, outer]]) => !(inner >= 66 && inner <= 70 && outer >= 94 && outer <= 96));
   const story = Object.entries(found).map(([name, [inner, outer]]) => `${name} ${inner.toFixed(1)} % and ${outer.toFixed(1)} %`).join('; ');
@@ -115,6 +152,14 @@ describe(`intervals of 1 u and 1.96 u hold the truth in 66 to 70 and 94 to 96 of
   test.runIf(long).each(freeExperiments)('readings alone (long runs only: slow): %s', (_, one) => {
     expectCoverage(coverage(one, { noise: 'readings', interval: 'reading', draws, seed: 34 }));
   }, 600_000);
+});
+
+describe(`limits from the profile hold the truth as often (${profileDraws} draws)`, () => {
+  test.each(bentExperiments)('%s', (_, one) => {
+    const { found, bent } = profileCoverage(one, profileDraws, 41);
+    expectCoverage(found);
+    expect(bent).toBeGreaterThan(0.4);
+  }, 900_000);
 });
 
 describe('the count itself can fail', () => {
