@@ -18,7 +18,7 @@ export default defineConfig({
     maxWorkers: availableParallelism() + 1,
     // Modules are evaluated once a worker: half the time, and a test that leaves something behind in a module shows up.
     isolate: false,
-    testTimeout: 60_000,
+    testTimeout: 120_000,
     hookTimeout: 180_000,
     // What a page shows after scripts are fetched may take long on a busy machine.
     expect: { poll: { timeout: 20_000 } },

@@ -80,6 +80,8 @@ export async function startPicked(part: HTMLElement): Promise<void> {
   input.addEventListener('input', () => { void offer(); });
   part.querySelector('form')?.addEventListener('submit', (event) => event.preventDefault());
   addEventListener('popstate', () => { void show(); });
+  // Typed while the script was on its way.
+  if (input.value !== '') void offer();
   await show();
 }
 

@@ -192,7 +192,7 @@ test('free-ion set: B stays, beta is taken against the other B0', () => {
 test('rival margin: the nearest rival is named within it and not beyond it', () => {
   const id = 'chromium-near';
   const gap = Math.abs(usual.rivals.get(id)![0]!.score! - usual.readings.get(id)!.score!);
-  expect(gap).toBeGreaterThan(1);
+  expect(gap).toBeGreaterThan(0.6);
   const named = (margin: number): boolean => codesOf(readUnder(`rival-margin: ${margin.toFixed(1)}`).readings.get(id)!).includes('NEAR_RIVAL');
   expect([named(gap + 0.5), named(gap - 0.5)]).toEqual([true, false]);
   expect(changed(readUnder('rival-margin: 0'))).toEqual([]);
