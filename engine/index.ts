@@ -18,6 +18,7 @@ export { defaultPolicy, policyId } from './policy/policy.ts';
 export type { Estimate, FloorClass, Policy } from './policy/types.ts';
 // Measurements: what goes in
 export { bandUncertainty } from './measurement/defaultUncertainty.ts';
+export { couldBeSeen } from './measurement/scanned.ts';
 export type { Band, BandKind, BandRole, Measurement } from './measurement/types.ts';
 export type { Range } from './quantity/range.ts';
 // Cautions and words

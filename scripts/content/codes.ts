@@ -90,6 +90,7 @@ const chemistryCodes = {
   BAND_WIDTH: 'a width that is not smaller than the position',
   ABSENT_OVERLAP: 'a band inside a range that is declared absent',
   BAND_UNIT: 'a band outside what was scanned, whose number would lie inside in the other unit, nm or cm-1; or one below 2500 cm-1 that is typed neither as vibration nor inside what was scanned',
+  BAND_NOT_SCANNED: 'a band to be fitted that lies outside what was scanned',
   NO_SOURCE: 'a measurement with neither notebook nor cite',
   TERM_UNREADABLE: 'a term label that cannot be read',
   TERM_UNKNOWN: 'a term that the ion has not',

@@ -52,7 +52,8 @@ export function spectrumOf(recipe: Recipe, truth: Truth, setting: Setting, seed:
   const all = truth.transitions.map((transition) => candidateOf(transition, recipe, setting, shift, random));
   const broad = all.filter((one) => !one.transition.narrow && isOpen(one, setting, edge - 600) && isNoticed(one, recipe, random));
   const narrow = all.filter((one) => one.transition.narrow && isOpen(one, setting, edge - 2500) && standsClear(one, broad, setting) && random.chance(isCold(setting) ? 0.9 : 0.6));
-  const seen = [...broad.flatMap((one) => asRead(one, broad, edge, recipe, truth, random)), ...narrow.map((one) => asLine(one, random))];
+  const read = broad.map((one) => asRead(one, broad, edge, recipe, truth, random)).filter((parts) => parts.every((part) => isScanned(part, setting)));
+  const seen = [...read.flat(), ...narrow.map((one) => asLine(one, random))];
   const transfer = chargeTransferBand(edge, setting, random);
   return [...seen, ...(transfer ? [transfer] : [])].sort((a, b) => a.position - b.position);
 }
@@ -81,6 +82,9 @@ function isOpen(one: Candidate, setting: Setting, upper: number): boolean {
   const high = Math.min((setting.scan?.high ?? 33000) - 200, upper);
   return one.position > low && one.position < high;
 }
+
+/** Whether a part of a band still lies in the scan, after splitting and reading. */
+const isScanned = ({ position }: SeenBand, { scan }: Setting): boolean => scan === null || (position > scan.low && position < scan.high);
 
 /** Weak broad bands are not always noted. */
 function isNoticed(one: Candidate, recipe: Recipe, random: Random): boolean {

@@ -1,14 +1,13 @@
 // Bands and absent ranges of one measurement: fields that go together, widths, overlaps.
 
-import { toWavenumber, widthToWavenumber } from '#engine';
+import { couldBeSeen, toWavenumber, widthToWavenumber } from '#engine';
+import type { Range } from '#engine';
 import { typedText } from '../report.ts';
 import type { Reporter } from '../report.ts';
 import { highestBand, lowestBand } from '../schema/physical.ts';
 import type { TypedRanges } from '../schema/leaves.ts';
+import { bandRoles } from '../records/measurement.ts';
 import type { MeasurementDraft } from './complex.ts';
-
-/** How far beyond the typed end of a scan a band may be read: ends are round numbers, and the foot of a band shows its middle. */
-const beyondScan = 0.05;
 
 /**
  * Below this, cm-1, lie vibrations and their overtones, and no maximum of a d-d or charge-transfer band: the smallest splittings of
@@ -37,11 +36,9 @@ export function checkBands({ bands, scanned }: MeasurementDraft, path: readonly 
     }
     if (band.position === undefined) return;
     const { position } = toWavenumber(band.position);
-    if (band.width !== undefined) {
-      const width = widthToWavenumber(position, band.width);
-      if (width === null || width >= position) {
-        report.at(at('width'), { code: 'BAND_WIDTH', found: typedText(band.width.typed), expected: `a width smaller than the position, ${band.position.typed}`, mend: 'check the number and its unit' });
-      }
+    const width = band.width === undefined ? null : widthToWavenumber(position, band.width);
+    if (band.width !== undefined && (width === null || width >= position)) {
+      report.at(at('width'), { code: 'BAND_WIDTH', found: typedText(band.width.typed), expected: `a width smaller than the position, ${band.position.typed}`, mend: 'check the number and its unit' });
     }
     const asWavelength = wavelengthTypedAsWavenumber(band.position.typed, position, band.term);
     if (asWavelength !== null && !wasScanned(position, looked) && !wasScanned(1e7 / position, looked)) {
@@ -49,12 +46,13 @@ export function checkBands({ bands, scanned }: MeasurementDraft, path: readonly 
         code: 'BAND_UNIT', found: typedText(band.position.typed), expected: `a position above ${lowestElectronic} cm-1, below which only vibrations lie`,
         mend: `if it is a wavelength write ${asWavelength}; if it is a vibration add term: vibration; if it is a band, type scanned with its range`,
       });
-    }
-    if (looked.length > 0 && /cm|nm/.test(band.position.typed) && !wasScanned(position, looked) && wasScanned(1e7 / position, looked)) {
-      report.at(at('position'), {
-        code: 'BAND_UNIT', found: `${typedText(band.position.typed)}, scanned ${looked.map(({ typed }) => typed).join('; ')}`, expected: 'a position inside what was scanned',
-        mend: 'check the unit: the same number in the other one, nm or cm-1, lies inside',
-      });
+    } else if (looked.length > 0 && !couldBeSeen(position, width, rangesOf(looked))) {
+      const place = { found: `${typedText(band.position.typed)}, scanned ${looked.map(({ typed }) => typed).join('; ')}`, expected: 'a position inside what was scanned' };
+      if (/cm|nm/.test(band.position.typed) && wasScanned(1e7 / position, looked)) {
+        report.at(at('position'), { ...place, code: 'BAND_UNIT', mend: 'check the unit: the same number in the other one, nm or cm-1, lies inside' });
+      } else if (isFitted(band)) {
+        report.at(at('position'), { ...place, code: 'BAND_NOT_SCANNED', mend: 'correct the position, type in scanned all that was looked at, or say with left-out why the band is only noted' });
+      }
     }
     const inside = absent.find(({ low, high }) => position > low && position < high);
     if (inside !== undefined) {
@@ -64,6 +62,11 @@ export function checkBands({ bands, scanned }: MeasurementDraft, path: readonly 
       });
     }
   });
+}
+
+/** Not a charge-transfer band and the like, and not left out: such may be noted from elsewhere, and nothing hangs on them. */
+function isFitted({ term, 'left-out': leftOut }: { readonly term?: unknown; readonly 'left-out'?: unknown }): boolean {
+  return leftOut === undefined && !(typeof term === 'string' && bandRoles.includes(term));
 }
 
 /** The typed wavenumber as a wavelength, where no electronic band can lie so low; null where one can, or the unit is another. */
@@ -79,6 +82,6 @@ function rangesScanned(scanned: MeasurementDraft['scanned']): readonly TypedRang
   return all.some((one) => one === undefined) ? [] : all.filter((one) => one !== undefined);
 }
 
-function wasScanned(position: number, looked: readonly TypedRanges[]): boolean {
-  return looked.flatMap(({ ranges }) => ranges).some(({ low, high }) => position > low * (1 - beyondScan) && position < high * (1 + beyondScan));
-}
+const rangesOf = (looked: readonly TypedRanges[]): readonly Range[] => looked.flatMap(({ ranges }) => ranges);
+
+const wasScanned = (position: number, looked: readonly TypedRanges[]): boolean => couldBeSeen(position, null, rangesOf(looked));

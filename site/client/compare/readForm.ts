@@ -1,6 +1,6 @@
 import {
   type Band, type BandKind, type BandRole, type BoundLigand, type ComplexIdentity, type Ion, type Measurement, type QuantityFault, type Range,
-  complexCharge, donorCount, parseIon, parseQuantity, parseRanges, toKelvin, toWavenumber, widthToWavenumber,
+  complexCharge, couldBeSeen, donorCount, parseIon, parseQuantity, parseRanges, toKelvin, toWavenumber, widthToWavenumber,
 } from '#engine';
 import { fittedGeometry, hasSpinChoice, resolvedSpin } from '../../../scripts/content/spin.ts';
 import { type GeometryName, geometries, spinNames } from '../../../scripts/content/vocabulary.ts';
@@ -44,6 +44,7 @@ export function readForm(form: TypedForm, known: KnownCollection): ReadForm {
     readTerms(whole, filled.map(({ place }) => place), { ion, geometry, multiplicity: spin.multiplicity, ratio: known.parentRatios[ion.name] ?? null }, say);
   }
   if (whole !== null && absent !== null) checkAbsent(whole, absent, say);
+  if (whole !== null && scanned !== null) checkScanned(whole, filled.map(({ place }) => place), scanned, say);
   // A reading does not wait for ligands that are half typed.
   const spectrumStands = faults.length === 0;
   const held = readLigands(form, ion, known, say);
@@ -123,6 +124,13 @@ function readBand(typed: BandFields, at: string, say: Say): Band | null {
 function checkAbsent(bands: readonly Band[], absent: readonly Range[], say: Say): void {
   const inside = absent.flatMap(({ low, high }) => bands.filter(({ position, width }) => position + (width ?? 0) / 2 > low && position - (width ?? 0) / 2 < high));
   if (inside.length > 0) say('absent', `a range without any band, ended before a band rises to half its height; it reaches the band at ${inside[0]!.position.toFixed(0)} cm-1`);
+}
+
+function checkScanned(bands: readonly Band[], places: readonly number[], scanned: readonly Range[], say: Say): void {
+  if (scanned.length === 0) return;
+  bands.forEach(({ position, width, role, leftOut }, k) => {
+    if (role === 'transition' && leftOut === null && !couldBeSeen(position, width, scanned)) say(`bands.${places[k]}.position`, 'expected a position inside what was scanned; correct the one or the other');
+  });
 }
 
 /** The ligands, where all are known, donor atoms and charge add up. */

@@ -52,6 +52,7 @@ describe('a bad entry is explained beside its field', () => {
     ['too few donor atoms', { ligands: [{ ligand: 'ammine', count: '5', bound: '' }] }, 'ligands.0.count: these bind with 5 donor atoms; octahedral needs 6'],
     ['a charge that does not add up', { formula: '[Cr(NH3)6]2+' }, 'formula: ion and ligands make the charge +3, not +2'],
     ['an empty range over a band', { absent: '20000 - 22000 cm-1' }, 'absent: '],
+    ['a band outside what was scanned', { scanned: '300 - 400 nm' }, 'bands.0.position: expected a position inside what was scanned'],
     ['a temperature without unit', { temperature: '295' }, 'temperature: expected'],
   ])('%s', (_, changes, wanted) => {
     expect(faultsOf(changes).join('\n')).toContain(wanted);
