@@ -1,10 +1,10 @@
-import type { Geometry } from '#engine';
+import { type Geometry, shownLabel } from '#engine';
 import { lowSpinMultiplicity, possibleMultiplicities } from '../../scripts/content/spin.ts';
 import { digits, signedDigits } from '../client/collection/digits.ts';
 import { type PackedSearch, bandUnit, deltaUnit, heldLigands, usualFormula } from '../client/collection/packed.ts';
 import { collectionPage, orderedResults } from './collection.ts';
 import { groupBy } from './group.ts';
-import type { CollectionTree, ComplexNode } from './tree.ts';
+import type { CollectionTree, ComplexNode, MeasurementNode } from './tree.ts';
 
 /** What the search in the page reads, in the order of the book. */
 export function searchData(tree: CollectionTree): PackedSearch {
@@ -13,6 +13,7 @@ export function searchData(tree: CollectionTree): PackedSearch {
   const [states, state] = places<PackedSearch['states'][number]>();
   const [circumstances, circumstance] = places<PackedSearch['circumstances'][number]>();
   const [outcomes, outcome] = places<PackedSearch['outcomes'][number]>();
+  const [terms, term] = places<readonly number[]>();
   const ionPlace = new Map(tree.ions.map((row, place) => [row.name, place]));
   const ligandPlace = new Map(tree.ligands.map((row, place) => [row.id, place]));
   const racahB0 = new Map(tree.freeIons.filter((row) => row.set_name === tree.policy.free_ion_set).map((row) => [row.ion, row.B0]));
@@ -44,16 +45,22 @@ export function searchData(tree: CollectionTree): PackedSearch {
     },
     rows: {
       circumstance: digits(rows.map(({ row }) => circumstance([word(row.id), word(row.phase), word(row.medium ?? row.host ?? '')]))),
-      outcome: digits(rows.map(({ chosen, bands }) => outcome([word(chosen.row.verdict), chosen.parameters.C.standing === 'fitted' ? 1 : 0, chosen.parameters.beta.value === null ? 0 : 1, bands.length]))),
+      outcome: digits(rows.map((measurement) => outcome([
+        word(measurement.chosen.row.verdict), measurement.chosen.parameters.C.standing === 'fitted' ? 1 : 0, measurement.chosen.parameters.beta.value === null ? 0 : 1, measurement.bands.length,
+        term(observedTerms(measurement).map(word)),
+      ]))),
       deltaStep: signedDigits(deltas.map((delta, place) => delta - (deltas[place - 1] ?? 0))), racahB: digits(rows.map(({ chosen }) => Math.round(chosen.parameters.B.value ?? 0))),
       bands: digits(rows.flatMap(({ bands }) => bands.map(({ position }) => Math.round(position / bandUnit)))),
     },
   };
   return {
     counts: collectionPage(tree, 1).counts, ligands, ions: tree.ions.map(({ name, metal, oxidation, electrons }) => ({ name, metal, oxidation, electrons, racahB0: racahB0.get(name) ?? null })),
-    ...packed, words: words(), sets: sets(), states: states(), circumstances: circumstances(), outcomes: outcomes(),
+    ...packed, words: words(), sets: sets(), states: states(), circumstances: circumstances(), outcomes: outcomes(), terms: terms(),
   };
 }
+
+/** Each term once, as printed, that the chosen reading takes a band for. */
+const observedTerms = ({ chosen, complex }: MeasurementNode): readonly string[] => [...new Set(chosen.transitions.map(({ row }) => shownLabel(row.label, complex.ion.electrons)))].sort();
 
 interface KindKey {
   readonly set: number;

@@ -86,6 +86,34 @@ test('filters, sorting and query stand in the address; back and forward walk thr
   await page.context().close();
 });
 
+test('columns are chosen, in the address too; terms observed are a filter with their superscripts', async () => {
+  const { page, trouble } = await watchedPage(browser, site);
+  await page.goto(site.address);
+  const shown = (): Promise<readonly string[]> => page.locator('table.results thead th:visible').evaluateAll((heads) => heads.map((head) => (head.textContent ?? '').trim().split(/\s/)[0]!));
+  const whole = await shown();
+  await page.getByText('Columns', { exact: true }).click();
+  await page.getByRole('checkbox', { name: 'conditions' }).uncheck();
+  await page.getByRole('checkbox', { name: 'β' }).uncheck();
+  expect(new URL(page.url()).search).toBe('?without=conditions&without=beta');
+  const fewer = whole.filter((_, place) => place !== 2 && place !== 5);
+  await expect.poll(shown).toEqual(fewer);
+  expect(await page.locator('table.results tbody tr:not(.section)').first().locator(':scope > :visible').count()).toBe(5);
+  // Rows that the page itself draws leave them out as well.
+  await page.getByText('Filters', { exact: true }).click();
+  const term = page.locator('label').filter({ has: page.locator('input[name=term][value="4T2g"]') });
+  expect(await term.locator('sup').textContent()).toBe('4');
+  await term.locator('input').check();
+  await expect.poll(() => page.locator('table.results tbody a.formula').count()).toBe(5);
+  expect(await page.locator('table.results tbody tr').first().locator(':scope > :visible').count()).toBe(5);
+  await page.goto(page.url());
+  await expect.poll(() => page.locator('table.results tbody a.formula').count()).toBe(5);
+  expect(await shown()).toEqual(fewer);
+  await page.goBack();
+  await page.goBack();
+  expect(trouble).toEqual([]);
+  await page.context().close();
+});
+
 test('a column sorts by value up and down with what is withheld last, and a third press brings the order of the book', async () => {
   const { page } = await watchedPage(browser, site);
   await page.goto(site.address);

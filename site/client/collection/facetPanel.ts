@@ -1,4 +1,6 @@
 import { escapeText } from '../../charts/text.ts';
+import { partsMarkup } from '../../components/resultRow.ts';
+import { sentenceShown } from '../../data/typeset.ts';
 import type { Chosen, Facet } from './facets.ts';
 
 /** Draws the facets with their counts as groups of checkboxes, and keeps both up to date. */
@@ -9,7 +11,7 @@ export interface FacetPanel {
 export function createFacetPanel(panel: HTMLElement, facets: readonly Facet[], toggle: (facet: string, value: string) => void): FacetPanel {
   panel.innerHTML = facets.map(({ name, title, values }, place) =>
     `<fieldset><legend>${escapeText(title)}</legend><div class="values${values.length > 12 ? ' many' : ''}"${values.length > 12 ? ` tabindex="0" role="group" aria-label="${escapeText(title)}"` : ''}>`
-    + values.map((value, index) => `<label><input type="checkbox" name="${escapeText(name)}" value="${escapeText(value)}"/> ${escapeText(shown(name, value))} <span class="soft" data-count="${place}.${index}"></span></label>`).join('')
+    + values.map((value, index) => `<label><input type="checkbox" name="${escapeText(name)}" value="${escapeText(value)}"/> ${shownMarkup(name, value)} <span class="soft" data-count="${place}.${index}"></span></label>`).join('')
     + '</div></fieldset>').join('');
   panel.addEventListener('change', ({ target }) => { if (target instanceof HTMLInputElement) toggle(target.name, target.value); });
   const boxes = [...panel.querySelectorAll<HTMLInputElement>('input')];
@@ -27,6 +29,10 @@ export function createFacetPanel(panel: HTMLElement, facets: readonly Facet[], t
   };
 }
 
-/** "d3" with its number raised. */
 const RAISED = '⁰¹²³⁴⁵⁶⁷⁸⁹';
-export const shown = (facet: string, value: string): string => facet === 'd' ? `d${[...value.slice(1)].map((digit) => RAISED[Number(digit)]).join('')}` : value;
+
+/** A value as it is set: "d3" with its number raised, a term with its multiplicity raised. */
+export function shownMarkup(facet: string, value: string): string {
+  if (facet === 'd') return `d${[...value.slice(1)].map((digit) => RAISED[Number(digit)]).join('')}`;
+  return facet === 'term' ? partsMarkup(sentenceShown(value)) : escapeText(value);
+}

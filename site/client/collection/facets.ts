@@ -35,6 +35,7 @@ export function facetsOf(collection: FoundCollection): readonly Facet[] {
     make('ligand', 'Ligand', (_, { set }) => held[set]!),
     make('phase', 'Phase', ({ phase }) => [phase]),
     make('verdict', 'Verdict', ({ verdict }) => [verdict], worth),
+    make('term', 'Term observed', ({ terms }) => terms),
     make('C', 'C', ({ cFitted }) => [cFitted ? 'measured' : 'not measured']),
   ].filter(({ values }) => values.length > 1);
 }

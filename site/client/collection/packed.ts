@@ -29,8 +29,10 @@ export interface PackedSearch {
   readonly states: readonly (readonly [ion: number, geometry: number, spin: number, head: string])[];
   /** Id of the measurement, phase and medium, words. */
   readonly circumstances: readonly (readonly [measurement: number, phase: number, medium: number])[];
-  /** Verdict (a word), whether C was fitted, whether beta is known, number of bands. */
-  readonly outcomes: readonly (readonly [verdict: number, cFitted: 0 | 1, beta: 0 | 1, bands: number])[];
+  /** Verdict (a word), whether C was fitted, whether beta is known, number of bands, terms observed (a place in `terms`). */
+  readonly outcomes: readonly (readonly [verdict: number, cFitted: 0 | 1, beta: 0 | 1, bands: number, terms: number])[];
+  /** Terms that the chosen readings take their bands for, as printed, words. */
+  readonly terms: readonly (readonly number[])[];
   readonly complexes: {
     readonly state: Column;
     readonly kind: Column;
@@ -80,6 +82,8 @@ export interface FoundRow {
   readonly medium: string;
   readonly verdict: string;
   readonly cFitted: boolean;
+  /** Terms observed, as printed. */
+  readonly terms: readonly string[];
   readonly delta: number | null;
   readonly racahB: number | null;
   readonly beta: number | null;
@@ -95,6 +99,7 @@ export interface FoundCollection {
 /** Unpacks the columns. */
 export function unpackSearch(packed: PackedSearch): FoundCollection {
   const { words, ions, sets, ligands, states, circumstances, outcomes } = packed;
+  const terms = packed.terms.map((set) => set.map((word) => words[word]!));
   const [kindSet, kindIsomer, tails, formulas] = [ofDigits(packed.kinds.set), ofDigits(packed.kinds.isomer), packed.kinds.tail.split(' '), new Map(packed.kinds.formula)];
   const [stateOf, kindOf, rowsOf, names] = [ofDigits(packed.complexes.state), ofDigits(packed.complexes.kind), ofDigits(packed.complexes.rows), new Map(packed.complexes.names)];
   const [circumstance, outcome, deltaStep, racahB, bands] = [ofDigits(packed.rows.circumstance), ofDigits(packed.rows.outcome), ofSignedDigits(packed.rows.deltaStep), ofDigits(packed.rows.racahB), ofDigits(packed.rows.bands)];
@@ -113,10 +118,10 @@ export function unpackSearch(packed: PackedSearch): FoundCollection {
     for (let left = rowsOf[complex]!; left > 0; left -= 1) {
       const place = rows.length;
       const [measurement, phase, medium] = circumstances[circumstance[place]!]!;
-      const [verdict, cFitted, beta, count] = outcomes[outcome[place]!]!;
+      const [verdict, cFitted, beta, count, observed] = outcomes[outcome[place]!]!;
       delta += deltaStep[place]!;
       rows.push({
-        place, complex, measurement: words[measurement]!, phase: words[phase]!, medium: words[medium]!, verdict: words[verdict]!, cFitted: cFitted === 1,
+        place, complex, measurement: words[measurement]!, phase: words[phase]!, medium: words[medium]!, verdict: words[verdict]!, cFitted: cFitted === 1, terms: terms[observed]!,
         delta: delta === 0 ? null : delta * deltaUnit, racahB: racahB[place] || null, beta: beta === 1 && ion.racahB0 !== null ? racahB[place]! / ion.racahB0 : null,
         bands: bands.slice(band, band + count).map((step) => step * bandUnit),
       });

@@ -3,8 +3,9 @@ import { counted } from '../../data/show.ts';
 import { fetchJson } from '../page/fetchJson.ts';
 import { keepFile } from '../page/keepFile.ts';
 import { url } from '../../url.ts';
-import { type TableState, isEmpty, stateOf, toggled, withState } from './address.ts';
-import { createFacetPanel, shown } from './facetPanel.ts';
+import { type TableState, isEmpty, stateOf, toggled, withColumn, withState } from './address.ts';
+import { createColumnChoice } from './columns.ts';
+import { createFacetPanel, shownMarkup } from './facetPanel.ts';
 import { type Facet, facetsOf, filtered } from './facets.ts';
 import { csvOf, jsonOf } from './files.ts';
 import { nextSorting, ordered } from './order.ts';
@@ -25,7 +26,7 @@ interface Loaded {
 }
 
 /** Names of facets in the address, known before the data are there. */
-const FACETS = ['ion', 'd', 'geometry', 'spin', 'donors', 'ligand', 'phase', 'verdict', 'C'];
+const FACETS = ['ion', 'd', 'geometry', 'spin', 'donors', 'ligand', 'phase', 'verdict', 'term', 'C'];
 
 const breathe = (): Promise<void> => new Promise((done) => { setTimeout(done, 0); });
 
@@ -42,6 +43,8 @@ function startCollection(tools: HTMLElement, table: HTMLTableElement, status: HT
   let wanted: ReadonlySet<string> | null = null;
   let turn = 0;
   let typing = false;
+
+  const columns = createColumnChoice(tools.querySelector<HTMLElement>('[data-place=columns]')!, table, (name) => ask(withColumn(state(), name), 'push'));
 
   const state = (): TableState => stateOf(new URL(location.href).searchParams, FACETS);
 
@@ -84,6 +87,7 @@ function startCollection(tools: HTMLElement, table: HTMLTableElement, status: HT
     const now = state();
     showSorting(now.sorting);
     showChips(now);
+    columns.show(now.hidden);
     if (isEmpty(now) && pages === null) {
       showBuilt();
       const ready = loaded === null ? null : await loaded.catch(() => null);
@@ -119,7 +123,7 @@ function startCollection(tools: HTMLElement, table: HTMLTableElement, status: HT
 
   const showChips = ({ chosen }: TableState): void => {
     const list = [...chosen].flatMap(([facet, values]) => [...values].map((value) => ({ facet, value })));
-    chips.innerHTML = list.map(({ facet, value }) => `<li><button type="button" data-facet="${escapeText(facet)}" data-value="${escapeText(value)}" aria-label="Take away the filter ${escapeText(shown(facet, value))}">${escapeText(shown(facet, value))} ×</button></li>`).join('')
+    chips.innerHTML = list.map(({ facet, value }) => `<li><button type="button" data-facet="${escapeText(facet)}" data-value="${escapeText(value)}" aria-label="Take away the filter ${escapeText(value)}">${shownMarkup(facet, value)} ×</button></li>`).join('')
       + (list.length > 1 ? '<li><button type="button" data-clear>all filters ×</button></li>' : '');
   };
 

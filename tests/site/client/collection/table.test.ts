@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { isEmpty, stateOf, toggled, withState } from '../../../../site/client/collection/address.ts';
+import { type Column, isEmpty, stateOf, toggled, withColumn, withState } from '../../../../site/client/collection/address.ts';
 import { facetsOf, filtered } from '../../../../site/client/collection/facets.ts';
 import { csvOf, csvRecords, jsonOf } from '../../../../site/client/collection/files.ts';
 import { SORT_KEYS, nextSorting, ordered } from '../../../../site/client/collection/order.ts';
@@ -59,6 +59,13 @@ describe('facets', () => {
     }));
   });
 
+  test('terms observed are those of the chosen readings, as printed', () => {
+    const terms = facets.find(({ name }) => name === 'term')!;
+    expect(terms.values).toEqual(expect.arrayContaining(['4T2g', '3T2g', '2Eg']));
+    expect(new Set(ids(filtered(facets, new Map([['term', new Set(['4T1'])]]), all).rows))).toEqual(new Set());
+    expect(new Set(ids(filtered(facets, new Map([['term', new Set(['a4T1'])]]), all).rows))).toEqual(new Set(['co-cl4']));
+  });
+
   test('two values of one facet widen, two facets narrow', () => {
     expect(new Set(ids(filtered(facets, new Map([['ion', new Set(['Ni(II)', 'Co(II)'])]]), all).rows))).toEqual(new Set(['ni-aq6', 'ni-am6', 'co-cl4']));
     expect(new Set(ids(filtered(facets, new Map([['ion', new Set(['Ni(II)', 'Co(II)'])], ['geometry', new Set(['tetrahedral'])]]), all).rows))).toEqual(new Set(['co-cl4']));
@@ -68,13 +75,15 @@ describe('facets', () => {
 
 test('the whole state goes into the address and comes back, and leaves other parameters alone', () => {
   const names = ['ion', 'ligand'];
-  const state = { query: 'Cr(NH3)6 & "x"', sorting: { key: 'Delta', descending: true }, chosen: new Map([['ion', new Set(['Cr(III)', 'Co(III)'])], ['ligand', new Set(["2,2'-bipyridine"])]]) } as const;
+  const state = { query: 'Cr(NH3)6 & "x"', sorting: { key: 'Delta', descending: true }, chosen: new Map([['ion', new Set(['Cr(III)', 'Co(III)'])], ['ligand', new Set(["2,2'-bipyridine"])]]), hidden: new Set<Column>(['Delta', 'verdict']) } as const;
   const query = withState(new URLSearchParams('other=1'), state, names);
   expect(query.get('other')).toBe('1');
   expect(stateOf(new URLSearchParams(query.toString()), names)).toEqual(state);
   expect(isEmpty(stateOf(new URLSearchParams('sort=nonsense'), names))).toBe(true);
   const off = toggled(toggled(state, 'ion', 'Cr(III)'), 'ion', 'Co(III)');
   expect([...off.chosen.keys()]).toEqual(['ligand']);
+  expect([...withColumn(withColumn(state, 'Delta'), 'bands').hidden].sort()).toEqual(['bands', 'verdict']);
+  expect(isEmpty(stateOf(new URLSearchParams('without=beta&without=nonsense'), names))).toBe(true);
 });
 
 describe('the rows shown as a file', () => {
