@@ -39,14 +39,14 @@ export function stressOf(ion: GroundCase, assigned: readonly Assigned[], fit: Fi
     const others = solve(used.filter((one) => one !== band), fit.mode === 'field, B, C' ? policy : heldPolicy, fit.ratio);
     return others?.mode === fit.mode ? others : null;
   };
-  const leftOut = used.length < 3 ? [] : used.map((band) => leaveOut(ion, band, without(band), fit.floors[assigned.indexOf(band)]!));
+  const leftOut = used.length < 3 ? [] : used.map((band) => leaveOut(ion, band, assigned.indexOf(band), without(band), fit.floors));
   return { pairs, leftOut };
 }
 
-function leaveOut(ion: GroundCase, band: Assigned, fit: Fit | null, floor: number): LeftOut {
-  if (!fit) return { label: band.label, at: null, predicted: null, z: null };
+function leaveOut(ion: GroundCase, { label, observation }: Assigned, band: number, fit: Fit | null, floors: readonly number[]): LeftOut {
+  if (!fit) return { label, band, at: null, predicted: null, z: null };
   const { at, ground } = fit.solutions[0]!;
-  const { energy, gradient } = transitionsAt(ion, ground, [band.label], at)[0]!;
-  const variance = quadratic([gradient.delta, gradient.racahB, gradient.racahC], fit.total) + floor ** 2 + symmetricU(band.observation) ** 2;
-  return { label: band.label, at, predicted: energy, z: (band.observation.position - energy) / Math.sqrt(variance) };
+  const { energy, gradient } = transitionsAt(ion, ground, [label], at)[0]!;
+  const variance = quadratic([gradient.delta, gradient.racahB, gradient.racahC], fit.total) + floors[band]! ** 2 + symmetricU(observation) ** 2;
+  return { label, band, at, predicted: energy, z: (observation.position - energy) / Math.sqrt(variance) };
 }

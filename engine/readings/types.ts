@@ -93,6 +93,8 @@ export interface PairAlone {
 /** What the other bands say when one is left out. */
 export interface LeftOut {
   readonly label: string;
+  /** Its place among the bands of the reading. */
+  readonly band: number;
   /** null where the others fix too little. */
   readonly at: FieldParameters | null;
   /** Where the others put the band that was left out. */

@@ -1,8 +1,10 @@
-import { pairsCaption, plain, shownLabel, significant, stressCaption } from '#engine';
-import type { Reading } from '#engine';
+import { pairAlone, pairsCaption, shownLabel, stressTable } from '#engine';
+import type { Reading, StressColumn } from '#engine';
 import { aligned } from '../report/columns.ts';
 
-const none = 'none';
+const heads: Readonly<Record<StressColumn, string>> = {
+  leverage: 'leverage', 'by Delta': 'd/dDelta', 'by B': 'd/dB', 'by C': 'd/dC', 'Delta without': 'Delta without', 'B without': 'B without', 'put at': 'put at', z: 'z',
+};
 
 /** Each band of the fit under stress, then each pair alone, as the complex page tells them. */
 export function stressLines(reading: Reading, electrons: number): string[] {
@@ -10,30 +12,21 @@ export function stressLines(reading: Reading, electrons: number): string[] {
 }
 
 function transitions({ bands, stress }: Reading, electrons: number): string[] {
-  const used = bands.filter(({ leverage }) => leverage !== null);
-  if (used.length === 0) return [];
-  const left = stress?.leftOut ?? [];
-  const tried = left.length > 0;
-  const withC = used.some(({ gradient }) => gradient !== null && Math.abs(gradient.racahC) > 5e-4);
-  const number = (value: number | null | undefined, decimals: number): string => (value === null || value === undefined ? none : plain(value, decimals));
+  const table = stressTable(bands.map(({ label, leverage, gradient }, place) => {
+    const without = stress?.leftOut.find(({ band }) => band === place);
+    return {
+      label, leverage, by: [gradient?.delta ?? null, gradient?.racahB ?? null, gradient?.racahC ?? null] as const,
+      without: without === undefined ? null : { delta: without.at?.delta ?? null, racahB: without.at?.racahB ?? null, predicted: without.predicted, z: without.z },
+    };
+  }), 'text');
+  if (table === null) return [];
   return [
-    stressCaption(tried),
-    ...aligned([
-      ['to', 'leverage', 'd/dDelta', 'd/dB', ...(withC ? ['d/dC'] : []), ...(tried ? ['Delta without', 'B without', 'put at', 'z'] : [])],
-      ...used.map(({ label, leverage, gradient }, place) => [
-        shownLabel(label, electrons), number(leverage, 2), number(gradient?.delta, 2), number(gradient?.racahB, 1), ...(withC ? [number(gradient?.racahC, 1)] : []),
-        ...(tried ? [number(left[place]?.at?.delta, 0), number(left[place]?.at?.racahB, 0), number(left[place]?.predicted, 0), number(left[place]?.z, 1)] : []),
-      ]),
-    ]),
+    table.caption,
+    ...aligned([['to', ...table.columns.map((column) => heads[column])], ...table.rows.map(({ label, cells }) => [shownLabel(label, electrons), ...cells])]),
   ];
 }
 
 function pairs({ stress }: Reading, electrons: number): string[] {
   if (stress === null || stress.pairs.length === 0) return [];
-  return [
-    pairsCaption,
-    ...aligned(stress.pairs.map(({ labels, at }) => [
-      labels.map((label) => shownLabel(label, electrons)).join(' and '), at === null ? none : `${plain(at.delta, 0)}; ${significant(at.racahB, 3)}`,
-    ])),
-  ];
+  return [pairsCaption, ...aligned(stress.pairs.map(({ labels, at }) => [labels.map((label) => shownLabel(label, electrons)).join(' and '), pairAlone(at, 'text')]))];
 }

@@ -1,31 +1,31 @@
-import { pairsCaption, stressCaption } from '#engine';
-import { figures, ratio } from './show.ts';
+import { noStress, pairAlone, pairsCaption, stressTable } from '#engine';
+import type { StressColumn } from '#engine';
 import { type Cell, type Column, type Table, quantity, rowColumn, soft, words } from './table.ts';
 import type { MeasurementNode } from './tree.ts';
 import { termShown } from './typeset.ts';
 
-const none = soft('none');
 const derivative = (parameter: string): Column => ({ figure: true, head: [{ text: '∂ν̃/∂', style: 'plain' }, { text: parameter, style: 'italic' }] });
 const without = (symbol: string): Column => ({ figure: true, head: [{ text: symbol, style: 'italic' }, { text: ' without / cm', style: 'plain' }, { text: '−1', style: 'super' }] });
 
+const heads: Readonly<Record<StressColumn, Column>> = {
+  leverage: quantity('leverage', null, true), 'by Delta': derivative('Δ'), 'by B': derivative('B'), 'by C': derivative('C'),
+  'Delta without': without('Δ'), 'B without': without('B'), 'put at': quantity('put at', 'cm-1', true), z: quantity('z', null),
+};
+
+const shown = (text: string): Cell => (text === noStress ? soft(text) : text);
+
 /** Each transition of the fit: how much hangs on it, what it moves with, what the others give without it and where they put it. */
 export function stressOfTransitions({ chosen, complex }: MeasurementNode): Table | null {
-  const rows = chosen.transitions.filter(({ row }) => row.leverage !== null);
-  if (rows.length === 0) return null;
-  const tried = chosen.leftOut.length > 0;
-  const withC = rows.some(({ row }) => row.gradient_C !== null && Math.abs(row.gradient_C) > 5e-4);
-  const number = (value: number | null, decimals: number): Cell => value === null ? none : ratio(value, decimals);
-  return {
-    caption: stressCaption(tried),
-    columns: [rowColumn('To'), quantity('leverage', null, true), derivative('Δ'), derivative('B'), ...(withC ? [derivative('C')] : []),
-      ...(tried ? [without('Δ'), without('B'), quantity('put at', 'cm-1', true), quantity('z', null)] : [])],
-    rows: rows.map(({ row }): readonly Cell[] => {
-      const left = chosen.leftOut.find(({ number: place }) => place === row.number);
-      return [
-        { parts: termShown(row.label, complex.ion.electrons) }, number(row.leverage, 2), number(row.gradient_Delta, 2), number(row.gradient_B, 1), ...(withC ? [number(row.gradient_C, 1)] : []),
-        ...(tried ? [number(left?.Delta ?? null, 0), number(left?.B ?? null, 0), number(left?.predicted ?? null, 0), number(left?.z ?? null, 1)] : []),
-      ];
-    }),
+  const table = stressTable(chosen.transitions.map(({ row }) => {
+    const left = chosen.leftOut.find(({ number }) => number === row.number);
+    return {
+      label: row.label, leverage: row.leverage, by: [row.gradient_Delta, row.gradient_B, row.gradient_C] as const,
+      without: left === undefined ? null : { delta: left.Delta, racahB: left.B, predicted: left.predicted, z: left.z },
+    };
+  }), 'page');
+  return table && {
+    caption: table.caption, columns: [rowColumn('To'), ...table.columns.map((column) => heads[column])],
+    rows: table.rows.map(({ label, cells }): readonly Cell[] => [{ parts: termShown(label, complex.ion.electrons) }, ...cells.map(shown)]),
   };
 }
 
@@ -37,7 +37,7 @@ export function stressOfPairs({ chosen, complex }: MeasurementNode): Table | nul
   const cell = (first: number, second: number): Cell => {
     const pair = chosen.pairs.find((one) => one.first_number === first && one.second_number === second);
     if (second <= first || pair === undefined) return '';
-    return pair.Delta === null || pair.B === null ? none : `${ratio(pair.Delta, 0)}; ${figures(pair.B, 3)}`;
+    return shown(pairAlone(pair.Delta === null || pair.B === null ? null : { delta: pair.Delta, racahB: pair.B }, 'page'));
   };
   return {
     caption: pairsCaption,

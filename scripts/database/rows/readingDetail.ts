@@ -14,8 +14,8 @@ export function detailRows(key: Row, reading: Reading, electrons: number): Table
     stress_pair: (reading.stress?.pairs ?? []).map(({ labels: [first, second], bands: [one, other], at }) => ({
       ...key, first_number: one + 1, second_number: other + 1, first, second, Delta: at?.delta ?? null, B: at?.racahB ?? null,
     })),
-    stress_left_out: (reading.stress?.leftOut ?? []).map(({ label, at, predicted, z }, index) => ({
-      ...key, number: index + 1, label, Delta: at?.delta ?? null, B: at?.racahB ?? null, C: at?.racahC ?? null, predicted, z,
+    stress_left_out: (reading.stress?.leftOut ?? []).map(({ label, band, at, predicted, z }) => ({
+      ...key, number: band + 1, label, Delta: at?.delta ?? null, B: at?.racahB ?? null, C: at?.racahC ?? null, predicted, z,
     })),
   };
 }

@@ -3,7 +3,7 @@ import { defaultPolicy, freeIon } from '#engine';
 import { stressOf } from '../../../engine/readings/stress.ts';
 import { seeded } from '../../published/random.ts';
 import type { Planted } from './planted.ts';
-import { assumed, exactFit, forAllThree, forFieldAndB, readings, standingFit, transitionEnergies, valuesOf } from './planted.ts';
+import { assumed, exactFit, forAllThree, forFieldAndB, planted, readings, standingFit, transitionEnergies, valuesOf } from './planted.ts';
 
 const stress = (one: Planted, noise: number, seed: number) => {
   const next = seeded(seed);
@@ -49,6 +49,17 @@ describe('a band left out', () => {
     }
     for (const one of forFieldAndB.filter(({ labels }) => labels.length === 2)) expect(stress(one, 0, 1).stress).toEqual({ pairs: [], leftOut: [] });
   });
+});
+
+test('bands are told by their place in the reading, also where a line that the fit does not use stands before them', () => {
+  const one = planted('Cr(III)', 3, 'octahedral', 4, 'a2Eg a4T2g a4T1g b4T1g', 17_400, 725);
+  const assigned = readings(one.labels, transitionEnergies(one.ion, one.labels, one.at));
+  const policy = { ...defaultPolicy, cFitted: false };
+  const fit = standingFit(one, assigned, { policy });
+  expect(fit.used).toEqual([false, true, true, true]);
+  const { leftOut, pairs } = stressOf(one.ion, assigned, fit, policy, freeIon('published', { name: one.ionName }));
+  expect(leftOut.map(({ label, band }) => [label, band])).toEqual([['a4T2g', 1], ['a4T1g', 2], ['b4T1g', 3]]);
+  expect(pairs.map(({ bands }) => bands)).toEqual([[1, 2], [1, 3], [2, 3]]);
 });
 
 describe('each pair alone', () => {

@@ -91,7 +91,7 @@ export const handMadeReading: Reading = {
   identifiability: { singularValues: [140, 12], rank: 2, combination: null },
   stress: {
     pairs: [{ bands: [0, 1], labels: ['a4T2g', 'a4T1g'], at: { delta: 21550, racahB: 650.25, racahC: 2926 } }],
-    leftOut: [{ label: 'a4T1g', at: null, predicted: null, z: null }],
+    leftOut: [{ label: 'a4T1g', band: 0, at: null, predicted: null, z: null }],
   },
   groundState: { crossing: null, stabilisationInDelta: -1.2, stabilisation: -25860 }, doubletOrder: null,
   remarks: ['The ground level is stabilised by 1.2 Delta.'], sentence: 'Delta 21550(160) cm-1, B 650(33) cm-1; no test possible.',
