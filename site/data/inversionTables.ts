@@ -5,7 +5,7 @@ import { oncePerCollection } from './memo.ts';
 import { complexPath } from './paths.ts';
 import { factorFitOf, floorOf, nodeOf } from './seriesFit.ts';
 import { energy, ratio } from './show.ts';
-import { type Cell, type Table, column, quantity, rowColumn } from './table.ts';
+import { type Cell, type Table, column, quantity, rowColumn, words } from './table.ts';
 import type { CollectionTree } from './tree.ts';
 
 /** Pairs of one ion's series that stand against the pooled order of the ligands. */
@@ -39,7 +39,7 @@ export function surestInversions(all: readonly KindInversions[], parameter: Seri
 export function inversionTable(tree: CollectionTree, rows: readonly Inversion[], parameter: SeriesParameter): Table {
   return {
     caption: `${parameter === 'Delta' ? 'Δ' : 'β'}: pairs against the pooled order, the surest first`,
-    columns: [column('Ion'), rowColumn('Found higher'), column('Found lower'), quantity('difference', parameter === 'Delta' ? 'cm-1' : null, true), quantity('z', null), quantity(parameter === 'Delta' ? 'by the factors lower / %' : 'by the factors h higher', null, true), quantity('z of that order', null)],
+    columns: [column('Ion'), rowColumn('Found higher'), column('Found lower'), quantity('difference', parameter === 'Delta' ? 'cm-1' : null, true), quantity('z', null), quantity(parameter === 'Delta' ? 'by the factors lower / %' : 'by the factors h higher', null, true), { figure: true, head: [{ text: 'z', style: 'italic' }, ...words(' of that order')] }],
     rows: rows.slice(0, MOST_ROWS).map(({ higher, lower, difference, pooled, uPooled, zPooled }): readonly Cell[] => {
       const [above, below] = [nodeOf(tree, higher), nodeOf(tree, lower)];
       return [

@@ -13,6 +13,11 @@ export interface OrdersPage {
   readonly without: string | null;
 }
 
+/** How many pairs contradict an order that is itself known. */
+const contradiction = (sure: number, all: number): string => sure === 0
+  ? `The factors’ own order is not known that well for any of those ${all}: none contradicts it beyond doubt.`
+  : `The factors’ own order is known that well for ${sure} of those ${all}: these contradict it.`;
+
 /** Name of the file with every inversion. */
 export const INVERSIONS = 'inversions';
 
@@ -29,7 +34,7 @@ export function ordersPage(tree: CollectionTree): OrdersPage {
       return {
         sentence: sentenceShown(pairs === 0
           ? `${parameter}: no ion has two comparable complexes whose ligands all have factors.`
-          : `${parameter}: ${counted(pairs, 'pair')} of complexes of one ion, ${found} the other way round than the factors have it; ${rows.length} of these beyond two standard uncertainties of their difference, ${found - rows.length} not distinguishable. ${rows.length === 0 ? '' : `The factors’ order is itself beyond two standard uncertainties for ${rows.filter(({ distinguishable }) => distinguishable).length} of those ${rows.length}: only these contradict it.`}`.trim()),
+          : `${parameter}: ${counted(pairs, 'pair')} of complexes of one ion, ${found} the other way round than the factors have it; ${rows.length} of these beyond two standard uncertainties of their difference, ${found - rows.length} not distinguishable. ${rows.length === 0 ? '' : contradiction(rows.filter(({ distinguishable }) => distinguishable).length, rows.length)}`.trim()),
         table: rows.length === 0 ? null : inversionTable(tree, rows, parameter), more: moreInversions(rows),
       };
     }),

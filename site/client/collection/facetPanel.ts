@@ -29,10 +29,9 @@ export function createFacetPanel(panel: HTMLElement, facets: readonly Facet[], t
   };
 }
 
-const RAISED = '⁰¹²³⁴⁵⁶⁷⁸⁹';
-
-/** A value as it is set: "d3" with its number raised, a term with its multiplicity raised. */
+/** A value as it is set: "d3" and terms with raised numbers, donor sets with lowered ones. */
 export function shownMarkup(facet: string, value: string): string {
-  if (facet === 'd') return `d${[...value.slice(1)].map((digit) => RAISED[Number(digit)]).join('')}`;
+  if (facet === 'd') return `d<sup>${escapeText(value.slice(1))}</sup>`;
+  if (facet === 'donors') return escapeText(value).replaceAll(/\d+/g, '<sub>$&</sub>');
   return facet === 'term' ? partsMarkup(sentenceShown(value)) : escapeText(value);
 }
