@@ -25,6 +25,7 @@ export type { Range } from './quantity/range.ts';
 export { cautionMeanings } from './cautions/catalogue.ts';
 export { complexCautions } from './cautions/ofComplex.ts';
 export { evidenceHeading, evidenceWords } from './words/ranking.ts';
+export { partInFit } from './words/inFit.ts';
 export { noStress, pairAlone, pairsCaption, stressTable } from './words/stress.ts';
 export type { StressColumn } from './words/stress.ts';
 export type { ComplexFacts, MeasurementFacts } from './cautions/ofComplex.ts';

@@ -4,6 +4,7 @@ import { symmetricU } from '../measurement/observation.ts';
 import { quadratic } from './covariance.ts';
 import { transitionsAt } from './evaluate.ts';
 import { fitAssignment } from './fit.ts';
+import { fitFieldAndB } from './fitTwo.ts';
 import { isFit } from './fitTypes.ts';
 import type { Assigned, Fit } from './fitTypes.ts';
 import type { GroundCase } from './transitions.ts';
@@ -32,8 +33,10 @@ export function stressOf(ion: GroundCase, assigned: readonly Assigned[], fit: Fi
   if (used.length > 2)
     for (let i = 0; i < used.length; i++)
       for (let j = i + 1; j < used.length && pairs.length < pairsAtMost; j++) {
-        const alone = solve([used[i]!, used[j]!], heldPolicy, held);
-        pairs.push({ labels: [used[i]!.label, used[j]!.label], bands: [assigned.indexOf(used[i]!), assigned.indexOf(used[j]!)], at: alone ? alone.solutions[0]!.at : null });
+        const pair = [used[i]!, used[j]!];
+        const bands = [assigned.indexOf(pair[0]!), assigned.indexOf(pair[1]!)] as const;
+        const alone = fitFieldAndB({ ion, ground: fit.solutions[0]!.ground, assigned: pair, floors: bands.map((k) => fit.floors[k]!), policy, ratio: held, freeIon }, [0, 1], 'field, B');
+        pairs.push({ labels: [pair[0]!.label, pair[1]!.label], bands, at: isFit(alone) ? alone.solutions[0]!.at : null });
       }
   const without = (band: Assigned): Fit | null => {
     const others = solve(used.filter((one) => one !== band), fit.mode === 'field, B, C' ? policy : heldPolicy, fit.ratio);

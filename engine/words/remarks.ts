@@ -5,7 +5,7 @@ import { wholeNumber } from './numbers.ts';
 export function groundSentence(facts: { crossing: number | null; deltaOverB: number | null; stabilisationInDelta: number; stabilisation: number; ground: string }): string {
   const { crossing, deltaOverB, stabilisationInDelta, stabilisation, ground } = facts;
   const sign = stabilisationInDelta <= 0 ? '−' : '+';
-  const field = `The field ${stabilisation <= 0 ? 'lowers' : 'raises'} the ground level ${ground} by ${Math.abs(stabilisationInDelta).toFixed(2)} Delta, ${sign}${wholeNumber(Math.abs(stabilisation))} cm⁻¹`;
+  const field = Math.abs(stabilisationInDelta) < 0.005 ? `The field leaves the ground level ${ground} where it is` : `The field ${stabilisation <= 0 ? 'lowers' : 'raises'} the ground level ${ground} by ${Math.abs(stabilisationInDelta).toFixed(2)} Delta, ${sign}${wholeNumber(Math.abs(stabilisation))} cm⁻¹`;
   if (crossing === null || deltaOverB === null) return `${field}.`;
   return `${field}; Delta/B = ${deltaOverB.toFixed(1)} against ${crossing.toFixed(1)} where the ground spin changes.`;
 }

@@ -1,4 +1,4 @@
-import { concise, conciseTwoSided, evidenceWords, plain, policyId, shownLabel, significant, spinName, wavelengthShown } from '#engine';
+import { concise, conciseTwoSided, evidenceWords, partInFit, plain, policyId, shownLabel, significant, spinName, wavelengthShown } from '#engine';
 import type { Band, HazardCaution, Parameter, Reading } from '#engine';
 import type { ComplexRecord, MeasurementRecord } from '../content/types.ts';
 import { aligned } from '../report/columns.ts';
@@ -97,7 +97,7 @@ function transitions(reading: Reading, electrons: number): string[] {
       band.calculated === null ? '-' : plain(band.calculated, 0),
       band.residual === null ? '-' : plain(band.residual, 0),
       plain(band.floor, 0),
-      band.used ? '' : 'compared only',
+      partInFit(band.used, band.calculated !== null, band.bands.length),
     ]),
   ]);
 }

@@ -1,4 +1,4 @@
-import { levels } from '#engine';
+import { levels, partInFit } from '#engine';
 import { levelScheme } from '../charts/levelScheme.ts';
 import { residualBar } from '../charts/residualBar.ts';
 import { conditions } from './conditions.ts';
@@ -50,7 +50,7 @@ function transitionTable({ chosen, complex }: MeasurementNode): Table | null {
   const combined = chosen.transitions.map(({ row }) => Math.hypot(Math.max(row.u_minus, row.u_plus), row.floor));
   const reach = Math.max(1, ...combined, ...chosen.transitions.map(({ row }) => Math.abs(row.residual ?? 0)));
   const fitted = chosen.transitions.some(({ row }) => row.residual !== null);
-  const remarks = chosen.transitions.map(({ row, bands }) => [row.used === 1 ? '' : 'compared only', bands.length > 1 ? `barycentre of ${bands.length} components` : ''].filter((text) => text !== '').join(', '));
+  const remarks = chosen.transitions.map(({ row, bands }) => partInFit(row.used === 1, row.calculated !== null, bands.length));
   return {
     caption: `Transitions, observed against calculated${fitted ? '; brackets span one standard uncertainty of reading and floor' : ''}`,
     columns: [rowColumn('To'), quantity('observed', 'cm-1', true), quantity('calculated', 'cm-1', true), quantity('obs. − calc.', 'cm-1', true), quantity('floor', 'cm-1', true), ...(remarks.every((text) => text === '') ? [] : [column('In the fit')])],

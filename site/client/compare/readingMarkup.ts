@@ -1,4 +1,4 @@
-import { type Measurement, type ReadMeasurement, type Reading, type ReadingBand, concise, conciseTwoSided, plain } from '#engine';
+import { type Measurement, type ReadMeasurement, type Reading, type ReadingBand, concise, conciseTwoSided, partInFit, plain } from '#engine';
 import type { StripRow } from '../../charts/strip.ts';
 import { stripFigure } from '../../charts/stripFigure.ts';
 import { difference, energy, energyTwoSided, listed, nanometres, plainNumber, ratio } from '../../data/show.ts';
@@ -85,7 +85,7 @@ function transitionTable({ bands }: Reading, electrons: number): Table {
   };
 }
 
-const inFit = ({ used, bands }: ReadingBand): string => `${used ? 'yes' : 'compared only'}${bands.length > 1 ? `, barycentre of ${bands.length} components` : ''}`;
+const inFit = ({ used, calculated, bands }: ReadingBand): string => [...(used ? ['yes'] : []), partInFit(used, calculated !== null, bands.length)].filter((text) => text !== '').join(', ');
 
 function predictedTable({ predicted }: Reading, electrons: number): Table | null {
   const rows = predicted.filter(({ spinAllowed }) => spinAllowed);

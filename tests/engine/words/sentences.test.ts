@@ -11,6 +11,10 @@ describe('what to measure next', () => {
     expect(helpfulBandSentence('b4T1g', 36_000, 40_000, [{ parameter: 'B', uNow: 107, uThen: 16 }, { parameter: 'C', uNow: null, uThen: 90 }]))
       .toBe(`b4T1g, expected 36${thin}000 to 40${thin}000 cm⁻¹, would cut u(B) from 107 to 16 cm⁻¹ and fix C to about ±90 cm⁻¹.`);
   });
+
+  test('an uncertainty to come is told to two figures: it is an estimate', () => {
+    expect(helpfulBandSentence('a1Eg', 11_100, 17_700, [{ parameter: 'C', uNow: null, uThen: 159.4 }])).toContain('fix C to about ±160 cm⁻¹.');
+  });
 });
 
 describe('ground level', () => {
@@ -18,6 +22,11 @@ describe('ground level', () => {
   test('stabilisation in Delta and cm-1, and the distance from the spin crossing', () => {
     expect(groundSentence({ crossing: 20.3, deltaOverB: 12.44, stabilisationInDelta: -0.4, stabilisation: -4160, ground: '5T2g' }))
       .toBe('The field lowers the ground level 5T2g by 0.40 Delta, −4160 cm⁻¹; Delta/B = 12.4 against 20.3 where the ground spin changes.');
+  });
+
+  test('a half-filled shell is not lowered', () => {
+    expect(groundSentence({ crossing: 28.4, deltaOverB: 12.56, stabilisationInDelta: 0, stabilisation: -0, ground: '6A1g' }))
+      .toBe('The field leaves the ground level 6A1g where it is; Delta/B = 12.6 against 28.4 where the ground spin changes.');
   });
 
   test('without a B, or without a crossing, the field alone is told', () => {
