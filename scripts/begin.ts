@@ -15,6 +15,7 @@ import { beginFacts, beginLines } from './begin/words.ts';
 import { readCollection } from './content/readCollection.ts';
 import { date, licence, webAddress } from './content/schema/references.ts';
 import { exitCodes } from './exitCodes.ts';
+import { whileLocked } from './lock.ts';
 import { places } from './places.ts';
 import { projectFolder } from './publish/pages.ts';
 import { folderName } from './report/faults.ts';
@@ -40,7 +41,7 @@ const table: CommandTable = {
   examples: ['--group "Coordination chemistry, Example University"', '--group "Our group" --person "Your Name" --url https://example.org/bands/ --show'],
 };
 
-await runCommand(table.name, () => {
+await runCommand(table.name, async () => {
   const given = readArguments(table);
   const content = given.path('content', places.content);
   const group = newGroup(given);
@@ -51,7 +52,7 @@ await runCommand(table.name, () => {
   const plan = planBegin(content, readManifest(), newFiles(content, group));
   const json = given.has('json');
   const done = !given.has('show');
-  if (done) carryOut(content, plan);
+  if (done) await whileLocked(table.name, [content], () => carryOut(content, plan));
   const words = { content: folderName(content), done, group, tracked: content === places.content && existsSync(join(projectFolder, '.git')) };
   const { faults } = done ? readCollection(content) : { faults: [] };
   if (faults.length > 0) return stoppedByFaults(faults, content, 'The collection has begun; the faults above stand in records that were there before.', json);

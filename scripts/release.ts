@@ -3,6 +3,7 @@
 import { readArguments } from './arguments.ts';
 import type { CommandTable } from './arguments.ts';
 import { exitCodes } from './exitCodes.ts';
+import { whileLocked } from './lock.ts';
 import { cacheFile, places } from './places.ts';
 import { freeze } from './release/freeze.ts';
 import { revisionOf, today, userName } from './release/surroundings.ts';
@@ -25,7 +26,7 @@ const table: CommandTable = {
   examples: ['1.1.0 --cause "The spectra of the winter term." --who "Tove Lind"'],
 };
 
-await runCommand(table.name, () => {
+await runCommand(table.name, async () => {
   const given = readArguments(table);
   const content = given.path('content', places.content);
   const json = given.has('json');
@@ -37,7 +38,7 @@ await runCommand(table.name, () => {
   const date = dateOf(given.text('date') ?? today());
 
   const progress = progressLine('fitting', process.stderr);
-  const result = freeze({ content, cache: cacheFile(content), progress: progress.update, release, date, who, cause, codeVersion: revisionOf(content) });
+  const result = await whileLocked(table.name, [content], () => freeze({ content, cache: cacheFile(content), progress: progress.update, release, date, who, cause, codeVersion: revisionOf(content) }));
   progress.end();
   if (result.kind === 'faults') return stoppedByFaults(result.faults, content, 'Nothing was frozen.', json);
   if (result.kind === 'refused') throw new UsageError(`Nothing was frozen: ${result.reason}.`);

@@ -41,6 +41,19 @@ describe('two runs at once', { timeout: 60_000 }, () => {
     expect(readFileSync(lockOf(database), 'utf8')).toContain(String(process.pid));
   });
 
+  test.each([
+    ['release', ['1.0.0', '--cause', 'The first.', '--who', 'A', '--date', '2026-03-02']],
+    ['begin', ['--group', 'A group']],
+  ] as const)('%s writes records of its own and waits for nobody either', (command, words) => {
+    const content = at(`content-${command}`);
+    writeState(content, 21550);
+    const before = folderHash(content);
+    writeFileSync(lockOf(content), `${process.pid} npm run release\n`);
+    const { code, stderr } = runScript(command, [...words, '--content', content], settings);
+    expect([code, stderr]).toEqual([3, `npm run ${command} failed: npm run release (process ${process.pid}) is writing ${content}. Wait until it has ended; if no such run exists, delete ${lockOf(content)} and start again\n`]);
+    expect(folderHash(content)).toBe(before);
+  });
+
   test('the lock of a run that is gone, or half a lock, is taken over', () => {
     const database = withOld('stale');
     const gone = spawnSync(process.execPath, ['--version']).pid;
