@@ -35,8 +35,8 @@ const table: CommandTable = {
   ],
 };
 
-/** What is read on threads; generated complexes have four measurements in three, so these are enough. */
-const atScale = { measurements: 10_000, complexes: 7_700 };
+/** Complexes that are read on threads: they have about 10 000 measurements. */
+const complexesOnThreads = 7_600;
 
 await runCommand(table.name, async () => {
   const given = readArguments(table);
@@ -70,7 +70,7 @@ async function measureParts(folder: string, records: number, pages: boolean, add
   add(await measureReadings(prepared.collection));
   const many = join(folder, 'many');
   mkdirSync(many);
-  add(await measureThreads((await prepareCollection(many, atScale.complexes)).collection, atScale.measurements));
+  add(await measureThreads((await prepareCollection(many, complexesOnThreads)).collection));
   const own = readCollection(places.content).collection;
   if (own) add(await measureSlowest(own));
   add(await measureSeries());

@@ -48,7 +48,7 @@ await runCommand(table.name, async () => {
     if (process.stderr.isTTY) process.stderr.write('drawing pages ...');
     await swapFolder(out, async (folder) => {
       const drawing = performance.now();
-      await buildPages(database, addressOf(fitted.refit.collection.group.url), folder);
+      await buildPages(database, addressOf(fitted.refit.frame.group.url), folder);
       stages['pages'] = since(drawing);
       const writing = performance.now();
       // The files for download take the records as typed, so they must be those that were fitted.

@@ -3,7 +3,6 @@
 import { existsSync } from 'node:fs';
 import { readArguments } from './arguments.ts';
 import type { CommandTable } from './arguments.ts';
-import type { ReadMemory } from './content/readCollection.ts';
 import { refit } from './database/refit.ts';
 import { exitCodes } from './exitCodes.ts';
 import { readResults } from './export/results.ts';
@@ -32,11 +31,10 @@ await runCommand(table.name, async () => {
   const database = given.path('database', places.database);
   const port = portOf(given.text('port'), 4321);
 
-  const memory: ReadMemory = new Map();
   /** true where the database is new. */
   const fitAgain = (): boolean => {
     const started = performance.now();
-    const result = refit({ content, database, cache: cacheFile(content), memory });
+    const result = refit({ content, database, cache: cacheFile(content) });
     if (!result.ok) {
       stoppedByFaults(result.faults, content, existsSync(database) ? 'The last good results stay.' : 'There are no results yet.', false);
       return false;

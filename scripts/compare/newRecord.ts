@@ -10,7 +10,7 @@ import type { KnownRecords } from '../content/checks/complex.ts';
 import { checkLigand } from '../content/checks/ligand.ts';
 import { readDraft } from '../content/draft.ts';
 import type { Draft } from '../content/draft.ts';
-import { largestFile, openContent } from '../content/files.ts';
+import { findContent, largestFile, openFile } from '../content/files.ts';
 import type { OpenedFile } from '../content/files.ts';
 import { badId } from '../content/ids.ts';
 import { pathAt } from '../content/node.ts';
@@ -37,9 +37,11 @@ export function referable(content: string, stored: StoredCollection): Referable 
   const ligandFaults = new Map<string, readonly Fault[]>();
   const sourceIds = new Set(stored.sources);
   if (existsSync(content)) {
-    const { records } = openContent(content);
+    const { records } = findContent(content);
     for (const { id } of records.sources) sourceIds.add(id);
-    for (const opened of records.ligands) {
+    for (const found of records.ligands) {
+      const opened = openFile(content, found);
+      if ('code' in opened) continue;
       const { record, faults } = readLigand(opened);
       if (record !== null) ligands.set(opened.id, record);
       else {

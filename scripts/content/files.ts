@@ -16,33 +16,35 @@ export const recordFolders = ['complexes', 'ligands', 'sources'] as const;
 export type RecordFolder = (typeof recordFolders)[number];
 const settingFiles = ['group.yaml', 'policy.yaml'] as const;
 
-export interface OpenedFile {
+/** A file by its name; whether it can be read is not known yet. */
+export interface FoundFile {
   /** Path within the content folder, with forward slashes: "complexes/cr-am6.yaml". */
   readonly file: string;
   readonly id: string;
+}
+
+export interface OpenedFile extends FoundFile {
   readonly text: string;
   /** SHA-256 of the file's bytes, hexadecimal. */
   readonly hash: string;
 }
 
 export interface ContentFiles {
-  readonly group: OpenedFile | null;
-  readonly policy: OpenedFile | null;
-  readonly records: Readonly<Record<RecordFolder, readonly OpenedFile[]>>;
+  readonly group: FoundFile | null;
+  readonly policy: FoundFile | null;
+  /** Ascending by id. */
+  readonly records: Readonly<Record<RecordFolder, readonly FoundFile[]>>;
+  /** Of names and places alone. */
   readonly faults: readonly Fault[];
   /** true where the folder holds content at all. */
   readonly present: boolean;
 }
 
-/** Opens every file of a content folder, in the order of their names. Never throws for what stands in the folder. */
-export function openContent(directory: string): ContentFiles {
+/** Finds every file of a content folder, and opens none. Never throws for what stands in the folder. */
+export function findContent(directory: string): ContentFiles {
   const faults: Fault[] = [];
-  const say = (file: string, finding: Finding) => {
-    const report = createReporter(file, null);
-    report.at([], finding);
-    faults.push(...report.faults);
-  };
-  const records: Record<RecordFolder, OpenedFile[]> = { complexes: [], ligands: [], sources: [] };
+  const say = (file: string, finding: Finding): void => { faults.push(fileFault(file, finding)); };
+  const records: Record<RecordFolder, FoundFile[]> = { complexes: [], ligands: [], sources: [] };
   const top = namesIn(directory);
   const known = top.filter((name) => name === 'group.yaml' || (recordFolders as readonly string[]).includes(name));
   if (known.length === 0) {
@@ -60,9 +62,10 @@ export function openContent(directory: string): ContentFiles {
   }
   for (const folder of recordFolders) {
     const byId = new Map<string, string>();
+    const directories = foldersIn(join(directory, folder));
     for (const name of namesIn(join(directory, folder))) {
       const file = `${folder}/${name}`;
-      if (statSync(join(directory, folder, name), { throwIfNoEntry: false })?.isDirectory() === true) {
+      if (directories.has(name)) {
         say(file, { code: 'FILE_UNKNOWN', found: `a folder within ${folder}/`, expected: `records as files directly in ${folder}/`, mend: 'move the files up one folder' });
         continue;
       }
@@ -74,12 +77,11 @@ export function openContent(directory: string): ContentFiles {
       if (earlier !== undefined) {
         say(file, { code: 'DUPLICATE_ID', found: `the id "${id}"`, expected: `an id of its own; ${earlier} has it already (capitals and the ending do not count)`, mend: 'rename one of the two files' });
       } else byId.set(id.toLowerCase(), file);
-      const opened = openFile(directory, file, id, say);
-      if (opened !== null) records[folder].push(opened);
+      records[folder].push({ file, id });
     }
   }
   for (const folder of recordFolders) records[folder].sort((a, b) => (a.id < b.id ? -1 : a.id > b.id ? 1 : 0));
-  const setting = (name: string) => (top.includes(name) ? openFile(directory, name, name.slice(0, -5), say) : null);
+  const setting = (name: string): FoundFile | null => (top.includes(name) ? { file: name, id: name.slice(0, -5) } : null);
   return { group: setting('group.yaml'), policy: setting('policy.yaml'), records, faults, present: true };
 }
 
@@ -92,32 +94,50 @@ function namesIn(directory: string): string[] {
   }
 }
 
+/** Names of folders in a folder, and of links to folders. */
+function foldersIn(directory: string): ReadonlySet<string> {
+  try {
+    const entries = readdirSync(directory, { withFileTypes: true });
+    return new Set(entries.filter((entry) => (entry.isSymbolicLink() ? statSync(join(directory, entry.name), { throwIfNoEntry: false })?.isDirectory() === true : entry.isDirectory())).map(({ name }) => name));
+  } catch {
+    return new Set();
+  }
+}
+
+/** A fault of a file as a whole. */
+export function fileFault(file: string, finding: Finding): Fault {
+  const report = createReporter(file, null);
+  report.at([], finding);
+  return report.faults[0]!;
+}
+
 function isPlainName(name: string): boolean {
   return !name.includes('.');
 }
 
-function openFile(directory: string, file: string, id: string, say: (file: string, finding: Finding) => void): OpenedFile | null {
+/** Opens a file of a content folder, or says why it cannot be read. */
+export function openFile(directory: string, { file, id }: FoundFile): OpenedFile | Finding {
   const path = join(directory, file);
   try {
-    const { size } = statSync(path);
-    if (!statSync(path).isFile()) {
-      say(file, { code: 'FILE_UNREADABLE', found: 'something that is not a file', expected: 'a text file', mend: 'remove it' });
-      return null;
-    }
-    if (size > largestFile) {
-      say(file, { code: 'FILE_TOO_LARGE', found: `${size} bytes`, expected: `at most ${largestFile} bytes`, mend: 'keep raw data in files of their own and name them by raw:' });
-      return null;
-    }
-    const bytes = readFileSync(path);
-    const text = new TextDecoder('utf-8', { fatal: true, ignoreBOM: false }).decode(bytes);
-    const nul = text.indexOf('\u0000');
-    if (nul >= 0) throw new TypeError('a NUL character');
+    const bytes = bytesOf(path);
+    if (bytes === null) return { code: 'FILE_UNREADABLE', found: 'something that is not a file', expected: 'a text file', mend: 'remove it' };
+    if (typeof bytes === 'number') return { code: 'FILE_TOO_LARGE', found: `${bytes} bytes`, expected: `at most ${largestFile} bytes`, mend: 'keep raw data in files of their own and name them by raw:' };
+    const text = utf8.decode(bytes);
+    if (text.includes('\u0000')) throw new TypeError('a NUL character');
     return { file, id, text, hash: createHash('sha256').update(bytes).digest('hex') };
   } catch (error) {
-    if (error instanceof TypeError) say(file, { code: 'NOT_UTF8', found: 'bytes that are not UTF-8 text', expected: 'a text file in UTF-8', mend: 'save the file again with the encoding UTF-8' });
-    else say(file, { code: 'FILE_UNREADABLE', found: reason(error), expected: 'a file that can be opened', mend: linkAdvice(path) });
-    return null;
+    if (error instanceof TypeError) return { code: 'NOT_UTF8', found: 'bytes that are not UTF-8 text', expected: 'a text file in UTF-8', mend: 'save the file again with the encoding UTF-8' };
+    return { code: 'FILE_UNREADABLE', found: reason(error), expected: 'a file that can be opened', mend: linkAdvice(path) };
   }
+}
+
+const utf8 = new TextDecoder('utf-8', { fatal: true, ignoreBOM: false });
+
+/** The bytes of a file, its size where it is too large, null where it is no file. */
+function bytesOf(path: string): Buffer | number | null {
+  const found = statSync(path);
+  if (!found.isFile()) return null;
+  return found.size > largestFile ? found.size : readFileSync(path);
 }
 
 function reason(error: unknown): string {

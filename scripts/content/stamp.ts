@@ -16,6 +16,14 @@ export function stampContent(directory: string): ContentStamp {
   return stamp;
 }
 
+/** Two changes closer than this may bear the same time of change on some disks, ms. */
+const grain = 2000;
+
+/** Whether a stamp names one state of its file for good: it had not changed lately, by the clock at the time of the stamp, ms. */
+export function isSettled(stamp: string, clock: number): boolean {
+  return Number(BigInt(stamp.split(' ')[1]!) / 1_000_000n) < clock - grain;
+}
+
 function filesUnder(directory: string): string[] {
   try {
     return readdirSync(directory, { recursive: true, encoding: 'utf8' }).filter((name) => /\.(?:ya?ml|json)$/i.test(name)).sort();

@@ -5,13 +5,15 @@ import Database from 'better-sqlite3';
 /** Readings kept as JSON text by the hash of all they depend on. */
 export interface ReadingCache {
   readonly get: (key: string) => string | null;
-  /** Keeps exactly the given entries: adds the new, drops what is not among `current`. */
-  readonly keep: (fresh: ReadonlyMap<string, string>, current: ReadonlySet<string>) => void;
+  readonly put: (key: string, json: string) => void;
+  /** Drops every entry that is not among `current`. */
+  readonly keepOnly: (current: ReadonlySet<string>) => void;
+  /** What was put is kept from here on. */
   readonly close: () => void;
 }
 
 /** A cache that holds nothing: every run is a cold one. */
-export const noCache: ReadingCache = { get: () => null, keep: () => undefined, close: () => undefined };
+export const noCache: ReadingCache = { get: () => null, put: () => undefined, keepOnly: () => undefined, close: () => undefined };
 
 /**
  * Opens the cache file, making it where it is missing and making it anew where it is damaged. A cache only saves time:
@@ -24,7 +26,7 @@ export function openCache(path: string): ReadingCache {
     if (!isDamaged(error)) return noCache;
   }
   try {
-    for (const ending of ['', '-journal']) rmSync(path + ending, { force: true });
+    removeFile(path);
     return openFile(path);
   } catch {
     return noCache;
@@ -36,39 +38,51 @@ function openFile(path: string): ReadingCache {
   const database = new Database(path, { timeout: 2000 });
   try {
     database.exec('CREATE TABLE IF NOT EXISTS reading (key TEXT NOT NULL PRIMARY KEY, json TEXT NOT NULL) STRICT, WITHOUT ROWID');
-    if (database.pragma('quick_check', { simple: true }) !== 'ok') throw damaged();
-    return overDatabase(database);
+    return overDatabase(database, path);
   } catch (error) {
     database.close();
     throw error;
   }
 }
 
-function overDatabase(database: Database.Database): ReadingCache {
+function overDatabase(database: Database.Database, path: string): ReadingCache {
   const select = database.prepare<[string], { json: string }>('SELECT json FROM reading WHERE key = ?');
   const keys = database.prepare<[], { key: string }>('SELECT key FROM reading');
   const insert = database.prepare<[string, string]>('INSERT OR REPLACE INTO reading (key, json) VALUES (?, ?)');
   const remove = database.prepare<[string]>('DELETE FROM reading WHERE key = ?');
-  const keep = database.transaction((fresh: ReadonlyMap<string, string>, current: ReadonlySet<string>) => {
-    for (const { key } of keys.all()) if (!current.has(key)) remove.run(key);
-    for (const [key, json] of fresh) insert.run(key, json);
-  });
+  let usable = true;
+  // Another run holds the file, the disk is full, or a page is damaged: the next run refits, nothing is lost.
+  const tried = <T>(work: () => T, otherwise: T): T => {
+    if (!usable) return otherwise;
+    try {
+      return work();
+    } catch (error) {
+      usable = false;
+      if (isDamaged(error)) removeFile(path);
+      return otherwise;
+    }
+  };
+  const writing = (): void => { if (!database.inTransaction) database.exec('BEGIN IMMEDIATE'); };
   return {
-    get: (key) => select.get(key)?.json ?? null,
-    keep: (fresh, current) => {
-      try {
-        keep.immediate(fresh, current);
-      } catch {
-        // Another run holds the file, or the disk is full: the next run refits, nothing is lost.
-        return;
-      }
+    get: (key) => tried(() => select.get(key)?.json ?? null, null),
+    put: (key, json) => tried(() => {
+      writing();
+      insert.run(key, json);
+    }, undefined),
+    keepOnly: (current) => tried(() => {
+      const gone = keys.all().filter(({ key }) => !current.has(key));
+      if (gone.length > 0) writing();
+      for (const { key } of gone) remove.run(key);
+    }, undefined),
+    close: () => {
+      tried(() => { if (database.inTransaction) database.exec('COMMIT'); }, undefined);
+      database.close();
     },
-    close: () => database.close(),
   };
 }
 
-function damaged(): Error {
-  return Object.assign(new Error('the cache file is damaged'), { code: 'SQLITE_CORRUPT' });
+function removeFile(path: string): void {
+  for (const ending of ['', '-journal']) rmSync(path + ending, { force: true });
 }
 
 function isDamaged(error: unknown): boolean {

@@ -1,21 +1,28 @@
 import { createHash } from 'node:crypto';
+import type { Hash } from 'node:crypto';
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import type { FreeIon, Measurement, Policy } from '#engine';
+import type { History } from '../release/types.ts';
+import type { CollectionFrame } from './rows/collection.ts';
 
 const engineFolder = fileURLToPath(new URL('../../engine', import.meta.url));
+const scriptsFolder = fileURLToPath(new URL('..', import.meta.url));
 const packageFile = new URL('../../package.json', import.meta.url);
 
 /** sha256, in hex, of the engine's sources: names and contents in binary order of name, and the version of its one dependency. */
 export function engineHash(folder: string = engineFolder): string {
-  const hash = createHash('sha256');
+  return sourcesHash(folder, createHash('sha256')).update(versionOf('ml-matrix')).digest('hex');
+}
+
+function sourcesHash(folder: string, hash: Hash): Hash {
   const names = readdirSync(folder, { recursive: true, encoding: 'utf8' })
     .map((name) => name.replaceAll('\\', '/'))
-    .filter((name) => name.endsWith('.ts'))
+    .filter((name) => /\.(?:ts|sql)$/.test(name))
     .sort();
   for (const name of names) hash.update(`${name}\0`).update(readFileSync(join(folder, name))).update('\0');
-  return hash.update(matrixVersion()).digest('hex');
+  return hash;
 }
 
 let ofThisProcess: string | null = null;
@@ -24,6 +31,26 @@ let ofThisProcess: string | null = null;
 export function loadedEngineHash(): string {
   ofThisProcess ??= engineHash();
   return ofThisProcess;
+}
+
+let rowsOfThisProcess: string | null = null;
+
+// All that turns records into rows.
+function loadedRowsHash(): string {
+  rowsOfThisProcess ??= ['content', 'database', 'release', 'structures']
+    .reduce((hash, folder) => sourcesHash(join(scriptsFolder, folder), hash), createHash('sha256').update(loadedEngineHash()))
+    .update(['yaml', 'zod', 'better-sqlite3', 'openchemlib'].map(versionOf).join(' ')).digest('hex');
+  return rowsOfThisProcess;
+}
+
+/** sha256, in hex, of all that the rows of every complex hang on beside its own record. */
+export function basisHash({ policy, ligands, sources }: CollectionFrame): string {
+  return createHash('sha256').update(JSON.stringify([policy, ligands, sources.map(({ id }) => id), loadedRowsHash(), process.versions.v8])).digest('hex');
+}
+
+/** sha256, in hex, of all that the other rows hang on beside the complexes and their basis. */
+export function wholeHash(frame: CollectionFrame, history: History): string {
+  return createHash('sha256').update(JSON.stringify([frame, history, softwareName()])).digest('hex');
 }
 
 /** Name and version of this software, "bandstead 0.1.0". */
@@ -41,7 +68,7 @@ export function readingKey(measurement: Measurement, policy: Policy, freeIon: Fr
 }
 
 // The version is pinned in package.json, so that is what was installed.
-function matrixVersion(): string {
+function versionOf(name: string): string {
   const { dependencies } = JSON.parse(readFileSync(packageFile, 'utf8')) as { dependencies: Record<string, string> };
-  return `ml-matrix ${dependencies['ml-matrix']}`;
+  return `${name} ${dependencies[name]}`;
 }

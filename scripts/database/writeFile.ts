@@ -1,4 +1,4 @@
-import { closeSync, fsyncSync, mkdirSync, openSync, renameSync, rmSync, writeSync } from 'node:fs';
+import { closeSync, fsyncSync, mkdirSync, openSync, renameSync, rmSync, statSync, writeSync } from 'node:fs';
 import { dirname } from 'node:path';
 import { besideTarget, removeLitter } from '../litter.ts';
 
@@ -30,6 +30,36 @@ function writeSynced(path: string, bytes: Uint8Array): void {
   } finally {
     closeSync(file);
   }
+}
+
+/** Syncs a file that is written, and renames it over its target. */
+export function renameSynced(from: string, to: string): void {
+  const file = openSync(from, 'r+');
+  try {
+    fsyncSync(file);
+  } finally {
+    closeSync(file);
+  }
+  renameSync(from, to);
+  syncFolder(dirname(to));
+}
+
+/** Bytes that are written to learn why a write failed. */
+const probed = 1_000_000;
+
+/**
+ * For an error of SQLite's that a write failed: the system's own error, found by writing as much plainly in the place of `file`, which is lost.
+ * Any other error, and one that does not come again, is given back as it is.
+ */
+export function plainWriteError(error: unknown, file: string): unknown {
+  const code = error instanceof Error && 'code' in error ? String(error.code) : '';
+  if (!/^SQLITE_(?:FULL|IOERR|CANTOPEN)/.test(code)) return error;
+  try {
+    writeSynced(file, new Uint8Array((statSync(file, { throwIfNoEntry: false })?.size ?? 0) + probed));
+  } catch (reason) {
+    return reason;
+  }
+  return error;
 }
 
 // Some systems cannot open a folder for syncing; the rename has happened by then, so that is no failure.

@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { loadedEngineHash, softwareName } from '../database/fingerprint.ts';
 import { refitCollection } from '../database/refit.ts';
 import type { RefitOrder } from '../database/refit.ts';
 import { replaceFile } from '../database/writeFile.ts';
@@ -42,8 +43,8 @@ export function freeze({ content, cache, progress, release, date, who, cause, co
   if (renamed === null) return { kind: 'refused', reason: 'group.yaml has not exactly one line that starts with "release:"' };
 
   const named = { ...collection, group: { ...collection.group, release } };
-  const { tables } = refitCollection(named, history, 0, { cache, ...(progress === undefined ? {} : { progress }) });
-  const snapshot = snapshotOf(tables);
+  const { facts } = refitCollection(named, history, 0, { cache, ...(progress === undefined ? {} : { progress }) });
+  const snapshot = snapshotOf(named, facts.map((complex) => complex.frozen), { engine: loadedEngineHash(), software: softwareName() });
   const frozen: FrozenRelease = { release, number: history.releases.length + 1, date, who, cause, code_version: codeVersion, ...snapshot };
   const file = join(releaseFolder, `${release}.json`);
   replaceFile(join(content, file), Buffer.from(releaseText(frozen), 'utf8'));

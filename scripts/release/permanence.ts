@@ -1,6 +1,6 @@
 // Published addresses are for good: what vanished without a word, came back as something else, or leads nowhere is a fault.
 
-import type { Collection, Fault } from '../content/types.ts';
+import type { ComplexRecord, Fault, LigandRecord } from '../content/types.ts';
 import { releaseFolder } from './readHistory.ts';
 import { firstReleases } from './rows.ts';
 import { addressesOf } from './snapshot.ts';
@@ -8,23 +8,23 @@ import type { FrozenComplex, Gone, History } from './types.ts';
 
 type Identity = Pick<FrozenComplex, 'id' | 'formula' | 'ion' | 'geometry' | 'isomer'>;
 
+/** A complex with the measurements that have addresses. */
+type Addressed = Identity & { readonly measurements: readonly { readonly id: string }[] };
+
 /** Faults of a collection against its own history. Nothing needs to be fitted for it. */
-export function permanenceFaults({ releases, gone }: History, collection: Collection): readonly Fault[] {
-  const current = identities(collection);
+export function permanenceFaults({ releases, gone }: History, complexes: readonly Addressed[], ligands: readonly Pick<LigandRecord, 'id'>[]): readonly Fault[] {
   const entries = new Map(gone.map((entry) => [entry.address, entry]));
-  const now = new Set(current.addresses);
+  const now = new Set(addressesOf(complexes, ligands.map(({ id }) => id)));
+  const byId = new Map(complexes.map((complex) => [complex.id, complex]));
   return [
     ...[...firstReleases(releases)].flatMap(([address, release]) => vanished(address, release, now, entries)),
     ...gone.flatMap((entry) => [...reused(entry, now), ...leadsNowhere(entry, now)]),
-    ...(releases.at(-1)?.complexes ?? []).flatMap((complex) => changedIdentity(complex, current.complexes, entries)),
+    ...(releases.at(-1)?.complexes ?? []).flatMap((complex) => changedIdentity(complex, byId.get(complex.id), entries)),
   ];
 }
 
-function identities({ complexes, ligands }: Collection): { readonly addresses: readonly string[]; readonly complexes: readonly Identity[] } {
-  const named = complexes.map(({ id, formula, ion, geometryName, isomer, measurements }) => ({
-    id, formula, ion: ion.name, geometry: geometryName, isomer, measurements: measurements.map((measurement) => ({ id: measurement.id })),
-  }));
-  return { addresses: addressesOf(named, ligands.map(({ id }) => id)), complexes: named };
+export function identitiesOf(complexes: readonly ComplexRecord[]): readonly Addressed[] {
+  return complexes.map(({ id, formula, ion, geometryName, isomer, measurements }) => ({ id, formula, ion: ion.name, geometry: geometryName, isomer, measurements }));
 }
 
 const goneFile = `${releaseFolder}/gone.yaml`;
@@ -51,8 +51,7 @@ function leadsNowhere({ address, target }: Gone, now: ReadonlySet<string>): Faul
   return [fault(goneFile, 'GONE_ADDRESS', `${address} leads to ${target}, where there is nothing`, 'the address of a record that is there', 'correct the address behind successor: or now:')];
 }
 
-function changedIdentity(before: Identity, complexes: readonly Identity[], entries: ReadonlyMap<string, Gone>): Fault[] {
-  const after = complexes.find(({ id }) => id === before.id);
+function changedIdentity(before: Identity, after: Identity | undefined, entries: ReadonlyMap<string, Gone>): Fault[] {
   const address = `complexes/${before.id}/`;
   if (after === undefined || entries.get(address)?.kind === 'corrected') return [];
   const told = ({ formula, ion, geometry, isomer }: Identity): string => `${formula}, ${ion}, ${geometry}${isomer === 'none' ? '' : `, ${isomer}`}`;

@@ -1,8 +1,7 @@
 import { readCollection } from '../content/readCollection.ts';
-import type { ReadMemory } from '../content/readCollection.ts';
 import { sortedFaults } from '../content/report.ts';
 import type { Collection, Fault } from '../content/types.ts';
-import { permanenceFaults } from './permanence.ts';
+import { identitiesOf, permanenceFaults } from './permanence.ts';
 import { readHistory } from './readHistory.ts';
 import { noHistory } from './types.ts';
 import type { History } from './types.ts';
@@ -16,11 +15,11 @@ export interface Content {
 }
 
 /** Reads a content folder with its releases, and holds the one against the other. Never throws for what stands in the folder. */
-export function readContent(directory: string, memory: ReadMemory | null = null): Content {
-  const { collection, faults, filesRead } = readCollection(directory, memory);
+export function readContent(directory: string): Content {
+  const { collection, faults, filesRead } = readCollection(directory);
   const read = readHistory(directory);
   const found = [...faults, ...read.faults];
-  const all = found.length > 0 || collection === null ? found : permanenceFaults(read.history, collection);
+  const all = found.length > 0 || collection === null ? found : permanenceFaults(read.history, identitiesOf(collection.complexes), collection.ligands);
   return all.length > 0
     ? { collection: null, history: noHistory, faults: sortedFaults(all), filesRead }
     : { collection, history: read.history, faults: [], filesRead };

@@ -3,11 +3,11 @@
 import { mergeTables } from '../database/rows/row.ts';
 import type { Row, Tables } from '../database/rows/row.ts';
 import { changesBetween } from './changes.ts';
-import { parameterNames, snapshotOf } from './snapshot.ts';
-import type { Change, FrozenComplex, FrozenMeasurement, FrozenNumber, FrozenRelease, Gone, GoneKind, History } from './types.ts';
+import { parameterNames } from './snapshot.ts';
+import type { Change, FrozenComplex, FrozenMeasurement, FrozenNumber, FrozenRelease, Gone, GoneKind, History, Snapshot } from './types.ts';
 
-/** Rows of the history of a collection; `current` are all its other rows. */
-export function historyRows({ releases, gone }: History, current: Tables): Tables {
+/** Rows of the history of a collection; `current` is what a release would freeze now. */
+export function historyRows({ releases, gone }: History, current: Snapshot): Tables {
   const changes = allChanges(releases, current);
   return mergeTables([
     ...releases.map(releaseRows),
@@ -26,11 +26,11 @@ export function firstReleases(releases: readonly FrozenRelease[]): ReadonlyMap<s
   return first;
 }
 
-function allChanges(releases: readonly FrozenRelease[], current: Tables): { readonly release: string | null; readonly change: Change }[] {
+function allChanges(releases: readonly FrozenRelease[], current: Snapshot): { readonly release: string | null; readonly change: Change }[] {
   const last = releases.at(-1);
   if (last === undefined) return [];
   const steps = releases.slice(1).flatMap((after, index) => changesBetween(releases[index]!, after).map((change) => ({ release: after.release, change })));
-  return [...steps, ...changesBetween(last, snapshotOf(current)).map((change) => ({ release: null, change }))];
+  return [...steps, ...changesBetween(last, current).map((change) => ({ release: null, change }))];
 }
 
 function releaseRows(release: FrozenRelease): Tables {

@@ -2,6 +2,7 @@
 
 import { createHash } from 'node:crypto';
 import type { ParameterName } from '#engine';
+import type { Collection } from '../content/types.ts';
 import type { Cell, Row, Tables } from '../database/rows/row.ts';
 import { mainFiles } from '../export/files.ts';
 import { complexPath, fixedPages, ionPath, ligandPath, measurementPath } from '../export/paths.ts';
@@ -9,19 +10,18 @@ import type { FrozenComplex, FrozenMeasurement, FrozenNumber, Snapshot } from '.
 
 export const parameterNames: readonly ParameterName[] = ['Delta', 'B', 'C', 'beta'];
 
-/** The snapshot of a collection. `tables` are all rows of its database. */
-export function snapshotOf(tables: Tables): Snapshot {
-  const meta = new Map(rowsOf(tables, 'meta').map(({ key, value }) => [key, String(value)]));
+/** The snapshot of a collection, from what a release keeps of each of its complexes. */
+export function snapshotOf(
+  { group, ligands }: Pick<Collection, 'group' | 'ligands'>, complexes: readonly FrozenComplex[], { engine, software }: Pick<Snapshot, 'engine' | 'software'>,
+): Snapshot {
+  const ascending = sorted(complexes, ({ id }) => id);
+  return { software, engine, licence: group.licence, doi: group.doi, complexes: ascending, addresses: addressesOf(ascending, ligands.map(({ id }) => id)) };
+}
+
+/** What a release keeps of complexes. `tables` hold every row of theirs and of their free ions. */
+export function frozenComplexes(tables: Tables): readonly FrozenComplex[] {
   const find = finder(tables);
-  const complexes = sorted(rowsOf(tables, 'complex').map((complex) => complexOf(complex, find)), ({ id }) => id);
-  return {
-    software: meta.get('software') ?? '',
-    engine: meta.get('engine') ?? '',
-    licence: meta.get('group.licence') ?? '',
-    doi: meta.get('group.doi') ?? null,
-    complexes,
-    addresses: addressesOf(complexes, rowsOf(tables, 'ligand').map(({ id }) => String(id))),
-  };
+  return rowsOf(tables, 'complex').map((complex) => complexOf(complex, find));
 }
 
 /** Addresses that a collection publishes for good: pages of complexes, measurements, ligands and ions, the fixed pages, the files of data/. */

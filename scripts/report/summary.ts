@@ -23,8 +23,8 @@ export function duration(milliseconds: number): string {
 
 /** What a refit did, as lines for a person: records, measurements, verdicts. An empty collection gets the next step. */
 export function refitLines(refit: Refit): string[] {
-  const { records, measurements, refitted, collection } = refit;
-  if (collection.complexes.length === 0) {
+  const { records, complexes, measurements, refitted } = refit;
+  if (complexes === 0) {
     return [
       `Read ${counted(records, 'record')}. The collection has no complexes yet.`,
       'Next: write content/complexes/my-first.yaml (content/README.md has an example to copy), then run "npm run check".',
@@ -32,7 +32,7 @@ export function refitLines(refit: Refit): string[] {
   }
   const kept = measurements - refitted;
   return [
-    `Read ${counted(records, 'record')}: ${counted(collection.complexes.length, 'complex', 'complexes')} with ${counted(measurements, 'measurement')}` +
+    `Read ${counted(records, 'record')}: ${counted(complexes, 'complex', 'complexes')} with ${counted(measurements, 'measurement')}` +
       ` (${refitted} fitted now, ${kept} unchanged).`,
     ...aligned(verdicts.map((verdict) => [String(refit.verdicts[verdict]).padStart(6), verdict, meanings[verdict]])),
   ];
@@ -42,10 +42,10 @@ export function refitLines(refit: Refit): string[] {
 export function refitFacts(refit: Refit): Readonly<Record<string, unknown>> {
   return {
     records: refit.records,
-    complexes: refit.collection.complexes.length,
+    complexes: refit.complexes,
     measurements: refit.measurements,
     fitted: refit.refitted,
     verdicts: refit.verdicts,
-    policy: refit.collection.policyId,
+    policy: refit.frame.policyId,
   };
 }

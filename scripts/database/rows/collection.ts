@@ -1,25 +1,40 @@
 import { freeIon, policyId } from '#engine';
 import type { FreeIonSetName, Ion, Policy } from '#engine';
 import type { Collection, Group, LigandRecord, SourceRecord } from '../../content/types.ts';
+import type { ComplexFacts } from './complexResult.ts';
 import { flag, list } from './row.ts';
 import type { Row, Tables } from './row.ts';
 
-const freeIonSetNames: readonly FreeIonSetName[] = ['published', 'atomic-levels'];
+export const freeIonSetNames: readonly FreeIonSetName[] = ['published', 'atomic-levels'];
 
-/** Rows of everything that belongs to the collection as a whole: meta, people, policies, ions, sources, ligands, release. */
-export function collectionRows(collection: Collection, engineHash: string, software: string): Tables {
-  const ions = ionsOf(collection);
+/** A collection without its complexes. */
+export type CollectionFrame = Omit<Collection, 'complexes'>;
+
+/** Rows of what a collection holds beside its complexes: meta, people, sources, ligands, the policy in force. */
+export function frameRows(frame: CollectionFrame, engineHash: string, software: string): Tables {
   return {
-    meta: metaRows(collection.group, engineHash, software),
-    person: collection.group.people.map((person, index) => ({
+    meta: metaRows(frame.group, engineHash, software),
+    person: frame.group.people.map((person, index) => ({
       number: index + 1, name: person.name, orcid: person.orcid, initials: person.initials,
     })),
-    policy: policyRows(collection),
-    ion: ions.map(ionRow),
-    free_ion: freeIonSetNames.flatMap((set) => ions.flatMap((ion) => freeIonRows(set, ion))),
-    source: collection.sources.map(sourceRow),
-    ligand: collection.ligands.map(ligandRow),
-    release: [releaseRow(collection)],
+    policy: [policyRow(frame.policyId, frame.policy, true)],
+    source: frame.sources.map(sourceRow),
+    ligand: frame.ligands.map(ligandRow),
+  };
+}
+
+/** Gives the rows of ions and policies that complexes share, each with the first complex that needs it. */
+export function sharedRows(frame: CollectionFrame): (complex: Pick<ComplexFacts, 'ion' | 'overrides'>) => Tables {
+  const ions = new Set<string>();
+  const policies = new Set([frame.policyId]);
+  return ({ ion, overrides }): Tables => {
+    const fresh = new Map(overrides.map((policy) => [policyId(policy), policy]));
+    for (const id of fresh.keys()) if (policies.has(id)) fresh.delete(id);
+    for (const id of fresh.keys()) policies.add(id);
+    const policy = [...fresh].map(([id, one]) => policyRow(id, one, false));
+    if (ions.has(ion.name)) return { policy };
+    ions.add(ion.name);
+    return { policy, ion: [ionRow(ion)], free_ion: freeIonSetNames.flatMap((set) => freeIonRows(set, ion)) };
   };
 }
 
@@ -40,14 +55,6 @@ function metaRows(group: Group, engineHash: string, software: string): Row[] {
     'group.demonstration': String(group.demonstration),
   };
   return Object.entries(facts).flatMap(([key, value]) => (value === null ? [] : [{ key, value }]));
-}
-
-function policyRows(collection: Collection): Row[] {
-  const policies = new Map<string, Policy>([[collection.policyId, collection.policy]]);
-  for (const complex of collection.complexes) {
-    for (const measurement of complex.measurements) policies.set(policyId(measurement.policy), measurement.policy);
-  }
-  return [...policies].map(([id, policy]) => policyRow(id, policy, id === collection.policyId));
 }
 
 function policyRow(id: string, policy: Policy, inForce: boolean): Row {
@@ -75,16 +82,12 @@ function policyRow(id: string, policy: Policy, inForce: boolean): Row {
   };
 }
 
-function ionsOf(collection: Collection): readonly Ion[] {
-  const ions = new Map(collection.complexes.map((complex) => [complex.ion.name, complex.ion]));
-  return [...ions.values()];
-}
-
 function ionRow(ion: Ion): Row {
   return { name: ion.name, metal: ion.metal, oxidation: ion.oxidation, electrons: ion.electrons, shell: ion.row };
 }
 
-function freeIonRows(set: FreeIonSetName, ion: Ion): Row[] {
+/** The free ion of a set, where the set has it. */
+export function freeIonRows(set: FreeIonSetName, ion: Ion): Row[] {
   const values = freeIon(set, ion);
   if (values === null) return [];
   return [{ set_name: set, ion: ion.name, B0: values.racahB0, C0: values.racahC0, kind: values.kind, source: values.source }];
@@ -105,10 +108,11 @@ function ligandRow(ligand: LigandRecord): Row {
   };
 }
 
-function releaseRow({ group, policyId: policy, complexes }: Collection): Row {
+/** What the collection would be released as. */
+export function releaseRow({ group, policyId: policy }: CollectionFrame, complexes: readonly ComplexFacts[]): Row {
   return {
     id: group.release, doi: group.doi, licence: group.licence, policy,
     complexes: complexes.length,
-    measurements: complexes.reduce((count, complex) => count + complex.measurements.length, 0),
+    measurements: complexes.reduce((count, { verdicts }) => count + verdicts.length, 0),
   };
 }

@@ -1,5 +1,5 @@
 import { floorFactor } from '#engine';
-import type { Caution, Reading } from '#engine';
+import type { Caution } from '#engine';
 import type { ComplexRecord } from '../../content/types.ts';
 import { disagreements } from './complexFacts.ts';
 import type { ReadRecord } from './complexFacts.ts';
@@ -17,6 +17,22 @@ const kinds = ['refused', 'better rival', 'strained', 'quoted value', 'repeats d
 
 type Kind = (typeof kinds)[number];
 
+/** Something that needs a person, of one complex. */
+export interface ReviewItem {
+  readonly kind: Kind;
+  readonly complex: string;
+  readonly measurement: string;
+  readonly text: string;
+}
+
+/** A reading with spare bands, as far as the factor on the floors needs it. */
+export interface SpareReading {
+  readonly ion: string;
+  readonly geometry: string;
+  readonly spareBands: number;
+  readonly residuals: readonly { readonly residual: number; readonly u: number; readonly floor: number }[];
+}
+
 function concerns({ chosen }: ReadRecord): [Kind, string][] {
   const has = (code: string): string | undefined => chosen.cautions.find((caution) => caution.code === code)?.text;
   const found: [Kind, string][] = [];
@@ -29,35 +45,43 @@ function concerns({ chosen }: ReadRecord): [Kind, string][] {
   return found;
 }
 
-/** What needs a person, most pressing first, then by complex and measurement. */
-export function reviewRows(reviewed: readonly ReviewedComplex[]): Row[] {
-  const found = reviewed.flatMap(({ complex, records, cautions }) => records.flatMap((record) => {
+/** What of one complex needs a person, by measurement. */
+export function reviewItems({ complex, records, cautions }: ReviewedComplex): ReviewItem[] {
+  return records.flatMap((record) => {
     const id = record.measurement.id;
     const quoted = disagreements(record).map((text): [Kind, string] => ['quoted value', `${text}.`]);
     const repeats = (cautions.get(id) ?? []).filter(({ code }) => code === 'MEASUREMENTS_DISAGREE').map(({ text }): [Kind, string] => ['repeats disagree', text]);
     return [...concerns(record), ...quoted, ...repeats].map(([kind, text]) => ({ kind, complex: complex.id, measurement: id, text }));
+  });
+}
+
+/** The review list: most pressing first, then by complex and measurement, as the items come. */
+export function reviewRows(items: readonly ReviewItem[]): Row[] {
+  return [...items].sort((a, b) => kinds.indexOf(a.kind) - kinds.indexOf(b.kind)).map((item, index) => ({ number: index + 1, ...item }));
+}
+
+/** The readings of one complex that have spare bands. */
+export function spareReadings({ complex: { ion, geometry }, records }: ReviewedComplex): SpareReading[] {
+  if (geometry === null) return [];
+  return records.filter(({ chosen }) => chosen.spareBands >= 1).map(({ chosen: { bands, spareBands } }) => ({
+    ion: ion.name, geometry, spareBands,
+    residuals: bands.filter(({ used }) => used).map(({ residual, uMinus, uPlus, floor }) => ({ residual: residual!, u: Math.sqrt((uMinus ** 2 + uPlus ** 2) / 2), floor })),
   }));
-  found.sort((a, b) => kinds.indexOf(a.kind) - kinds.indexOf(b.kind));
-  return found.map((row, index) => ({ number: index + 1, ...row }));
 }
 
 /** The factor on the floors that each ion's tested records suggest. */
-export function floorFactorRows(reviewed: readonly ReviewedComplex[]): Tables {
-  const groups = new Map<string, { ion: string; geometry: string; readings: Reading[] }>();
-  for (const { complex, records } of reviewed)
-    for (const { chosen } of records) {
-      if (chosen.spareBands < 1 || complex.geometry === null) continue;
-      const key = `${complex.ion.name} ${complex.geometry}`;
-      const group = groups.get(key) ?? { ion: complex.ion.name, geometry: complex.geometry, readings: [] };
-      group.readings.push(chosen);
-      groups.set(key, group);
-    }
+export function floorFactorRows(spare: readonly SpareReading[]): Tables {
+  const groups = new Map<string, SpareReading[]>();
+  for (const reading of spare) {
+    const key = `${reading.ion} ${reading.geometry}`;
+    const group = groups.get(key);
+    if (group === undefined) groups.set(key, [reading]);
+    else group.push(reading);
+  }
   return {
-    floor_factor: [...groups.values()].flatMap(({ ion, geometry, readings }) => {
-      const rows = readings.flatMap(({ bands }) => bands.filter(({ used }) => used).map(({ residual, uMinus, uPlus, floor }) => ({
-        residual: residual!, u: Math.sqrt((uMinus ** 2 + uPlus ** 2) / 2), floor,
-      })));
-      const factor = floorFactor(rows, readings.reduce((sum, { spareBands }) => sum + spareBands, 0));
+    floor_factor: [...groups.values()].flatMap((readings) => {
+      const { ion, geometry } = readings[0]!;
+      const factor = floorFactor(readings.flatMap(({ residuals }) => residuals), readings.reduce((sum, { spareBands }) => sum + spareBands, 0));
       return factor === null ? [] : [{ ion, geometry, kappa: factor.kappa, u: factor.u, spare_bands: factor.spareBands }];
     }),
   };

@@ -1,6 +1,6 @@
-import { aquaLigand, fitFactors, measurementId, memberPlacements, policyId, seriesParameters, seriesResult } from '#engine';
+import { aquaLigand, fitFactors, memberPlacements, policyId, seriesParameters, seriesResult } from '#engine';
 import type { ComplexIdentity, FactorFit, Geometry, Reading, SeriesLigand, SeriesResult } from '#engine';
-import type { Collection, ComplexRecord } from '../../content/types.ts';
+import type { ComplexRecord } from '../../content/types.ts';
 import { flag, mergeTables } from './row.ts';
 import type { Tables } from './row.ts';
 
@@ -11,18 +11,11 @@ export function identityOf({ id, formula, ion, geometry, geometryName, multiplic
   return { id, formula, ion, geometry, geometryName, multiplicity, isomer, ligands };
 }
 
-/** The chosen reading of every measurement as a comparison needs it, in the order of the records. */
-export function collectionSeriesResults(collection: Collection, readings: ReadonlyMap<string, readonly Reading[]>): readonly SeriesResult[] {
-  return collection.complexes.flatMap((complex) => {
-    const identity = identityOf(complex);
-    // A complex has one spin state: where none was typed, that of its first measurement's reading.
-    const first = complex.measurements[0];
-    const spin = complex.multiplicity ?? (first === undefined ? null : (readings.get(measurementId({ complex: identity, measurement: first.id }))?.[0]?.multiplicity ?? null));
-    return complex.measurements.flatMap((measurement) => {
-      const [reading] = readings.get(measurementId({ complex: identity, measurement: measurement.id })) ?? [];
-      return reading === undefined ? [] : [seriesResult({ ...identity, multiplicity: spin }, measurement.id, measurement.engine, policyId(measurement.policy), reading)];
-    });
-  });
+/** The chosen reading of every measurement of a complex as a comparison needs it; `chosen` are in the order of the measurements. */
+export function complexSeriesResults(complex: ComplexRecord, chosen: readonly Reading[]): readonly SeriesResult[] {
+  // A complex has one spin state: where none was typed, that of its first measurement's reading.
+  const identity = { ...identityOf(complex), multiplicity: complex.multiplicity ?? chosen[0]?.multiplicity ?? null };
+  return complex.measurements.map(({ id, engine, policy }, index) => seriesResult(identity, id, engine, policyId(policy), chosen[index]!));
 }
 
 /** Rows of the factor fits and of every measurement's predictions from the rest of the collection. */

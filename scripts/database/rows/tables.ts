@@ -1,65 +1,61 @@
-import { hazardCautions } from '#engine';
 import type { Reading } from '#engine';
-import type { Collection, ComplexRecord, LigandRecord } from '../../content/types.ts';
-import { collectionRows } from './collection.ts';
-import { auditRows, cautionsOfComplex, readRecord } from './complexFacts.ts';
-import { complexRows } from './complex.ts';
-import { hazardSubject } from './hazardSubject.ts';
-import { cautionRows, readingRows } from './reading.ts';
+import type { Collection } from '../../content/types.ts';
+import { historyRows } from '../../release/rows.ts';
+import { snapshotOf } from '../../release/snapshot.ts';
+import type { Snapshot } from '../../release/types.ts';
+import { noHistory } from '../../release/types.ts';
+import type { History } from '../../release/types.ts';
+import { frameRows, releaseRow, sharedRows } from './collection.ts';
+import type { CollectionFrame } from './collection.ts';
+import { complexResult } from './complexResult.ts';
+import type { ComplexFacts } from './complexResult.ts';
 import { floorFactorRows, reviewRows } from './review.ts';
-import type { ReviewedComplex } from './review.ts';
 import { mergeTables } from './row.ts';
 import type { Tables } from './row.ts';
-import { collectionSeriesResults, seriesRows } from './series.ts';
+import { seriesRows } from './series.ts';
 
 /** The full id of a measurement, "cr-am6/aq-295". */
 export function measurementKey(complex: string, measurement: string): string {
   return `${complex}/${measurement}`;
 }
 
+/** Order by id: binary, never the locale's. */
+export function byId(a: { readonly id: string }, b: { readonly id: string }): number {
+  return a.id < b.id ? -1 : a.id > b.id ? 1 : 0;
+}
+
+/** What made the numbers: sha256 of the engine's sources, hex, and name and version of the software. */
+export interface Origin {
+  readonly engine: string;
+  readonly software: string;
+}
+
+/** The rows that hang on all complexes together. `complexes` ascend by id. */
+export function wholeTables(frame: CollectionFrame, history: History, complexes: readonly ComplexFacts[], origin: Origin): Tables {
+  return mergeTables([
+    { release: [releaseRow(frame, complexes)] },
+    { review: reviewRows(complexes.flatMap(({ review }) => review)) },
+    floorFactorRows(complexes.flatMap(({ spare }) => spare)),
+    seriesRows(complexes.flatMap(({ series }) => series), frame.ligands, frame.policyId),
+    historyRows(history, snapshotOfFacts(frame, complexes, origin)),
+  ]);
+}
+
+/** What a release would freeze now. */
+export function snapshotOfFacts(frame: CollectionFrame, complexes: readonly ComplexFacts[], origin: Origin): Snapshot {
+  return snapshotOf(frame, complexes.map(({ frozen }) => frozen), origin);
+}
+
 /**
  * Every row of the database for a collection and its readings, by full measurement id; the first reading of each is the chosen one.
  * Throws where a measurement has no reading.
  */
-export function allTables(
-  collection: Collection, readings: ReadonlyMap<string, readonly Reading[]>, engineHash: string, software: string,
-): Tables {
-  const reviewed = collection.complexes.map((complex) => reviewedComplex(complex, collection.ligands, readings));
+export function allTables(collection: Collection, readings: ReadonlyMap<string, readonly Reading[]>, engine: string, software: string): Tables {
+  const results = collection.complexes.map((complex) =>
+    complexResult(complex, collection.ligands, complex.measurements.map(({ id }) => readings.get(measurementKey(complex.id, id)) ?? []), collection.policyId));
+  const facts = results.map((result) => result.facts);
   return mergeTables([
-    collectionRows(collection, engineHash, software),
-    ...reviewed.map((one) => tablesOfComplex(one, collection.ligands, readings)),
-    { review: reviewRows(reviewed) },
-    floorFactorRows(reviewed),
-    seriesRows(collectionSeriesResults(collection, readings), collection.ligands, collection.policyId),
+    frameRows(collection, engine, software), ...facts.map(sharedRows(collection)), ...results.map(({ tables }) => tables),
+    wholeTables(collection, noHistory, facts, { engine, software }),
   ]);
-}
-
-function readingsOf(complex: ComplexRecord, measurement: string, readings: ReadonlyMap<string, readonly Reading[]>): readonly Reading[] {
-  const found = readings.get(measurementKey(complex.id, measurement));
-  if (found === undefined || found.length === 0) throw new Error(`no reading for ${complex.id}/${measurement}`);
-  return found;
-}
-
-function reviewedComplex(complex: ComplexRecord, ligands: readonly LigandRecord[], readings: ReadonlyMap<string, readonly Reading[]>): ReviewedComplex {
-  const records = complex.measurements.map((measurement) => readRecord(measurement, readingsOf(complex, measurement.id, readings)[0]!));
-  return { complex, records, cautions: cautionsOfComplex(complex, ligands, records) };
-}
-
-function tablesOfComplex(
-  { complex, records, cautions: ofComplex }: ReviewedComplex, ligands: readonly LigandRecord[], readings: ReadonlyMap<string, readonly Reading[]>,
-): Tables {
-  const hazards = hazardCautions(hazardSubject(complex, ligands));
-  const read = complex.measurements.map((measurement) => ({ measurement, found: readingsOf(complex, measurement.id, readings) }));
-  const multiplicity = complex.multiplicity ?? read[0]?.found[0]?.multiplicity ?? null;
-  let cautions = hazards.length;
-  const parts: Tables[] = [complexRows(complex, multiplicity, hazards), { audit: records.flatMap((record) => auditRows(complex.id, record)) }];
-  for (const { measurement, found } of read) {
-    for (const [index, reading] of found.entries()) {
-      const all = index === 0 ? [...reading.cautions, ...(ofComplex.get(measurement.id) ?? [])] : reading.cautions;
-      const rows = cautionRows(complex.id, measurement.id, index + 1, all, cautions);
-      cautions += rows.length;
-      parts.push(readingRows(complex.id, measurement.id, index + 1, reading, measurement.policy, complex.ion.electrons), { caution: rows });
-    }
-  }
-  return mergeTables(parts);
 }

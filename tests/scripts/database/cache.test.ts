@@ -14,7 +14,8 @@ afterEach(() => {
 
 function keep(file: string, fresh: readonly [string, string][], current: readonly string[]): void {
   const cache = openCache(file);
-  cache.keep(new Map(fresh), new Set(current));
+  for (const [key, json] of fresh) cache.put(key, json);
+  cache.keepOnly(new Set(current));
   cache.close();
 }
 

@@ -4,8 +4,8 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { isPrediction, measurementId, placingGround, predictFromFactors } from '#engine';
 import type { SeriesResult } from '#engine';
 import { readStoredCollection } from '../../../scripts/compare/collection.ts';
-import { collectionSeriesResults } from '../../../scripts/database/rows/series.ts';
-import { refit } from '../../../scripts/database/refit.ts';
+import { refit, refitCollection } from '../../../scripts/database/refit.ts';
+import { readContent } from '../../../scripts/release/readContent.ts';
 import { places } from '../../../scripts/places.ts';
 import { temporaryFolder } from '../commands/sampleContent.ts';
 
@@ -19,7 +19,8 @@ let direct: readonly SeriesResult[];
 beforeAll(() => {
   const done = refit({ content, database: file, cache: null });
   if (!done.ok) throw new Error(JSON.stringify(done.faults));
-  direct = collectionSeriesResults(done.refit.collection, done.refit.readings);
+  const { collection, history } = readContent(content);
+  direct = refitCollection(collection!, history, 0, { cache: null }).facts.flatMap(({ series }) => series);
   database = new Database(file, { readonly: true });
 });
 afterAll(() => {
