@@ -1,5 +1,5 @@
-import { readdirSync, statSync } from 'node:fs';
-import { join } from 'node:path';
+import { mkdirSync, readdirSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import { dirname, join } from 'node:path';
 
 /** Content that was edited while it was being read or fitted: what came of it belongs to no one state of the folder. */
 export class ContentChangedError extends Error {}
@@ -16,12 +16,25 @@ export function stampContent(directory: string): ContentStamp {
   return stamp;
 }
 
-/** Two changes closer than this may bear the same time of change on some disks, ms. */
-const grain = 2000;
+/** Two changes closer than this may bear the same time of change on some disks, ns. */
+const grain = 2_000_000_000n;
 
-/** Whether a stamp names one state of its file for good: it had not changed lately, by the clock at the time of the stamp, ms. */
-export function isSettled(stamp: string, clock: number): boolean {
-  return Number(BigInt(stamp.split(' ')[1]!) / 1_000_000n) < clock - grain;
+/** What the disk says the time is, ns: the time of change of `file`, which is written and removed. null: it cannot be written. */
+export function diskTime(file: string): bigint | null {
+  try {
+    mkdirSync(dirname(file), { recursive: true });
+    writeFileSync(file, '');
+    const { mtimeNs } = statSync(file, { bigint: true });
+    rmSync(file);
+    return mtimeNs;
+  } catch {
+    return null;
+  }
+}
+
+/** Whether a stamp names one state of its file for good: at the time of the stamp the file had not changed lately. */
+export function isSettled(stamp: string, time: bigint | null): boolean {
+  return time !== null && BigInt(stamp.split(' ')[1]!) < time - grain;
 }
 
 function filesUnder(directory: string): string[] {

@@ -2,8 +2,9 @@ import type { Verdict } from '#engine';
 import { fileFault, openFile } from '../content/files.ts';
 import { readComplex, readSurroundings } from '../content/readCollection.ts';
 import { sortedFaults } from '../content/report.ts';
-import { holdContent, isSettled, stampContent } from '../content/stamp.ts';
+import { diskTime, holdContent, isSettled, stampContent } from '../content/stamp.ts';
 import type { Collection, Fault } from '../content/types.ts';
+import { besideTarget } from '../litter.ts';
 import { permanenceFaults } from '../release/permanence.ts';
 import { readContent } from '../release/readContent.ts';
 import { readHistory } from '../release/readHistory.ts';
@@ -56,7 +57,7 @@ export type RefitResult =
  * @throws ContentChangedError where a file of the content changed in between; the old file stays then too
  */
 export function refit({ content, database, cache, progress }: RefitOrder): RefitResult {
-  const started = Date.now();
+  const started = cache === null ? null : diskTime(besideTarget(keptFile(cache), 'tmp'));
   const stamp = stampContent(content);
   const surroundings = readSurroundings(content);
   const history = readHistory(content);
