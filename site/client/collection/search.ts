@@ -1,9 +1,9 @@
-import { type FormulaMatch, type MatchKind, type NormalisedQuery, type QueryWord, normaliseQuery, readIonLoosely } from '#engine';
+import { type FormulaMatch, type MatchKind, type NormalisedQuery, type QueryWord, nameWords, normaliseQuery, readIonLoosely } from '#engine';
 import { figures, plainNumber } from '../../data/show.ts';
 import { nearNames } from '../../../scripts/content/nearest.ts';
 import type { FoundCollection, FoundComplex, FoundRow } from './packed.ts';
 import { type NumberClause, type Query, readQuery } from './query.ts';
-import { type SearchIndex, beginningWith, holding } from './searchIndex.ts';
+import { FIELDS, type SearchIndex, beginningWith, holding } from './searchIndex.ts';
 
 /** A row that answers a search. */
 export interface Hit {
@@ -27,13 +27,21 @@ export function search(collection: FoundCollection, index: SearchIndex, typed: s
   return { hits: sorted(nearest(collection, index, query)), nearest: true };
 }
 
-const sorted = (hits: readonly Hit[]): readonly Hit[] => [...hits].sort((a, b) => b.score - a.score || a.row - b.row);
+/** Scores are far below this, and differ by more than one in as many where they differ. */
+const HIGH = 1024;
+
+/** By score, then by row. Numbers are sorted several times faster than objects, and one letter may find ten thousand rows. */
+function sorted(hits: readonly Hit[]): readonly Hit[] {
+  const rows = 2 ** 32;
+  const byRow = new Map(hits.map((hit) => [hit.row, hit]));
+  return [...Float64Array.from(hits, ({ row, score }) => (HIGH * HIGH - Math.round(score * HIGH)) * rows + row).sort()].map((key) => byRow.get(key % rows)!);
+}
 
 function answers(collection: FoundCollection, index: SearchIndex, query: Query): readonly Hit[] {
   const { rows, complexes } = collection;
   const byText = query.text === '' ? null : textHits(collection, index, query.text);
   const candidates: readonly Hit[] = byText ?? rows.map(({ place }) => ({ row: place, score: 0, why: () => '' }));
-  if (query.text === '' && query.numbers.length === 0 && query.electrons === null && query.ion === null) return [];
+  if (query.numbers.length === 0 && query.electrons === null && query.ion === null) return byText ?? [];
   return candidates.flatMap((hit): Hit[] => {
     const row = rows[hit.row]!;
     let { score } = hit;
@@ -49,7 +57,6 @@ function answers(collection: FoundCollection, index: SearchIndex, query: Query):
       numbers.push(found);
       score += 60 - 30 * found.off;
     }
-    if (query.electrons === null && query.ion === null && numbers.length === 0) return [hit];
     return [{
       row: hit.row, score,
       why: () => [...(hit.score === 0 ? [] : [hit.why()]), ...(query.ion === null ? [] : [query.ion]), ...(query.electrons === null ? [] : [`d${query.electrons}`]), ...numbers.map(({ value }, place) => SHOWN[query.numbers[place]!.kind](value))].join(', '),
@@ -85,7 +92,8 @@ const SHOWN: Readonly<Record<NumberClause['kind'], (value: number) => string>> =
   band: (value) => `band near ${plainNumber(value, 0)} cm⁻¹`, Delta: (value) => `Δ ${plainNumber(value, 0)} cm⁻¹`, B: (value) => `B ${plainNumber(value, 0)} cm⁻¹`, beta: (value) => `β ${figures(value, 2)}`,
 };
 
-function textHits({ complexes, rows, packed }: FoundCollection, index: SearchIndex, text: string): readonly Hit[] {
+function textHits(collection: FoundCollection, index: SearchIndex, text: string): readonly Hit[] {
+  const { complexes, rows } = collection;
   const query = normaliseQuery(text);
   const best = new Map<number, Hit>();
   const add = (hit: Hit): void => { if ((best.get(hit.row)?.score ?? 0) < hit.score) best.set(hit.row, hit); };
@@ -94,13 +102,19 @@ function textHits({ complexes, rows, packed }: FoundCollection, index: SearchInd
   const known = index.ids.get(id);
   if (known !== undefined) for (const row of rowsOf(known)) if (measurement === undefined || row.measurement.startsWith(measurement)) add({ row: row.place, score: 120, why: () => 'record id' });
   const alone = readIonLoosely(text) !== null;
-  for (const [complex, { score, kind }] of matches(index, query)) for (const row of rowsOf(complex)) add({ row: row.place, score, why: () => alone && kind === 'ion and ligands' ? 'ion' : kind === 'words' ? 'name or ligand' : kind });
-  if (!query.formula && query.words.length > 0) fieldHits({ complexes, rows, packed }, index, query.words, add);
+  if (!query.formula && query.words.length > 0) fieldHits(collection, index, query.words, add);
+  for (const [complex, { score, kind }] of matches(index, query, best.size === 0)) {
+    const why = (): string => alone && kind === 'ion and ligands' ? 'ion' : kind === 'words' ? 'name or ligand' : kind;
+    for (const row of rowsOf(complex)) add({ row: row.place, score, why });
+  }
   return [...best.values()];
 }
 
-/** Every complex that answers, with the score and kind that `searchMatch` gives it, read off the index. */
-export function matches(index: SearchIndex, query: NormalisedQuery): ReadonlyMap<number, FormulaMatch> {
+/**
+ * Every complex that answers, with the score and kind that `searchMatch` gives it, read off the index.
+ * @param pieces false: what answers by a mere piece of a formula or name is left out
+ */
+export function matches(index: SearchIndex, query: NormalisedQuery, pieces = true): ReadonlyMap<number, FormulaMatch> {
   const { squeezed: text, words, formula, charge, isomer } = query;
   const found = new Map<number, FormulaMatch>();
   const add = (places: Iterable<number>, worth: number, kind: MatchKind): void => {
@@ -123,7 +137,7 @@ export function matches(index: SearchIndex, query: NormalisedQuery): ReadonlyMap
   add(beginningWith(index.formulas, text), formula || text.length > 2 ? 60 : 40, 'start of the formula');
   add(beginningWith(index.names, text), 50, 'start of a name');
   add(all, 40, 'words');
-  if (found.size === 0 && !formula && text.length > 2) add([...holding(index.formulas, text), ...holding(index.names, text)], 30, 'part of a formula or name');
+  if (pieces && found.size === 0 && !formula && text.length > 2) add([...holding(index.formulas, text), ...holding(index.names, text)], 30, 'part of a formula or name');
   return found;
 }
 
@@ -141,34 +155,30 @@ function withWord({ words }: SearchIndex, { text, whole }: QueryWord): readonly 
   return whole ? [...words.exact.get(text) ?? [], ...beginningWith(words, `${text}:`)] : beginningWith(words, text);
 }
 
-/** Fields of a row that words may name. */
-const FIELDS: readonly (readonly [name: string, of: (row: FoundRow, complex: FoundComplex) => string])[] = [
-  ['geometry', (_, { geometry }) => geometry], ['spin', (_, { spin }) => spin], ['isomer', (_, { isomer }) => isomer],
-  ['phase', ({ phase }) => phase], ['medium', ({ medium }) => medium], ['verdict', ({ verdict }) => verdict],
-];
-
 /** A word this short names no field by its beginning: "cr" is chromium and not a crystal. */
 const shortest = 3;
 
 /** Rows whose every query word stands in a field or in a name or formula, at least one in a field. */
-function fieldHits({ complexes, rows, packed }: FoundCollection, index: SearchIndex, words: readonly QueryWord[], add: (hit: Hit) => void): void {
-  const wanted = words.map((word) => ({
-    fields: new Set(word.text.length < shortest ? [] : beginningWith(index.fields, word.text).map((place) => packed.words[place]!)), complexes: new Set(withWord(index, word)),
-  }));
-  if (wanted.every(({ fields }) => fields.size === 0)) return;
-  for (const row of rows) {
-    const complex = complexes[row.complex]!;
+function fieldHits({ complexes, rows }: FoundCollection, index: SearchIndex, words: readonly QueryWord[], add: (hit: Hit) => void): void {
+  const wanted = words.map((word) => ({ fields: new Set(word.text.length < shortest ? [] : beginningWith(index.fields, word.text)), complexes: new Set(withWord(index, word)) }));
+  // Every row that one word names a field of; what answers by names and formulas alone is found without it.
+  const candidates = new Set(wanted.flatMap(({ fields }) => [...fields]));
+  for (const place of candidates) {
+    const row = rows[place]!;
     let inFields = 0;
     const all = wanted.every(({ fields, complexes: holders }) => {
-      if (fields.size > 0 && FIELDS.some(([, of]) => fields.has(of(row, complex)))) inFields += 1;
+      if (fields.has(place)) inFields += 1;
       else if (!holders.has(row.complex)) return false;
       return true;
     });
-    if (all && inFields > 0) {
-      add({ row: row.place, score: inFields < wanted.length ? 45 : 38, why: () => FIELDS.filter(([, of]) => wanted.some(({ fields }) => fields.has(of(row, complex)))).map(([name, of]) => `${name} ${of(row, complex)}`).join(', ') });
-    }
+    if (all) add({ row: place, score: inFields < wanted.length ? 45 : 38, why: () => fieldsNamed(row, complexes[row.complex]!, words) });
   }
 }
+
+/** "geometry tetrahedral, medium water": the fields in which a query's words stand. */
+const fieldsNamed = (row: FoundRow, complex: FoundComplex, words: readonly QueryWord[]): string => FIELDS
+  .filter(([, of]) => nameWords(of(row, complex)).some((own) => words.some(({ text }) => text.length >= shortest && own.startsWith(text))))
+  .map(([name, of]) => `${name} ${of(row, complex)}`).join(', ');
 
 /** So many are offered where nothing answers. */
 const NEAREST = 5;

@@ -1,10 +1,12 @@
 import { type FormulaKeys, elementName, formulaKeys, nameWords } from '#engine';
-import { type FoundCollection, type FoundComplex, heldLigands } from './packed.ts';
+import { type FoundCollection, type FoundComplex, type FoundRow, heldLigands } from './packed.ts';
 
 /** Texts with the complexes that hold them, sorted for looking up beginnings. */
 interface Postings {
   readonly exact: ReadonlyMap<string, readonly number[]>;
   readonly sorted: readonly string[];
+  /** All of them with a line break around each, for looking up pieces. */
+  readonly joined: string;
 }
 
 /** All by which complexes are found. Complexes are named by their place. */
@@ -14,10 +16,16 @@ export interface SearchIndex {
   readonly names: Postings;
   readonly donors: Postings;
   readonly words: Postings;
-  /** Words of geometry, spin, isomer, phase, medium and verdict, with the places in `words` of the packed data that hold them. */
+  /** Words of geometry, spin, isomer, phase, medium and verdict, with the rows that hold them. */
   readonly fields: Postings;
   readonly ids: ReadonlyMap<string, number>;
 }
+
+/** Fields of a row that words may name. */
+export const FIELDS: readonly (readonly [name: string, of: (row: FoundRow, complex: FoundComplex) => string])[] = [
+  ['geometry', (_, { geometry }) => geometry], ['spin', (_, { spin }) => spin], ['isomer', (_, { isomer }) => isomer],
+  ['phase', ({ phase }) => phase], ['medium', ({ medium }) => medium], ['verdict', ({ verdict }) => verdict],
+];
 
 /** So many complexes are worked on before the page may breathe. */
 const SLICE = 50;
@@ -38,7 +46,16 @@ export async function buildIndex(collection: FoundCollection, rest: () => Promis
     for (const text of own.donors) donors.add(text, place);
     for (const text of own.words) words.add(text, place);
   }
-  collection.packed.words.forEach((text, place) => { for (const word of nameWords(text)) fields.add(word, place); });
+  const wordsOf = new Map<string, readonly string[]>();
+  for (const row of collection.rows) {
+    if (row.place % (20 * SLICE) === 0) await rest();
+    for (const [, of] of FIELDS) {
+      const text = of(row, collection.complexes[row.complex]!);
+      const own = wordsOf.get(text) ?? nameWords(text);
+      wordsOf.set(text, own);
+      for (const word of own) fields.add(word, row.place);
+    }
+  }
   await rest();
   return {
     keys, formulas: formulas.done(), names: names.done(), donors: donors.done(), words: words.done(), fields: fields.done(),
@@ -64,7 +81,10 @@ function gather(): { readonly add: (text: string, place: number) => void; readon
       if (list === undefined) exact.set(text, [place]);
       else list.push(place);
     },
-    done: () => ({ exact, sorted: [...exact.keys()].sort() }),
+    done: () => {
+      const sorted = [...exact.keys()].sort();
+      return { exact, sorted, joined: `\n${sorted.join('\n')}\n` };
+    },
   };
 }
 
@@ -82,8 +102,12 @@ export function beginningWith({ exact, sorted }: Postings, start: string): reado
 }
 
 /** Places of every text that holds `piece`. */
-export function holding({ exact, sorted }: Postings, piece: string): readonly number[] {
+export function holding({ exact, joined }: Postings, piece: string): readonly number[] {
   const found: number[] = [];
-  for (const text of sorted) if (text.includes(piece)) for (const one of exact.get(text)!) found.push(one);
+  for (let at = joined.indexOf(piece); at !== -1;) {
+    const end = joined.indexOf('\n', at);
+    for (const one of exact.get(joined.slice(joined.lastIndexOf('\n', at) + 1, end))!) found.push(one);
+    at = joined.indexOf(piece, end);
+  }
   return found;
 }
