@@ -37,7 +37,9 @@ function openFile(path: string): ReadingCache {
   mkdirSync(dirname(path), { recursive: true });
   const database = new Database(path, { timeout: 2000 });
   try {
-    database.exec('CREATE TABLE IF NOT EXISTS reading (key TEXT NOT NULL PRIMARY KEY, json TEXT NOT NULL) STRICT, WITHOUT ROWID');
+    // With row numbers the long texts are written one behind the other, and the keys apart.
+    database.exec('CREATE TABLE IF NOT EXISTS reading (key TEXT NOT NULL PRIMARY KEY, json TEXT NOT NULL) STRICT');
+    database.pragma('cache_size = -32768');
     return overDatabase(database, path);
   } catch (error) {
     database.close();
@@ -47,7 +49,7 @@ function openFile(path: string): ReadingCache {
 
 function overDatabase(database: Database.Database, path: string): ReadingCache {
   const select = database.prepare<[string], { json: string }>('SELECT json FROM reading WHERE key = ?');
-  const keys = database.prepare<[], { key: string }>('SELECT key FROM reading');
+  const known = new Set(database.prepare<[], string>('SELECT key FROM reading').pluck().all());
   const insert = database.prepare<[string, string]>('INSERT OR REPLACE INTO reading (key, json) VALUES (?, ?)');
   const remove = database.prepare<[string]>('DELETE FROM reading WHERE key = ?');
   let usable = true;
@@ -64,15 +66,15 @@ function overDatabase(database: Database.Database, path: string): ReadingCache {
   };
   const writing = (): void => { if (!database.inTransaction) database.exec('BEGIN IMMEDIATE'); };
   return {
-    get: (key) => tried(() => select.get(key)?.json ?? null, null),
+    get: (key) => (known.has(key) ? tried(() => select.get(key)?.json ?? null, null) : null),
     put: (key, json) => tried(() => {
       writing();
       insert.run(key, json);
     }, undefined),
     keepOnly: (current) => tried(() => {
-      const gone = keys.all().filter(({ key }) => !current.has(key));
+      const gone = [...known].filter((key) => !current.has(key));
       if (gone.length > 0) writing();
-      for (const { key } of gone) remove.run(key);
+      for (const key of gone) remove.run(key);
     }, undefined),
     close: () => {
       tried(() => { if (database.inTransaction) database.exec('COMMIT'); }, undefined);

@@ -19,13 +19,19 @@ export interface ComplexTask {
   readonly known: readonly (string | null)[];
 }
 
+/** A complex that is fitted; what is long stands as JSON text, which passes between threads faster than objects. */
 export interface FittedComplex {
   readonly id: string;
-  readonly tables: PackedTables;
-  /** `ComplexFacts` as JSON. */
+  /** `PackedTables`. */
+  readonly tables: string;
+  /** `ComplexFacts`. */
   readonly facts: string;
-  /** Readings as JSON where they were found now, by measurement. */
+  /** Readings where they were found now, by measurement. */
   readonly fresh: readonly (string | null)[];
+}
+
+export function tablesOf({ tables }: FittedComplex): PackedTables {
+  return JSON.parse(tables) as PackedTables;
 }
 
 /**
@@ -36,7 +42,7 @@ export function fitComplex({ complex, known }: ComplexTask, { ligands, policyId 
   const fresh = complex.measurements.map((measurement, index) => (known[index] == null ? readingsOf(complex.id, measurement) : null));
   const readings = complex.measurements.map((_, index) => JSON.parse(known[index] ?? fresh[index]!) as readonly Reading[]);
   const { tables, facts } = complexResult(complex, ligands, readings, policyId);
-  return { id: complex.id, tables: pack(tables), facts: JSON.stringify(facts), fresh };
+  return { id: complex.id, tables: JSON.stringify(pack(tables)), facts: JSON.stringify(facts), fresh };
 }
 
 /** The readings of one measurement as JSON text, the chosen one first. */

@@ -5,8 +5,7 @@ import { fitComplex } from './fitComplex.ts';
 import type { Basis, ComplexTask, FittedComplex } from './fitComplex.ts';
 
 export interface Answer {
-  /** Of a batch, as JSON: text passes between threads faster than objects. */
-  readonly fitted: string;
+  readonly fitted: readonly FittedComplex[];
   readonly failure: string | null;
 }
 
@@ -17,6 +16,9 @@ const batchSize = 8;
 
 /** Batches that may wait at each thread. More would only hold memory. */
 const mostWaiting = 8;
+
+/** MB. A thread has about 70 in use; without a limit it lets several times as much of what it no longer needs lie about. */
+const memory = { maxOldGenerationSizeMb: 512, maxYoungGenerationSizeMb: 48 } as const;
 
 /** A batch takes well under a second; this long without an answer means that a thread died. */
 const patience = 120_000;
@@ -36,17 +38,8 @@ export interface FitPool {
  */
 export function fitPool(basis: Basis, expected: number, take: (fitted: FittedComplex) => void): FitPool {
   const threads = threadsFor(expected, worthThreads);
-  if (threads < 2) return { add: (task) => takeAll(fitBatch([task], basis), take), finish: () => undefined, close: () => undefined };
+  if (threads < 2) return { add: (task) => take(fitComplex(task, basis)), finish: () => undefined, close: () => undefined };
   return poolOfThreads(basis, threads, take);
-}
-
-/** Fits a batch of complexes; the answer is the JSON of a list of `FittedComplex`. */
-export function fitBatch(tasks: readonly ComplexTask[], basis: Basis): string {
-  return JSON.stringify(tasks.map((task) => fitComplex(task, basis)));
-}
-
-function takeAll(fitted: string, take: (fitted: FittedComplex) => void): void {
-  for (const one of JSON.parse(fitted) as readonly FittedComplex[]) take(one);
 }
 
 interface Thread {
@@ -60,7 +53,7 @@ function poolOfThreads(basis: Basis, count: number, take: (fitted: FittedComplex
   const finished = new Int32Array(new SharedArrayBuffer(4));
   const threads = Array.from({ length: count }, (): Thread => {
     const { port1, port2 } = new MessageChannel();
-    const worker = new Worker(new URL('./fitWorker.ts', import.meta.url), { workerData: { port: port2, finished, basis }, transferList: [port2] });
+    const worker = new Worker(new URL('./fitWorker.ts', import.meta.url), { workerData: { port: port2, finished, basis }, transferList: [port2], resourceLimits: memory });
     worker.unref();
     port1.unref();
     return { worker, port: port1, waiting: 0 };
@@ -75,7 +68,7 @@ function poolOfThreads(basis: Basis, count: number, take: (fitted: FittedComplex
         if (failure !== null) throw new Error(failure);
         thread.waiting -= 1;
         received += 1;
-        takeAll(fitted, take);
+        fitted.forEach(take);
       }
   };
   const wait = (): void => {

@@ -2,17 +2,17 @@
 
 import { workerData } from 'node:worker_threads';
 import type { MessagePort } from 'node:worker_threads';
-import { fitBatch } from './fitPool.ts';
-import type { Answer } from './fitPool.ts';
+import { fitComplex } from './fitComplex.ts';
 import type { Basis, ComplexTask } from './fitComplex.ts';
+import type { Answer } from './fitPool.ts';
 
 const { port, finished, basis } = workerData as { readonly port: MessagePort; readonly finished: Int32Array; readonly basis: Basis };
 
 function answer(tasks: readonly ComplexTask[]): Answer {
   try {
-    return { fitted: fitBatch(tasks, basis), failure: null };
+    return { fitted: tasks.map((task) => fitComplex(task, basis)), failure: null };
   } catch (error) {
-    return { fitted: '[]', failure: error instanceof Error ? error.message : String(error) };
+    return { fitted: [], failure: error instanceof Error ? error.message : String(error) };
   }
 }
 

@@ -10,6 +10,7 @@ import { readContent } from '../release/readContent.ts';
 import { readHistory } from '../release/readHistory.ts';
 import type { History } from '../release/types.ts';
 import { complexFits } from './complexFits.ts';
+import { tablesOf } from './fitComplex.ts';
 import { basisHash, loadedEngineHash, softwareName, wholeHash } from './fingerprint.ts';
 import { factsOf, keptFile, readKept, writeKept } from './keptComplexes.ts';
 import { refitRun } from './refitRun.ts';
@@ -122,7 +123,7 @@ export function refitCollection(
     basis: collection, engine: origin.engine, cache, progress, expected: collection.complexes.length,
     take: (fitted) => {
       facts.push(factsOf(fitted));
-      parts.push(unpack(fitted.tables));
+      parts.push(unpack(tablesOf(fitted)));
     },
   });
   try {

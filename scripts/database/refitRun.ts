@@ -1,6 +1,7 @@
 import type { ComplexRecord } from '../content/types.ts';
 import { complexFits } from './complexFits.ts';
 import type { FitOrder } from './complexFits.ts';
+import { tablesOf } from './fitComplex.ts';
 import { factsOf } from './keptComplexes.ts';
 import type { KeptComplex, KeptRun } from './keptComplexes.ts';
 import { frameRows, sharedRows } from './rows/collection.ts';
@@ -56,7 +57,7 @@ export function refitRun({ frame, origin, database, cache, expected, progress, b
       touched = true;
       if (before?.complexes.has(fitted.id)) rows().removeComplexes([fitted.id]);
       rows().insert(pack(shared(factsOf(fitted))));
-      rows().insert(fitted.tables);
+      rows().insert(tablesOf(fitted));
       complexes.set(fitted.id, { ...read.get(fitted.id)!, facts: fitted.facts, readings });
     },
   });
