@@ -98,9 +98,10 @@ export function searchReadings(task: SearchTask, freedom: Freedom, known = Numbe
     const allAllowed = node.allowed === node.assigned;
     // Of two spin-allowed bands one may be left to be compared with the other.
     if (allAllowed && node.assigned <= 2) return false;
-    if (cost + withGaps(node, cut() - cost).ofAll <= cut()) return false;
+    const { ofAll, ofSome } = withGaps(node, cut() - cost);
+    if (cost + ofAll <= cut()) return false;
     // No fit of all bands comes near; only one that leaves the spin-forbidden ones out might.
-    return allAllowed || cost + leastOfAllowed(chosen) > cut() || scoreChoices(withRatioAssumed, chosen, notFitted).score > cut();
+    return allAllowed || cost + ofSome > cut() || cost + leastOfAllowed(chosen) > cut() || scoreChoices(withRatioAssumed, chosen, notFitted).score > cut();
   };
 
   const tryChoices = (): void => {
