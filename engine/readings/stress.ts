@@ -25,10 +25,6 @@ export function stressOf(ion: GroundCase, assigned: readonly Assigned[], fit: Fi
   if (used.length < 2 || fit.mode === 'field' || fit.mode === 'field, B assumed') return { pairs: [], leftOut: [] };
   const held: RatioUsed = { ...fit.ratio, u: 0 };
   const heldPolicy: Policy = { ...policy, ceilings: { ...policy.ceilings, racahC: 0 } };
-  const solve = (members: readonly Assigned[], by: Policy, ratio: RatioUsed): Fit | null => {
-    const outcome = fitAssignment(ion, members, by, ratio, freeIon);
-    return isFit(outcome) && outcome.mode !== 'field' && outcome.mode !== 'field, B assumed' && members.every((_, k) => outcome.used[k]) ? outcome : null;
-  };
   const pairs: PairAlone[] = [];
   if (used.length > 2)
     for (let i = 0; i < used.length; i++)
@@ -39,8 +35,8 @@ export function stressOf(ion: GroundCase, assigned: readonly Assigned[], fit: Fi
         pairs.push({ labels: [pair[0]!.label, pair[1]!.label], bands, at: isFit(alone) ? alone.solutions[0]!.at : null });
       }
   const without = (band: Assigned): Fit | null => {
-    const others = solve(used.filter((one) => one !== band), fit.mode === 'field, B, C' ? policy : heldPolicy, fit.ratio);
-    return others?.mode === fit.mode ? others : null;
+    const others = fitAssignment(ion, used.filter((one) => one !== band), fit.mode === 'field, B, C' ? policy : heldPolicy, fit.ratio, freeIon);
+    return isFit(others) && others.mode === fit.mode && others.used.every(Boolean) ? others : null;
   };
   const leftOut = used.length < 3 ? [] : used.map((band) => leaveOut(ion, band, assigned.indexOf(band), without(band), fit.floors));
   return { pairs, leftOut };
