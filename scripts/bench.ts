@@ -10,6 +10,7 @@ import { measurePages, measureRefit, prepareCollection } from './bench/collectio
 import { measureCompare } from './bench/compare.ts';
 import { measureBlocks, measureReadings } from './bench/engine.ts';
 import { measureKeystroke } from './bench/keystroke.ts';
+import { measureLighthouse } from './bench/lighthouse.ts';
 import { measureLive } from './bench/live.ts';
 import { measureShares } from './bench/parts.ts';
 import { measureSlowest, measureThreads } from './bench/records.ts';
@@ -18,6 +19,7 @@ import { measureSeries } from './bench/series.ts';
 import { measureStartUp } from './bench/startUp.ts';
 import type { Measured } from './bench/stopwatch.ts';
 import { readCollection } from './content/readCollection.ts';
+import type { Collection } from './content/types.ts';
 import { exitCodes } from './exitCodes.ts';
 import { places } from './places.ts';
 import { addressOf } from './publish/address.ts';
@@ -30,6 +32,7 @@ const table: CommandTable = {
   options: [
     { name: 'records', value: 'NUMBER', help: 'how many complexes to generate (1000)' },
     { name: 'complexes', value: 'NUMBER', help: 'only the commands at scale: refit, one record changed, build, each in its own process with its memory, and the growth from a tenth of so many' },
+    { name: 'lighthouse', help: 'only the scores of Lighthouse for five pages of the collection in content/' },
     { name: 'without-pages', help: 'leave out the pages, which take longest' },
     { name: 'json', help: 'print the numbers as JSON' },
   ],
@@ -52,7 +55,8 @@ await runCommand(table.name, async () => {
   };
   const folder = mkdtempSync(join(tmpdir(), 'bandstead-bench-'));
   try {
-    if (complexes !== null) await measureScale(folder, complexes, pages, add);
+    if (given.has('lighthouse')) await measureLighthouse(folder, own().group.url, add);
+    else if (complexes !== null) await measureScale(folder, complexes, pages, add);
     else await measureParts(folder, records, pages, add);
   } finally {
     rmSync(folder, { recursive: true, force: true });
@@ -71,8 +75,7 @@ async function measureParts(folder: string, records: number, pages: boolean, add
   const many = join(folder, 'many');
   mkdirSync(many);
   add(await measureThreads((await prepareCollection(many, complexesOnThreads)).collection));
-  const own = readCollection(places.content).collection;
-  if (own) add(await measureSlowest(own));
+  add(await measureSlowest(own()));
   add(await measureSeries());
   add(await measureRefit(folder));
   add(await measureCompare(folder, records));
@@ -82,6 +85,13 @@ async function measureParts(folder: string, records: number, pages: boolean, add
   }
   if (pages) add(await measureLive(folder, records));
   add(await measureStartUp());
+}
+
+/** The group's own collection. */
+function own(): Collection {
+  const { collection, faults } = readCollection(places.content);
+  if (collection === null) throw new Error(`the collection in ${places.content} has ${faults.length} faults: run "npm run check"`);
+  return collection;
 }
 
 function wholeNumber(option: string, typed: string): number {
