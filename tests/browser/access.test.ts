@@ -1,6 +1,7 @@
 import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { violationsEverywhere, violationsOf } from './axe.ts';
+import { shiftsOf, watchShifts } from './shifts.ts';
 import { PAGE_KINDS, type ServedSite, openBrowser, servedSite, watchedPage } from './site.ts';
 
 let browser: Browser;
@@ -43,11 +44,13 @@ test('what axe misses: every drawing has a role, a name and, where large, a desc
   await page.context().close();
 });
 
-test('at 320 pixels no page scrolls sideways; wide tables and figures scroll within themselves', async () => {
+test('at 320 pixels no page scrolls sideways and nothing moves when scripts come; wide tables and figures scroll within themselves', async () => {
   const { page } = await watchedPage(browser, site, { viewport: { width: 320, height: 640 } });
+  await watchShifts(page);
   for (const path of PAGE_KINDS) {
     await page.goto(site.address + path);
     expect(await page.evaluate(() => document.documentElement.scrollWidth), path).toBeLessThanOrEqual(320);
+    expect(await shiftsOf(page), path).toEqual([]);
   }
   await page.context().close();
 });

@@ -5,6 +5,7 @@ import { parseHTML } from 'linkedom';
 import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { pageScriptBytes, partScriptBytes } from './pageScripts.ts';
+import { shiftsOf, watchShifts } from './shifts.ts';
 import { PAGE_KINDS, type ServedSite, builtPages, openBrowser, servedSite, watchedPage } from './site.ts';
 
 const CSP = "default-src 'none'; script-src 'self'; style-src 'self'; img-src 'self' data:; font-src 'self'; connect-src 'self'; base-uri 'none'; form-action 'none'";
@@ -38,12 +39,14 @@ describe.each(['/', '/bands/'])('the site under %s', (base) => {
     expect(followed).toBeGreaterThan(300);
   });
 
-  test('every page opens without a console line, an error or a request to another host', async () => {
+  test('every page opens without a console line, an error, a request to another host, or a part that moves', async () => {
     const { page, trouble } = await watchedPage(browser, site);
+    await watchShifts(page);
     // What hangs on the base path shows on one page of each kind.
     for (const path of base === '/' ? builtPages(site).map((one) => one.path) : PAGE_KINDS) {
       await page.goto(site.address + path);
       expect(trouble, path).toEqual([]);
+      expect(await shiftsOf(page), path).toEqual([]);
     }
     await page.context().close();
   });
