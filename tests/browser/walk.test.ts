@@ -1,6 +1,7 @@
 import { existsSync, readFileSync, readdirSync, statSync } from 'node:fs';
 import { join } from 'node:path';
 import { gzipSync } from 'node:zlib';
+import { HtmlValidate } from 'html-validate';
 import { parseHTML } from 'linkedom';
 import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
@@ -9,6 +10,18 @@ import { shiftsOf, watchShifts } from './shifts.ts';
 import { PAGE_KINDS, type ServedSite, builtPages, openBrowser, servedSite, watchedPage } from './site.ts';
 
 const CSP = "default-src 'none'; script-src 'self'; style-src 'self'; img-src 'self' data:; font-src 'self'; connect-src 'self'; base-uri 'none'; form-action 'none'";
+
+const validator = new HtmlValidate({
+  extends: ['html-validate:recommended'],
+  rules: {
+    // Answers come while one types: there is nothing to submit.
+    'wcag/h32': 'off',
+    // A text field is one without saying so.
+    'no-implicit-input-type': 'off',
+    // Anchors of releases hold their points: release-1.1.0.
+    'valid-id': ['error', { relaxed: true }],
+  },
+});
 
 let browser: Browser;
 beforeAll(async () => { browser = await openBrowser(); });
@@ -81,6 +94,17 @@ describe.each(['/', '/bands/'])('the site under %s', (base) => {
       expect(part).toBeGreaterThan(10_000);
       expect(part).toBeLessThan(40_000);
     }
+  });
+
+  test('a page of each kind is valid HTML', async () => {
+    const pages = new Map(builtPages(site).map(({ path, html }) => [path, html]));
+    const faults: string[] = [];
+    for (const path of base === '/' ? PAGE_KINDS : ['' as const]) {
+      const { results } = await validator.validateString(pages.get(path)!, path);
+      faults.push(...results.flatMap(({ messages }) => messages.map(({ ruleId, message, line, column }) => `${path} ${line}:${column} ${ruleId}: ${message}`)));
+    }
+    expect(faults).toEqual([]);
+    expect((await validator.validateString('<!DOCTYPE html><html lang="en"><head><title>x</title></head><body><p><div>x</div></p></body></html>', 'x')).valid).toBe(false);
   });
 
   test('every page has one heading of the first order, and every id once', () => {

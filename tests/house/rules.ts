@@ -124,8 +124,8 @@ const mayNameOrigin = 'DEVELOPERS.md';
 
 const foreign: readonly RegExp[] = [
   new RegExp(`\\b${'ses'}${'sions?'}\\b`, 'i'),
-  // A reducing agent and the user agent are chemistry and the web.
-  new RegExp(`(?<!ing[ -]|user[ -])\\b${'ag'}${'ents?'}\\b`, 'i'),
+  // A reducing agent is chemistry, the user agent and agents of proxies are the web.
+  new RegExp(`(?<!ing[ -]|user[ -]|proxy-)\\b${'ag'}${'ents?'}\\b(?!-base)`, 'i'),
   new RegExp(`\\b${'language'} ${'models?'}\\b`, 'i'),
   new RegExp(`(?<![\\w.])/${'(work|tmp|root|home)'}/`),
   new RegExp(`\\b${'regis'}${'try'}\\.[a-z0-9-]+\\.[a-z]{2,}`, 'i'),
