@@ -124,7 +124,7 @@ const mayNameOrigin = 'DEVELOPERS.md';
 
 const foreign: readonly RegExp[] = [
   new RegExp(`\\b${'ses'}${'sions?'}\\b`, 'i'),
-  // A reducing agent is chemistry, the user agent and agents of proxies are the web.
+  // The word is chemistry in a reducing one, and the web in the user and the proxy kind.
   new RegExp(`(?<!ing[ -]|user[ -]|proxy-)\\b${'ag'}${'ents?'}\\b(?!-base)`, 'i'),
   new RegExp(`\\b${'language'} ${'models?'}\\b`, 'i'),
   new RegExp(`(?<![\\w.])/${'(work|tmp|root|home)'}/`),
