@@ -23,8 +23,8 @@ const fixesANumber = 3;
 
 type Normal = number[][];
 
-/** Weighted normal equations in (Delta, B, C), scaled by the parameters: bands of the fit and what was assumed. */
-function normalOf(assigned: readonly Assigned[], fit: Fit): Normal {
+/** Weighted normal equations in (Delta, B, C), scaled by the parameters: bands of the fit and, unless C is to be free, what was assumed. */
+function normalOf(assigned: readonly Assigned[], fit: Fit, cFree: boolean): Normal {
   const { at } = fit.solutions[0]!;
   const sizes = [at.delta, at.racahB, at.racahC];
   const normal: Normal = [[0, 0, 0], [0, 0, 0], [0, 0, 0]];
@@ -33,7 +33,7 @@ function normalOf(assigned: readonly Assigned[], fit: Fit): Normal {
     const { delta, racahB, racahC } = fit.calculated[k]!.gradient;
     addRow(normal, [delta, racahB, racahC], sizes, 1 / (symmetricU(observation) ** 2 + fit.floors[k]! ** 2));
   });
-  if (fit.mode !== 'field, B, C') {
+  if (fit.mode !== 'field, B, C' && !cFree) {
     // What was assumed enters as one more datum, C/B; a floor on its u keeps an exact ratio finite.
     const u = Math.max(fit.ratio.u, 1e-6 * fit.ratio.value);
     addRow(normal, [0, -at.racahC / at.racahB ** 2, 1 / at.racahB], sizes, 1 / u ** 2);
@@ -49,7 +49,8 @@ function addRow(normal: Normal, slopes: readonly number[], sizes: readonly numbe
  * Unobserved bands ranked by how much they would shrink u(B), u(C) and u(Delta), most helpful first.
  *
  * Each is added to the weighted normal equations at the present solution with its own model floor; the assumed
- * C/B counts as a datum with its own uncertainty.
+ * C/B counts as a datum with its own uncertainty. As in the fit, a line helps where C becomes free and determined with it, or where
+ * nothing else tells of B.
  */
 export function helpfulBands(
   ion: GroundCase, assigned: readonly Assigned[], fit: Fit, parameters: readonly Parameter[], predicted: readonly PredictedBand[], policy: Policy,
@@ -57,7 +58,6 @@ export function helpfulBands(
   const { at, ground } = fit.solutions[0]!;
   if (at.racahB <= 0) return [];
   const sizes = [at.delta, at.racahB, at.racahC];
-  const base = normalOf(assigned, fit);
   const ceilings = [policy.ceilings.delta, policy.ceilings.racahB, policy.ceilings.racahC];
   const now = parameters.slice(0, 3).map((parameter) => parameter.uTotal);
   const found = predicted.flatMap((band) => {
@@ -65,14 +65,20 @@ export function helpfulBands(
     // Broad spin-forbidden bands are hardly ever seen under spin-allowed ones.
     if (!spinAllowed && !sameConfiguration) return [];
     const { gradient } = transitionsAt(ion, ground, [band.label], at)[0]!;
-    const normal = base.map((row) => [...row]);
-    addRow(normal, [gradient.delta, gradient.racahB, gradient.racahC], sizes, 1 / ((spinAllowed ? readBroad : readLine) ** 2 + floorOf(ion, band.label, policy) ** 2));
-    const spread = inversePositive(normal);
-    if (!spread) return [];
-    const then = sizes.map((size, i) => Math.sqrt(spread[i]![i]!) * size);
+    const weight = 1 / ((spinAllowed ? readBroad : readLine) ** 2 + floorOf(ion, band.label, policy) ** 2);
+    const uWith = (cFree: boolean): number[] | null => {
+      const more = normalOf(assigned, fit, cFree);
+      addRow(more, [gradient.delta, gradient.racahB, gradient.racahC], sizes, weight);
+      return inversePositive(more)?.map((row, i) => Math.sqrt(row[i]!) * sizes[i]!) ?? null;
+    };
+    const free = uWith(true);
+    const cIsFixed = (!spinAllowed || fit.mode === 'field, B, C') && free !== null && free[2]! <= ceilings[2]! * sizes[2]!;
+    if (!spinAllowed && !cIsFixed && fit.mode !== 'field') return [];
+    const then = cIsFixed ? free : uWith(false);
+    if (!then) return [];
     const gains = (['Delta', 'B', 'C'] as const).flatMap((parameter: ParameterName, i): Gain[] => {
       const before = now[i] ?? null;
-      const publishable = then[i]! <= ceilings[i]! * sizes[i]!;
+      const publishable = then[i]! <= ceilings[i]! * sizes[i]! && (i < 2 || cIsFixed);
       return publishable && (before === null || then[i]! < worthwhile * before) ? [{ parameter, uNow: before, uThen: then[i]! }] : [];
     });
     if (gains.length === 0) return [];

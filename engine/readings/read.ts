@@ -87,8 +87,7 @@ export function readMeasurement(measurement: Measurement, policy: Policy, freeIo
 function rivalry(chosen: ScoredReading, rivals: readonly ScoredReading[], policy: Policy): Rivalry {
   const [best] = rivals;
   // A reading that fixes too little is not beaten by one that fixes more; one that no parameters reproduce is.
-  const beatable = Number.isFinite(chosen.score) || (!isFit(chosen.outcome) && chosen.outcome.status === 'refused') || isFit(chosen.outcome);
-  if (!best || !beatable) return noRivalry;
+  if (!best || !(isFit(chosen.outcome) || chosen.outcome.status === 'refused')) return noRivalry;
   const difference = best.score - chosen.score;
   if (!(difference <= policy.rivalMargin)) return noRivalry;
   const near = rivals.filter((rival) => rival.score - chosen.score <= policy.rivalMargin);
@@ -106,14 +105,12 @@ function hasSameNumbers(rival: ScoredReading, chosen: ScoredReading): boolean {
   return (theirs.delta - own.delta) ** 2 <= total[0]![0]! && (theirs.racahB - own.racahB) ** 2 <= total[1]![1]!;
 }
 
-/** What a rival makes of the bands, of what ion where that differs from the declared one, and with what C where it fits one. */
+/** What a rival makes of the bands, and of what ion where that differs from the declared one. */
 function rivalWords(rival: ScoredReading, chosen: ScoredReading): string {
-  const { outcome } = rival;
   const bands = rival.assigned.map(({ label, observation }) => `${shownLabel(label, rival.ion.electrons)} ${wholeNumber(observation.position)}`).join(', ');
   const other = [
     ...(rival.ion.geometry === chosen.ion.geometry ? [] : [rival.ion.geometry]),
     ...(rival.ion.multiplicity === chosen.ion.multiplicity ? [] : [`multiplicity ${rival.ion.multiplicity}`]),
-    ...(isFit(outcome) && outcome.mode === 'field, B, C' ? [`C = ${wholeNumber(outcome.solutions[0]!.at.racahC)} cm⁻¹`] : []),
   ];
   return `${bands}${other.length === 0 ? '' : ` (${other.join(', ')})`}`;
 }

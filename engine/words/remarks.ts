@@ -26,7 +26,7 @@ export const searchStopped = 'These bands may be read in more ways than were tri
 export function rivalSentence(rival: { readonly best: 'near' | 'better' | null; readonly sameNumbers: boolean }, secondSolution: boolean): string {
   const parts = [
     rival.best === 'better' ? ' Another reading fits these bands clearly better: see the rivals.' : '',
-    rival.best === 'near' ? (rival.sameNumbers ? ' Other names for these bands fit as well, and leave Delta and B as they are: see the rivals.' : ' Another reading fits these bands as well: see the rivals.') : '',
+    rival.best === 'near' ? (rival.sameNumbers ? ' Other names for these bands fit as well and leave Delta and B as they are: see the rivals.' : ' Another reading fits these bands as well: see the rivals.') : '',
     secondSolution ? ' Two solutions of this reading fit equally well; both are listed.' : '',
   ];
   return parts.join('');

@@ -285,8 +285,8 @@ describe('traps of the trade end in the right refusal or caution', () => {
 
   test('a rival that only gives neighbouring lines other names is told quietly; one that moves Delta or B is not', () => {
     const lines = (wide: number) => read(measurement('Cr(III)', [termBand(14_893, '2Eg(G)', 10, { kind: 'line' }), termBand(17_920, '4T2g'), termBand(22_408, '2T2g(G)', 10, { kind: 'line' }), termBand(24_900, '4T1g(F)', wide)], { donors: 6 }));
-    expect(lines(100).reason).toContain('Other names for these bands fit as well, and leave Delta and B as they are');
-    expect(lines(100).cautions.find(({ code }) => code === 'NEAR_RIVAL')!.text).toMatch(/^Other names for these bands .*: a2T1g 14\u2009893,.* \(C = \d{4} cm⁻¹\)\.$/);
+    expect(lines(100).reason).toContain('Other names for these bands fit as well and leave Delta and B as they are');
+    expect(lines(100).cautions.find(({ code }) => code === 'NEAR_RIVAL')!.text).toMatch(/^Other names for these bands .*: a2T1g 14\u2009893,/);
     const cobalt = read(measurement('Co(II)', [termBand(5460, '4T2g'), termBand(14_700, '4T1g(P)')], { multiplicity: 4 }));
     expect(cobalt.reason).toContain('Another reading fits these bands as well');
   });
