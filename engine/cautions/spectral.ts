@@ -1,4 +1,5 @@
 import { perCent } from '../words/numbers.ts';
+import { otherNames } from '../words/remarks.ts';
 import type { Caution } from './types.ts';
 
 /**
@@ -68,7 +69,7 @@ export function spectralCautions(facts: SpectralFacts): readonly Caution[] {
   };
   add(facts.groundContradicted, 'SPIN_CONTRADICTS_FIT', 'The fitted parameters put another spin state lowest than the one declared.');
   add(facts.rival === 'better', 'BETTER_RIVAL', `Another reading fits these bands clearly better than the chosen one: ${facts.rivalWords}.`);
-  add(facts.rival === 'near', 'NEAR_RIVAL', `${facts.rivalSameNumbers ? 'Other names for these bands fit as well and leave Delta and B as they are' : 'Another reading fits these bands as well as the chosen one'}, within the policy’s margin: ${facts.rivalWords}.`);
+  add(facts.rival === 'near', 'NEAR_RIVAL', `${facts.rivalSameNumbers ? otherNames : 'Another reading fits these bands as well as the chosen one'}, within the policy’s margin: ${facts.rivalWords}.`);
   add(facts.rival !== null && facts.rivalGeometry, 'GEOMETRY_RIVAL', 'The other geometry fits these bands as well.');
   add(facts.forbiddenUsedAsAllowed.length > 0, 'WEAK_FOR_SPIN_ALLOWED', `Weak as a spin-forbidden band, yet used as spin-allowed: ${facts.forbiddenUsedAsAllowed.join(', ')}.`);
   add(facts.chargeTransferUsed.length > 0, 'STRONG_AS_CHARGE_TRANSFER', `As strong as charge transfer, yet used as a d-d band: ${facts.chargeTransferUsed.join(', ')}.`);

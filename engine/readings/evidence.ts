@@ -99,11 +99,9 @@ function unseenEvidence(measurement: Measurement, ion: GroundCase, assigned: rea
   });
 }
 
-const corners = { octahedral: 6, tetrahedral: 4 } as const;
-
 /** The formula of the sample speaks against a geometry of another number of corners; what absorbs may be another species all the same. */
 function donorEvidence({ donors }: Measurement, { geometry }: GroundCase): Evidence[] {
-  return donors === null || donors === corners[geometry] ? [] : [{ code: 'donors', penalty: evidenceWeights.donors, label: '', value: donors }];
+  return donors === null || donors === (geometry === 'octahedral' ? 6 : 4) ? [] : [{ code: 'donors', penalty: evidenceWeights.donors, label: '', value: donors }];
 }
 
 /** Everything that speaks against a fitted reading; entries without a penalty are left out. */

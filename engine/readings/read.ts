@@ -99,7 +99,8 @@ function rivalry(chosen: ScoredReading, rivals: readonly ScoredReading[], policy
 
 /** Whether two readings of one geometry and spin differ in the names of bands only: their Delta and B agree within one total uncertainty. */
 function hasSameNumbers(rival: ScoredReading, chosen: ScoredReading): boolean {
-  if (rival.ion.geometry !== chosen.ion.geometry || rival.ion.multiplicity !== chosen.ion.multiplicity || !isFit(rival.outcome) || !isFit(chosen.outcome)) return false;
+  const alike = rival.ion.geometry === chosen.ion.geometry && rival.ion.multiplicity === chosen.ion.multiplicity;
+  if (!alike || !isFit(rival.outcome) || !isFit(chosen.outcome)) return false;
   const [theirs, own] = [rival.outcome.solutions[0]!.at, chosen.outcome.solutions[0]!.at];
   const { total } = chosen.outcome;
   return (theirs.delta - own.delta) ** 2 <= total[0]![0]! && (theirs.racahB - own.racahB) ** 2 <= total[1]![1]!;

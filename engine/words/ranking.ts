@@ -36,7 +36,7 @@ export function evidenceWords({ code, penalty, label, value }: EvidenceFacts): s
     case 'forbidden and broad':
       return `${label} is spin-forbidden, yet the band is broad`;
     case 'donors':
-      return `the ligands of the record bind with ${value} donor atoms`;
+      return `the record has ${value} donor atoms`;
     default:
       return code;
   }

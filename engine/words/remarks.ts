@@ -20,13 +20,17 @@ export function doubletSentence(order: { gap: number; u: number; decidable: bool
 }
 
 /** What is said where bands may be read in more ways than are tried. */
-export const searchStopped = 'These bands may be read in more ways than were tried: better readings may exist. Terms, or lists of candidates, typed for some bands shorten the search.';
+export const searchStopped = 'Not every way to read these bands was tried: better readings may exist. Type terms or candidates for some.';
+
+/** Of a rival that has the Delta and B of the chosen reading. */
+export const otherNames = 'Other names for these bands fit as well and leave Delta and B as they are';
 
 /** What the verdict adds where a rival or a second solution stands beside the chosen reading. */
 export function rivalSentence(rival: { readonly best: 'near' | 'better' | null; readonly sameNumbers: boolean }, secondSolution: boolean): string {
+  const near = rival.sameNumbers ? otherNames : 'Another reading fits these bands as well';
   const parts = [
     rival.best === 'better' ? ' Another reading fits these bands clearly better: see the rivals.' : '',
-    rival.best === 'near' ? (rival.sameNumbers ? ' Other names for these bands fit as well and leave Delta and B as they are: see the rivals.' : ' Another reading fits these bands as well: see the rivals.') : '',
+    rival.best === 'near' ? ` ${near}: see the rivals.` : '',
     secondSolution ? ' Two solutions of this reading fit equally well; both are listed.' : '',
   ];
   return parts.join('');

@@ -280,7 +280,7 @@ describe('traps of the trade end in the right refusal or caution', () => {
     expect(told([90, 550], 6)).toContain('GEOMETRY_RIVAL');
     const strong = measurement('Co(II)', [termBand(5460, '4T2g', 100, { epsilon: 90 }), termBand(14_700, '4T1g(P)', 100, { epsilon: 550 })], { multiplicity: 4, donors: 6 });
     const rival = readWithRivals(strong, defaultPolicy, freeIon('published', strong.ion)).rivals.find(({ geometry }) => geometry === 'tetrahedral');
-    expect(rival!.ranking).toContain('the ligands of the record bind with 6 donor atoms');
+    expect(rival!.ranking).toContain('the record has 6 donor atoms');
   });
 
   test('a rival that only gives neighbouring lines other names is told quietly; one that moves Delta or B is not', () => {
