@@ -1,8 +1,8 @@
 // Finds and opens the files of a content folder, within the limits of the format.
 
 import { createHash } from 'node:crypto';
-import { lstatSync, readdirSync, readFileSync, statSync } from 'node:fs';
-import { join } from 'node:path';
+import { lstatSync, readdirSync, readFileSync, realpathSync, statSync } from 'node:fs';
+import { isAbsolute, join, relative, sep } from 'node:path';
 import { badId } from './ids.ts';
 import { createReporter, typedText } from './report.ts';
 import type { Finding } from './report.ts';
@@ -119,6 +119,7 @@ function isPlainName(name: string): boolean {
 export function openFile(directory: string, { file, id }: FoundFile): OpenedFile | Finding {
   const path = join(directory, file);
   try {
+    if (leadsOutside(directory, path)) return { code: 'FILE_UNREADABLE', found: 'a link to a place outside the content folder', expected: 'a file of the content folder: all that is published stands in it', mend: 'put the file itself here' };
     const bytes = bytesOf(path);
     if (bytes === null) return { code: 'FILE_UNREADABLE', found: 'something that is not a file', expected: 'a text file', mend: 'remove it' };
     if (typeof bytes === 'number') return { code: 'FILE_TOO_LARGE', found: `${bytes} bytes`, expected: `at most ${largestFile} bytes`, mend: 'keep raw data in files of their own and name them by raw:' };
@@ -129,6 +130,12 @@ export function openFile(directory: string, { file, id }: FoundFile): OpenedFile
     if (error instanceof TypeError) return { code: 'NOT_UTF8', found: 'bytes that are not UTF-8 text', expected: 'a text file in UTF-8', mend: 'save the file again with the encoding UTF-8' };
     return { code: 'FILE_UNREADABLE', found: reason(error), expected: 'a file that can be opened', mend: linkAdvice(path) };
   }
+}
+
+/** Whether a file, or a folder on the way to it, is a link that leaves the content folder. */
+function leadsOutside(directory: string, path: string): boolean {
+  const way = relative(realpathSync.native(directory), realpathSync.native(path));
+  return isAbsolute(way) || way.split(sep)[0] === '..';
 }
 
 const utf8 = new TextDecoder('utf-8', { fatal: true, ignoreBOM: false });

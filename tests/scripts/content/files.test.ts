@@ -54,6 +54,32 @@ describe('files that no repository holds', () => {
     expect(codes()).toEqual(['complexes/cr-am6.yaml FILE_UNREADABLE']);
   });
 
+  test('a link to a file, or of a folder, outside the content folder is reported; a link within it is read', () => {
+    const outside = mkdtempSync(join(tmpdir(), 'outside-'));
+    try {
+      mkdirSync(join(folder, 'complexes'));
+      writeFileSync(join(outside, 'cr-am6.yaml'), record);
+      writeFileSync(join(outside, 'smith-1998.yaml'), 'title: T\n');
+      symlinkSync(join(outside, 'cr-am6.yaml'), join(folder, 'complexes/cr-am6.yaml'));
+      symlinkSync(outside, join(folder, 'sources'));
+      expect(codes().filter((one) => one.endsWith('FILE_UNREADABLE'))).toEqual(expect.arrayContaining(['complexes/cr-am6.yaml FILE_UNREADABLE', 'sources/smith-1998.yaml FILE_UNREADABLE']));
+      expect(readCollection(folder).faults.find(({ file }) => file === 'complexes/cr-am6.yaml')).toMatchObject({ found: 'a link to a place outside the content folder', mend: 'put the file itself here' });
+      rmSync(join(folder, 'sources'));
+      rmSync(join(folder, 'complexes/cr-am6.yaml'));
+      write('complexes/cr-am6.yaml', record);
+      symlinkSync(join(folder, 'complexes/cr-am6.yaml'), join(folder, 'complexes/cr-am6-again.yaml'));
+      expect(codes()).not.toContain('complexes/cr-am6-again.yaml FILE_UNREADABLE');
+    } finally {
+      rmSync(outside, { recursive: true });
+    }
+  });
+
+  test.each([['little end first', [0xff, 0xfe], 'utf16le'], ['without a mark', [], 'utf16le']] as const)('UTF-16, %s, is refused with the way to mend it', (_, mark, encoding) => {
+    write('complexes/cr-am6.yaml', Buffer.concat([Buffer.from(mark), Buffer.from(record, encoding)]));
+    expect(codes()).toEqual(['complexes/cr-am6.yaml NOT_UTF8']);
+    expect(readCollection(folder).faults[0]!.mend).toContain('UTF-8');
+  });
+
   test('ids that differ in capitals or ending alone are one id', () => {
     write('complexes/cr-am6.yaml', record);
     write('complexes/cr-am6.yml', record);
